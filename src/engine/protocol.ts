@@ -1,0 +1,60 @@
+import type { Analysis, Run, Want } from '../core/dynamics/run.ts';
+import type { Frame } from '../core/frame/frame.ts';
+import type { RecordAnswers, RecordReading } from '../core/motion/reading.ts';
+
+/**
+ * What crosses between the page and a worker: types only, plain data and transferred buffers. A job is one motion or one
+ * file. The worker works in slices of at most 20 ms and returns to its message loop between them.
+ */
+
+/** One frame under one motion; the samples were sent before, by digest. */
+export interface RunRequest {
+  /** Digest of frame: the worker keeps the last prepared frame by it. */
+  readonly frameKey: string;
+  readonly frame: Frame;
+  readonly analysis: Analysis;
+  readonly motion: { readonly samples: string; readonly interval: number; readonly scale: number };
+  readonly want: Want;
+}
+
+export type Reply<T> =
+  | { readonly status: 'done'; readonly value: T }
+  /** A newer job for the same question took its place, or it was cancelled. */
+  | { readonly status: 'superseded' }
+  /** The job threw, or its worker died twice. */
+  | { readonly status: 'failed'; readonly message: string };
+
+/** The engine as state sees it: the pool of workers, or the same thread (inline), with the same bits. */
+export interface Engine {
+  /** Keep samples [m/s2] for later jobs; sent to each worker once, when it first needs them. */
+  putMotion(digest: string, samples: Float64Array): void;
+  hasMotion(digest: string): boolean;
+  dropMotion(digest: string): void;
+  /** A newer job for the same question supersedes the older one. Lower priority numbers go first. Every promise settles. */
+  run(
+    question: string,
+    request: RunRequest,
+    options?: { readonly priority?: number; readonly onProgress?: (share: number) => void },
+  ): Promise<Reply<Run>>;
+  /** Read one record file off the main thread. The buffer is copied, so it can be read again with other answers. */
+  read(question: string, file: string, bytes: ArrayBuffer, answers: RecordAnswers): Promise<Reply<ReadAnswer>>;
+  /** Cancels the job of that question, if there is one. */
+  cancel(question: string): void;
+  /** Ends all workers; open promises settle as superseded. */
+  dispose(): void;
+}
+
+export interface ReadAnswer {
+  readonly reading: RecordReading;
+  /** Digest of the SI samples of `reading.motion`; null while there is none. */
+  readonly samples: string | null;
+  /** The raw text as lines for the dialog: the first lines and those around each fault, with their numbers. */
+  readonly excerpt: readonly { readonly line: number; readonly text: string }[];
+  readonly lines: number;
+  /** Acceleration [m/s2] and velocity [m/s] thinned for drawing, pairs of smallest and largest; null without interval or unit. */
+  readonly preview: {
+    readonly time: Float64Array;
+    readonly acceleration: Float64Array;
+    readonly velocity: Float64Array;
+  } | null;
+}
