@@ -1,4 +1,5 @@
 import type { Limits } from '../core/checks/limits.ts';
+import type { PreparedFrame } from '../core/doors.ts';
 import type { Analysis } from '../core/dynamics/run.ts';
 import type { Result } from '../core/fault.ts';
 import type { Frame } from '../core/frame/frame.ts';
@@ -7,6 +8,8 @@ import type { Project } from './project.ts';
 /** The document as plain numbers: what the calculation needs and nothing else. */
 export interface Case {
   readonly frame: Frame;
+  /** Modes, matrices and damping of the frame, made once here. */
+  readonly prepared: PreparedFrame;
   readonly analysis: Analysis;
   readonly limits: Limits;
   /** The used motions, in document order. */
