@@ -1,0 +1,54 @@
+import { type ReactNode, useEffect, useId, useRef } from 'react';
+import { IconButton } from './Button.tsx';
+
+export interface DialogProps {
+  readonly title: string;
+  /** Called by Esc, by the cross and by a click beside the dialog (where `sticky` is not set). */
+  readonly onClose: () => void;
+  /** [px] */
+  readonly width?: number;
+  /** Buttons at the foot, the main one last. */
+  readonly foot?: ReactNode;
+  /** A click beside it does not close it: for dialogs that hold unsaved answers. */
+  readonly sticky?: boolean;
+  readonly children: ReactNode;
+}
+
+/** A modal dialog: shown while it is mounted. The browser's own element traps the focus; it goes back to where it came from. */
+export function Dialog({ title, onClose, width = 560, foot, sticky = false, children }: DialogProps) {
+  const element = useRef<HTMLDialogElement>(null);
+  const heading = useId();
+  useEffect(() => {
+    const dialog = element.current;
+    const before = document.activeElement;
+    if (dialog !== null && !dialog.open) dialog.showModal();
+    return () => {
+      dialog?.close();
+      if (before instanceof HTMLElement || before instanceof SVGElement) before.focus();
+    };
+  }, []);
+  return (
+    // biome-ignore lint/a11y/useKeyWithClickEvents: the click beside it only doubles Esc, which the element answers itself
+    <dialog
+      ref={element}
+      className="dialog"
+      style={{ width }}
+      aria-labelledby={heading}
+      onCancel={(event) => {
+        event.preventDefault();
+        onClose();
+      }}
+      onClick={(event) => {
+        if (!sticky && event.target === element.current) onClose();
+      }}
+      onKeyDown={(event) => event.stopPropagation()}
+    >
+      <header className="dialog-head">
+        <h2 id={heading}>{title}</h2>
+        <IconButton icon="close" label="Close" keys="Esc" onClick={onClose} />
+      </header>
+      <div className="dialog-body">{children}</div>
+      {foot !== undefined && <footer className="dialog-foot">{foot}</footer>}
+    </dialog>
+  );
+}
