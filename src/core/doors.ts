@@ -1,30 +1,23 @@
+/**
+ * The doors of the core: what the worker, the batch command and the tests come in by. Nobody inside core imports this file.
+ */
+import { type March, march, startMarch } from './dynamics/march.ts';
+import { problemOf } from './dynamics/problem.ts';
 import type { Run, RunCase, Want } from './dynamics/run.ts';
-import type { Result } from './fault.ts';
-import type { Frame } from './frame/frame.ts';
-import type { Mode } from './frame/modes.ts';
+import { type PreparedFrame, prepareFrame } from './frame/prepare.ts';
 
-/** Everything a run needs of the frame that does not depend on the motion: made once, used for each motion. */
-export interface PreparedFrame {
-  readonly frame: Frame;
-  readonly modes: readonly Mode[];
-  // (matrices and damping constants follow; see frame/)
+export { stepErrorOf } from './dynamics/evidence.ts';
+export { type PreparedFrame, prepareFrame } from './frame/prepare.ts';
+export type RunUnderWay = March;
+
+/** A run to be marched in slices. @throws RangeError on a case that `caseOf` would have refused */
+export function startRun(prepared: PreparedFrame, runCase: RunCase, want: Want): RunUnderWay {
+  return startMarch(problemOf(prepared, runCase), runCase.analysis.method, want);
 }
 
-/** Modes, matrices and damping of a frame, or why it cannot stand (unstable under gravity, damping not positive ...). */
-export declare function prepareFrame(frame: Frame): Result<PreparedFrame>;
-
-/** A run under way: call `advance` until it says true, then `finish`. Nothing is allocated in `advance`. */
-export interface RunUnderWay {
-  readonly steps: number;
-  readonly done: number;
-  /** Marches at most so many steps further; true when the run is over. */
-  advance(steps: number): boolean;
-  /** The result so far; status `cancelled` where it is not over. */
-  finish(): Run;
+/** The whole run at once: for the batch command and the tests. @throws RangeError on a case that `caseOf` would have refused */
+export function runCase(runCase: RunCase, want: Want): Run {
+  const prepared = prepareFrame(runCase.frame);
+  if (!prepared.ok) throw new RangeError(`frame: ${prepared.faults[0].message}`);
+  return march(problemOf(prepared.value, runCase), runCase.analysis.method, want);
 }
-
-export declare function startRun(prepared: PreparedFrame, runCase: RunCase, want: Want): RunUnderWay;
-/** The whole run at once: the door for the batch command and the tests. Throws on a case that `caseOf` would refuse. */
-export declare function runCase(runCase: RunCase, want: Want): Run;
-/** 2 x the largest over the storeys of |Di(h) - Di(h/2)| over the largest drift of the run. */
-export declare function stepErrorOf(run: Run, half: Run): number;

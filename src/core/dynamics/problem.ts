@@ -1,0 +1,44 @@
+import type { PreparedFrame } from '../frame/prepare.ts';
+import { groundAtSteps, stepCount } from './ground.ts';
+import { type Method, methodOf } from './methods.ts';
+import type { RunCase } from './run.ts';
+import { stabilityFault, stepOf } from './steps.ts';
+
+/** One march: a prepared frame, the ground at each step, a scheme. Immutable; all scratch lives in the workspace. */
+export interface Problem {
+  readonly prepared: PreparedFrame;
+  readonly method: Method;
+  /** [s] */
+  readonly step: number;
+  readonly steps: number;
+  /** Scaled ground acceleration at each step, length steps + 1 [m/s2]. */
+  readonly ground: Float64Array;
+  /** Drift at which the run is stopped, length storeys [m]; Infinity where it is not (linear without P-Delta). */
+  readonly stopDrift: Float64Array;
+  /** First step of the last fundamental period of the run. */
+  readonly residualFrom: number;
+}
+
+/** @throws RangeError for a step or scheme that a validated case does not have */
+export function problemOf(prepared: PreparedFrame, { analysis, motion }: RunCase): Problem {
+  const method = methodOf(analysis.method);
+  const step = stepOf(analysis.step, motion.interval);
+  if (!step.ok) throw new RangeError(`step: ${step.faults[0].message}`);
+  const { size, parts } = step.value;
+  const unstable = stabilityFault(prepared.modes, analysis.method, size);
+  if (unstable) throw new RangeError(`step: ${unstable.message}`);
+  if (motion.acceleration.length < 2)
+    throw new RangeError(`motion: ${motion.acceleration.length} samples, expected at least 2`);
+  const steps = stepCount(motion.acceleration.length, parts, size, analysis.tail);
+  const { frame, arrays, modes } = prepared;
+  const stop = frame.pDelta ? analysis.stopDrift : Number.POSITIVE_INFINITY;
+  return {
+    prepared,
+    method,
+    step: size,
+    steps,
+    ground: groundAtSteps(motion.acceleration, motion.scale, parts, steps),
+    stopDrift: arrays.height.map((h) => stop * h),
+    residualFrom: Math.max(0, steps - Math.round(modes[0].period / size)),
+  };
+}

@@ -1,0 +1,52 @@
+import type { Fault, Result } from '../fault.ts';
+import { type DampingMatrix, dampingMatrix, modalDampingRatios } from './damping.ts';
+import type { Frame } from './frame.ts';
+import { type FrameArrays, frameArrays } from './matrices.ts';
+import { type Mode, modesOf } from './modes.ts';
+
+/** Everything a run needs of the frame that does not depend on the motion: made once, used for each motion. */
+export interface PreparedFrame {
+  readonly frame: Frame;
+  readonly arrays: FrameArrays;
+  readonly modes: readonly Mode[];
+  readonly damping: DampingMatrix;
+  /** Ratio of critical damping of each mode [-]. */
+  readonly dampingRatios: Float64Array;
+}
+
+/**
+ * Modes, matrices and damping of a frame whose numbers have been validated, or why it cannot stand: a storey unstable
+ * under gravity (k - P / h not above 0; sufficient and necessary storey by storey, published check F2), or damping that
+ * comes out negative in a mode.
+ */
+export function prepareFrame(frame: Frame): Result<PreparedFrame> {
+  const arrays = frameArrays(frame);
+  const faults: Fault[] = [];
+  for (let i = 0; i < arrays.n; i++) {
+    if (!(arrays.netStiffness[i] > 0)) {
+      faults.push({
+        code: 'unstable-under-gravity',
+        where: `frame.storeys[${i}].stiffness`,
+        message: `storey ${i + 1} is unstable under gravity: its stiffness of ${arrays.stiffness[i].toPrecision(4)} N/m is not above P/h = ${(
+          arrays.gravityAbove[i] / arrays.height[i]
+        ).toPrecision(4)} N/m`,
+        mend: 'Make the storey stiffer, lighten what stands above it, or turn P-Delta off',
+      });
+    }
+  }
+  if (faults.length > 0) return { ok: false, faults };
+  const modes = modesOf(arrays);
+  const damping = dampingMatrix(frame.damping, arrays, modes);
+  const dampingRatios = modalDampingRatios(damping, arrays, modes);
+  const negative = dampingRatios.findIndex((ratio) => ratio < -1e-12);
+  if (negative >= 0) {
+    const fault: Fault = {
+      code: 'negative-damping',
+      where: 'frame.damping.ratios',
+      message: `mode ${negative + 1} comes out damped by ${(100 * dampingRatios[negative]).toFixed(2)} %: damping below zero feeds energy in`,
+      mend: 'Choose ratios, or modes, for which no mode falls below zero',
+    };
+    return { ok: false, faults: [fault] };
+  }
+  return { ok: true, value: { frame, arrays, modes, damping, dampingRatios } };
+}
