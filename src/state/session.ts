@@ -1,7 +1,6 @@
-/**
- * What is neither saved with the project nor undone: the cursor, the selection, the theme. CONTRACT (filled in by the
- * state room): `useSession(selector)`, `sessionStore`. System and theme are remembered in localStorage.
- */
+import { useStore } from 'zustand';
+import { createStore } from 'zustand/vanilla';
+
 export interface Selection {
   /** Storey index from the ground, and column key. */
   readonly storey: number;
@@ -11,6 +10,7 @@ export interface Selection {
   readonly anchorColumn: string;
 }
 
+/** What is neither saved with the project nor undone. System and theme are remembered in localStorage. */
 export interface SessionState {
   readonly system: 'si' | 'us';
   readonly theme: 'system' | 'light' | 'dark';
@@ -29,4 +29,58 @@ export interface SessionState {
   readonly dialog: 'none' | 'import' | 'tables' | 'keys' | 'analysis' | 'columns';
   /** A short word at the foot (an undo across steps, a file saved); null: none. */
   readonly toast: string | null;
+}
+
+const REMEMBERED = 'swaybook.session';
+
+export const sessionStore = createStore<SessionState>(() => ({
+  system: 'si',
+  theme: 'system',
+  selection: null,
+  storey: null,
+  motion: null,
+  time: 0,
+  playing: false,
+  range: null,
+  lit: null,
+  dialog: 'none',
+  toast: null,
+  ...remembered(),
+}));
+
+export function useSession<T>(selector: (state: SessionState) => T): T {
+  return useStore(sessionStore, selector);
+}
+
+export function setSession(change: Partial<SessionState>): void {
+  sessionStore.setState(change);
+  if (change.system !== undefined || change.theme !== undefined) remember();
+}
+
+/** Moves the cursor of the time axis [s]; up to once a frame. */
+export function setTime(time: number): void {
+  if (time !== sessionStore.getState().time) sessionStore.setState({ time });
+}
+
+function remember(): void {
+  const { system, theme } = sessionStore.getState();
+  try {
+    localStorage.setItem(REMEMBERED, JSON.stringify({ system, theme }));
+  } catch {
+    // A browser that keeps nothing still works: the choice lasts as long as the page.
+  }
+}
+
+function remembered(): Partial<SessionState> {
+  try {
+    const kept: unknown = JSON.parse(localStorage.getItem(REMEMBERED) ?? 'null');
+    if (typeof kept !== 'object' || kept === null) return {};
+    const { system, theme } = kept as Record<string, unknown>;
+    return {
+      ...(system === 'si' || system === 'us' ? { system } : {}),
+      ...(theme === 'system' || theme === 'light' || theme === 'dark' ? { theme } : {}),
+    };
+  } catch {
+    return {};
+  }
 }
