@@ -28,7 +28,6 @@ export function Dialog({ title, onClose, width = 560, foot, sticky = false, chil
     };
   }, []);
   return (
-    // biome-ignore lint/a11y/useKeyWithClickEvents: the click beside it only doubles Esc, which the element answers itself
     <dialog
       ref={element}
       className="dialog"

@@ -133,26 +133,42 @@ export function MenuList({ id, anchor, label, items, align, onClose }: MenuListP
       onKeyDown={onKeyDown}
     >
       {items.map((item) => (
-        <button
+        <MenuRow
           key={item.id}
-          type="button"
-          role={item.checked === undefined ? 'menuitem' : 'menuitemcheckbox'}
-          aria-checked={item.checked}
-          aria-disabled={item.disabled}
-          tabIndex={-1}
-          onClick={() => {
+          item={item}
+          onChoose={() => {
             if (item.disabled) return;
             leave();
             item.run();
           }}
-        >
-          {item.checked !== undefined && (
-            <span className="menu-check">{item.checked && <Icon name="check" size={12} />}</span>
-          )}
-          <span>{item.label}</span>
-          {item.keys !== undefined && <span className="menu-keys">{item.keys}</span>}
-        </button>
+        />
       ))}
     </div>
+  );
+}
+
+function MenuRow({ item, onChoose }: { readonly item: MenuItem; readonly onChoose: () => void }) {
+  const keys = item.keys !== undefined && <span className="menu-keys">{item.keys}</span>;
+  if (item.checked === undefined) {
+    return (
+      <button type="button" role="menuitem" aria-disabled={item.disabled} tabIndex={-1} onClick={onChoose}>
+        <span>{item.label}</span>
+        {keys}
+      </button>
+    );
+  }
+  return (
+    <button
+      type="button"
+      role="menuitemcheckbox"
+      aria-checked={item.checked}
+      aria-disabled={item.disabled}
+      tabIndex={-1}
+      onClick={onChoose}
+    >
+      <span className="menu-check">{item.checked && <Icon name="check" size={12} />}</span>
+      <span>{item.label}</span>
+      {keys}
+    </button>
   );
 }
