@@ -86,7 +86,7 @@ function runOf(
   ending: Ending | null,
 ): Run {
   const { step, steps, prepared } = problem;
-  const { n, stiffness } = prepared.arrays;
+  const { n, stiffness, height } = prepared.arrays;
   const copy = (x: Float64Array) => Float64Array.from(x);
   return {
     method,
@@ -95,6 +95,7 @@ function runOf(
     ending,
     storeys: {
       peakDrift: copy(peaks.drift),
+      peakDriftRatio: peaks.drift.map((d, i) => d / height[i]),
       peakTime: peaks.driftAt.map((at) => at * step),
       ...residualsOf(residuals),
       // An elastic storey without a damper: shear follows drift, so its peak is k times the peak drift.

@@ -85,7 +85,9 @@ export interface Run {
   readonly storeys: {
     /** [m] */
     readonly peakDrift: Float64Array;
-    /** [s] */
+    /** Peak drift / storey height [-]. */
+    readonly peakDriftRatio: Float64Array;
+    /** When the peak drift was reached [s]. */
     readonly peakTime: Float64Array;
     /** Signed mean drift over the last fundamental period of the run [m]. */
     readonly residualDrift: Float64Array;
