@@ -1,0 +1,1 @@
+export function missingPackages(folder: string): string[] | null;
