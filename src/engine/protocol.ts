@@ -58,3 +58,54 @@ export interface ReadAnswer {
     readonly velocity: Float64Array;
   } | null;
 }
+
+/** A run as it crosses: without its frame where that is the one that crossed last to this worker. */
+export interface RunJob extends Omit<RunRequest, 'frame' | 'frameKey'> {
+  readonly kind: 'run';
+  readonly id: number;
+  readonly priority: number;
+  readonly frame: Frame | null;
+}
+
+/** A file to read as it crosses; the bytes are transferred. */
+export interface ReadJob {
+  readonly kind: 'read';
+  readonly id: number;
+  readonly priority: number;
+  readonly file: string;
+  readonly bytes: ArrayBuffer;
+  readonly answers: RecordAnswers;
+}
+
+export type WorkerJob = RunJob | ReadJob;
+
+/** To a worker: samples to keep, samples to let go, or all that a keystroke asks of it: jobs to drop and jobs to do. */
+export type ToWorker =
+  | { readonly kind: 'motion'; readonly digest: string; readonly samples: Float64Array }
+  | { readonly kind: 'forget'; readonly digest: string }
+  | { readonly kind: 'work'; readonly drop: readonly number[]; readonly jobs: readonly WorkerJob[] };
+
+/** What became of a job: its value, or why it failed. */
+export type Outcome =
+  | { readonly id: number; readonly kind: 'run'; readonly value: Run }
+  | { readonly id: number; readonly kind: 'read'; readonly value: ReadAnswer }
+  | { readonly id: number; readonly kind: 'failed'; readonly message: string };
+
+/** From a worker: that it is there; or one message a slice with all that came of it. */
+export type FromWorker =
+  | { readonly kind: 'ready' }
+  | {
+      readonly kind: 'news';
+      readonly outcomes: readonly Outcome[];
+      /** The job that the next slice goes on with, and how far it is, 0 to 1. */
+      readonly progress: { readonly id: number; readonly share: number } | null;
+    };
+
+/** Anything with post and listen: a worker, a message port, or the jobs on the same thread. */
+export interface Endpoint {
+  post(message: ToWorker, transfer: Transferable[]): void;
+  listen(hear: (message: FromWorker) => void): void;
+  /** Called at most once, when the other side broke down by itself. */
+  onDeath(died: (why: string) => void): void;
+  end(): void;
+}

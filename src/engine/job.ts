@@ -1,0 +1,158 @@
+import { type PreparedFrame, prepareFrame, type RunUnderWay, startRun } from '../core/doors.ts';
+import type { Run } from '../core/dynamics/run.ts';
+import { faultLine } from '../core/fault.ts';
+import type { Frame } from '../core/frame/frame.ts';
+import type { FromWorker, Outcome, RunJob, ToWorker, WorkerJob } from './protocol.ts';
+import { readFile } from './reading.ts';
+import type { Turns } from './turns.ts';
+
+/** A slice ends after so many milliseconds at the first chance; with a chunk of steps on top it stays under 20. */
+const SLICE = 12;
+/** The march is left at least so often to look at the clock [ms]. */
+const CHUNK = 4;
+const FIRST_STEPS = 256;
+/** A sign of life at least so often while a job is under way [ms]. */
+const SIGN_OF_LIFE = 100;
+/** Shorter arrays are cheaper to copy than to transfer [bytes]. */
+const WORTH_TRANSFER = 4096;
+
+interface RunUnderHand {
+  readonly job: RunJob;
+  readonly frame: Frame;
+  march: RunUnderWay | null;
+  /** Steps of the next chunk. */
+  steps: number;
+}
+type UnderHand = RunUnderHand | { readonly job: Exclude<WorkerJob, RunJob> };
+
+/**
+ * The far side of the protocol, the same in a worker and on the page's own thread: takes messages, works through its jobs in
+ * slices, lowest priority number first, and returns to the message loop between slices.
+ */
+export function jobs(
+  post: (message: FromWorker, transfer: Transferable[]) => void,
+  turns: Turns,
+): (message: ToWorker) => void {
+  const motions = new Map<string, Float64Array>();
+  const prepared = new WeakMap<Frame, PreparedFrame>();
+  let frame: Frame | null = null;
+  let queue: UnderHand[] = [];
+  let waiting = false;
+  let lastPost = 0;
+
+  function receive(message: ToWorker): void {
+    switch (message.kind) {
+      case 'motion':
+        motions.set(message.digest, message.samples);
+        return;
+      case 'forget':
+        motions.delete(message.digest);
+        return;
+      case 'work':
+        if (message.drop.length > 0) queue = queue.filter(({ job }) => !message.drop.includes(job.id));
+        for (const job of message.jobs) queue.push(job.kind === 'run' ? underHand(job) : { job });
+        queue.sort((a, b) => a.job.priority - b.job.priority || a.job.id - b.job.id);
+        turn();
+    }
+  }
+
+  function underHand(job: RunJob): RunUnderHand {
+    if (job.frame) frame = job.frame;
+    if (!frame) throw new TypeError('a run without its frame, and none was sent before');
+    return { job, frame, march: null, steps: FIRST_STEPS };
+  }
+
+  function turn(): void {
+    if (waiting || queue.length === 0) return;
+    waiting = true;
+    turns.next(slice);
+  }
+
+  function slice(): void {
+    waiting = false;
+    const outcomes: Outcome[] = [];
+    const transfer: Transferable[] = [];
+    const start = performance.now();
+    while (queue.length > 0 && performance.now() - start < SLICE) {
+      const outcome = workOn(queue[0], transfer);
+      if (!outcome) continue;
+      queue.shift();
+      outcomes.push(outcome);
+    }
+    const now = performance.now();
+    if (outcomes.length > 0 || now - lastPost > SIGN_OF_LIFE) {
+      lastPost = now;
+      post({ kind: 'news', outcomes, progress: progressOf(queue[0]) }, transfer);
+    }
+    turn();
+  }
+
+  /** A chunk of steps of a run, or a whole file; null while the job is not over. */
+  function workOn(under: UnderHand, transfer: Transferable[]): Outcome | null {
+    const { id } = under.job;
+    try {
+      if (!('march' in under)) {
+        const { file, bytes, answers } = under.job;
+        const value = readFile(file, new Uint8Array(bytes), answers);
+        transfer.push(...buffersOf(value));
+        return { id, kind: 'read', value };
+      }
+      const run = marchOn(under);
+      if (!run) return null;
+      if (run.histories) transfer.push(...buffersOf(run.histories));
+      return { id, kind: 'run', value: run };
+    } catch (error) {
+      return { id, kind: 'failed', message: error instanceof Error ? error.message : String(error) };
+    }
+  }
+
+  function marchOn(under: RunUnderHand): Run | null {
+    under.march ??= start(under);
+    const before = performance.now();
+    const over = under.march.advance(under.steps);
+    const took = performance.now() - before;
+    // The clock may be as coarse as 0.1 ms: grow until the chunk is long enough to be measured.
+    under.steps = Math.max(1, Math.ceil(under.steps * Math.min(4, CHUNK / Math.max(took, 1e-3))));
+    return over ? under.march.finish() : null;
+  }
+
+  function start({ job, frame }: RunUnderHand): RunUnderWay {
+    const acceleration = motions.get(job.motion.samples);
+    if (!acceleration) throw new TypeError(`samples ${job.motion.samples} were not sent`);
+    const { interval, scale } = job.motion;
+    return startRun(
+      ready(frame),
+      { frame, analysis: job.analysis, motion: { interval, scale, acceleration } },
+      job.want,
+    );
+  }
+
+  function ready(frame: Frame): PreparedFrame {
+    const known = prepared.get(frame);
+    if (known) return known;
+    const result = prepareFrame(frame);
+    if (!result.ok) throw new RangeError(result.faults.map(faultLine).join(' '));
+    prepared.set(frame, result.value);
+    return result.value;
+  }
+
+  return receive;
+}
+
+function progressOf(under: UnderHand | undefined): { readonly id: number; readonly share: number } | null {
+  if (!under) return null;
+  const share = 'march' in under && under.march ? under.march.done / Math.max(1, under.march.steps) : 0;
+  return { id: under.job.id, share };
+}
+
+/** The larger buffers behind the typed arrays of plain data, each once. */
+function buffersOf(value: unknown, found = new Set<ArrayBuffer>()): Set<ArrayBuffer> {
+  if (ArrayBuffer.isView(value)) {
+    if (value.buffer instanceof ArrayBuffer && value.buffer.byteLength >= WORTH_TRANSFER) found.add(value.buffer);
+  } else if (Array.isArray(value)) {
+    for (const entry of value) buffersOf(entry, found);
+  } else if (typeof value === 'object' && value !== null) {
+    for (const entry of Object.values(value)) buffersOf(entry, found);
+  }
+  return found;
+}

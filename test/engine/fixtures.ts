@@ -1,0 +1,42 @@
+import type { Analysis } from '../../src/core/dynamics/run.ts';
+import type { Frame } from '../../src/core/frame/frame.ts';
+import type { RunRequest } from '../../src/engine/protocol.ts';
+
+export function frameOf(storeys: number, stiffness = 1.2e8): Frame {
+  return {
+    storeys: Array.from({ length: storeys }, (_, i) => ({
+      name: `storey ${i + 1}`,
+      height: 3.5,
+      mass: 2e5,
+      stiffness,
+      law: { kind: 'elastic' },
+    })),
+    damping: { kind: 'modal', ratios: [0.05] },
+    pDelta: false,
+  };
+}
+
+/** A decaying pair of sines: no randomness, no symmetry. */
+export function samplesOf(count: number, seed = 1): Float64Array {
+  return Float64Array.from(
+    { length: count },
+    (_, i) => 2 * Math.exp(-i / count) * (Math.sin(0.11 * seed * i) + 0.4 * Math.sin(0.37 * i + seed)),
+  );
+}
+
+export const ANALYSIS: Analysis = {
+  method: { kind: 'newmark', beta: 0.25, gamma: 0.5 },
+  step: { parts: 1 },
+  tail: 0,
+  stopDrift: 0.1,
+};
+
+export function requestOf(samples: string, frame: Frame = frameOf(3), histories = false): RunRequest {
+  return {
+    frameKey: JSON.stringify(frame),
+    frame,
+    analysis: ANALYSIS,
+    motion: { samples, interval: 0.01, scale: 1 },
+    want: { histories },
+  };
+}
