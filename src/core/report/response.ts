@@ -1,0 +1,106 @@
+import type { Statistic } from '../checks/statistic.ts';
+import type { Run } from '../dynamics/run.ts';
+import type { Storey } from '../frame/frame.ts';
+import { endingReason } from './ending.ts';
+import type { ReportRun, ReportSource } from './source.ts';
+
+/**
+ * The response file: plain SI numbers, ground up, under the keys of the project-file page. Null wherever the suite is not
+ * complete; `ductility` arrives with storeys that yield and is absent for elastic ones.
+ */
+export type ResponseFile = ReturnType<typeof responseOf>;
+
+export const RESPONSE_FORMAT = 'swaybook-response';
+export const RESPONSE_VERSION = 1;
+
+export function responseOf({ prepared, runs, envelope }: Pick<ReportSource, 'prepared' | 'runs' | 'envelope'>) {
+  const { frame, modes } = prepared;
+  const at = (statistic: Statistic | null, i: number) => spread(statistic, i, envelope.motions);
+  return {
+    format: RESPONSE_FORMAT,
+    version: RESPONSE_VERSION,
+    modes: modes.map(({ period, shape, participation, effectiveMass, effectiveMassRatio }) => ({
+      period,
+      shape: [...shape],
+      participation,
+      effectiveMass,
+      effectiveMassRatio,
+    })),
+    runs: runs.map((one) => runOf(one, frame.storeys)),
+    envelope: {
+      storeys: frame.storeys.map((_, i) => {
+        const drift = at(envelope.drift, i);
+        return {
+          mean: drift.mean,
+          median: drift.median,
+          max: drift.max,
+          limit: envelope.limit,
+          ratio: envelope.ratio === null ? null : envelope.ratio[i],
+          governing: drift.governing,
+          shear: at(envelope.shear, i),
+          overturning: at(envelope.overturning, i),
+          residualDrift: at(envelope.residualDrift, i),
+        };
+      }),
+      floors: frame.storeys.map((_, i) => ({
+        displacement: at(envelope.displacement, i),
+        acceleration: at(envelope.acceleration, i),
+      })),
+      measure: envelope.measure,
+      factor: envelope.factor,
+      ...(envelope.incomplete.length > 0 ? { incomplete: envelope.incomplete } : {}),
+      ...(envelope.leftOut.length > 0 ? { leftOut: envelope.leftOut } : {}),
+    },
+  };
+}
+
+function runOf({ motion, run, stepError }: ReportRun, storeys: readonly Storey[]) {
+  const { method, step, steps, ending, floors, energy } = run;
+  const answers = run.storeys;
+  return {
+    motion,
+    method,
+    step,
+    steps,
+    completed: ending === null,
+    ...(ending === null ? {} : { reason: reasonOf(ending, storeys) }),
+    storeys: storeys.map((_, i) => ({
+      peakDrift: answers.peakDrift[i],
+      peakDriftRatio: answers.peakDriftRatio[i],
+      peakTime: answers.peakTime[i],
+      residualDrift: answers.residualDrift[i],
+      peakShear: answers.peakShear[i],
+      peakOverturning: answers.peakOverturning[i],
+      dissipated: answers.dissipated[i],
+    })),
+    floors: storeys.map((_, i) => ({
+      peakDisplacement: floors.peakDisplacement[i],
+      peakVelocity: floors.peakVelocity[i],
+      peakAcceleration: floors.peakAcceleration[i],
+    })),
+    base: { peakShear: answers.peakShear[0], peakOverturning: answers.peakOverturning[0] },
+    energy,
+    stepError,
+  };
+}
+
+/** Storeys are counted from 1 at the ground; null where no single one is to blame. */
+function reasonOf(ending: NonNullable<Run['ending']>, storeys: readonly Storey[]) {
+  return {
+    storey: ending.storey < 0 ? null : ending.storey + 1,
+    time: ending.time,
+    why: endingReason(ending, storeys),
+  };
+}
+
+/** One place of a statistic, with the governing motion by name; nulls where there is none. */
+function spread(statistic: Statistic | null, i: number, motions: readonly string[]) {
+  return statistic === null
+    ? { mean: null, median: null, max: null, governing: null }
+    : {
+        mean: statistic.mean[i],
+        median: statistic.median[i],
+        max: statistic.max[i],
+        governing: motions[statistic.governing[i]],
+      };
+}

@@ -1,0 +1,29 @@
+import type { Quantity } from '../units/quantities.ts';
+
+export type Cell = number | string | null;
+
+/** One column: SI values (or words), top row first, with what they measure, so that a head can carry their unit. */
+export interface Column {
+  /** Stable within its table, in camel case: `meanDriftRatio`. */
+  readonly key: string;
+  /** Head in words, without a unit. */
+  readonly name: string;
+  readonly quantity: Quantity | 'text';
+  /** Null where there is none: a suite that is not complete, a value that this frame does not have. */
+  readonly values: readonly Cell[];
+  /** On the screen and on paper; absent: the quantity's own. A file always gets full precision. */
+  readonly decimals?: number;
+}
+
+/** A result table as columns of equal length. The screen, the note and the files all print these. */
+export interface Table {
+  /** Stable, and safe as a file name: `storey-response`. */
+  readonly id: string;
+  readonly title: string;
+  readonly columns: readonly Column[];
+}
+
+/** Values of ground-up arrays from the roof down, as the sheet shows them; nulls where there is none. */
+export function roofFirst(values: ArrayLike<number> | null | undefined, n: number): Cell[] {
+  return Array.from({ length: n }, (_, row) => values?.[n - 1 - row] ?? null);
+}

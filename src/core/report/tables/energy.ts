@@ -1,0 +1,34 @@
+import { endingReason } from '../ending.ts';
+import type { ReportRun, ReportSource } from '../source.ts';
+import type { Cell, Column, Table } from '../table.ts';
+
+/** Energies at the end of each run, of relative motion, with the evidence that the step was small enough. */
+export function energyBalance({ prepared, runs }: ReportSource): Table {
+  const { storeys } = prepared.frame;
+  const column = (key: string, name: string, quantity: Column['quantity'], of: (run: ReportRun) => Cell): Column => ({
+    key,
+    name,
+    quantity,
+    values: runs.map(of),
+  });
+  return {
+    id: 'energy',
+    title: 'Energy balance and evidence',
+    columns: [
+      column('motion', 'Motion', 'text', ({ motion }) => motion),
+      column('input', 'Input', 'energy', ({ run }) => run.energy.input),
+      column('kinetic', 'Kinetic', 'energy', ({ run }) => run.energy.kinetic),
+      column('strain', 'Strain', 'energy', ({ run }) => run.energy.strain),
+      column('damping', 'Viscous damping', 'energy', ({ run }) => run.energy.damping),
+      column('dampers', 'Dampers', 'energy', ({ run }) => run.energy.dampers),
+      column('hysteretic', 'Hysteretic', 'energy', ({ run }) => run.energy.hysteretic),
+      column('imbalance', 'Largest imbalance', 'percent', ({ run }) => run.energy.imbalance),
+      column('step', 'Step', 'time', ({ run }) => run.step),
+      column('steps', 'Steps', 'count', ({ run }) => run.steps),
+      column('stepError', 'Step error', 'percent', ({ stepError }) => stepError),
+      column('ending', 'Ending', 'text', ({ run }) =>
+        run.ending === null ? 'completed' : endingReason(run.ending, storeys),
+      ),
+    ],
+  };
+}

@@ -1,0 +1,87 @@
+import { describe, expect, test } from 'vitest';
+import { responseOf } from '../../../src/core/report/response.ts';
+import { exampleSource } from './example.ts';
+
+describe('[FILE-2] the response file carries the keys of the project-file page', () => {
+  const source = exampleSource();
+  const response = responseOf(source);
+
+  test('modes, runs and envelope under their names, ground up', () => {
+    expect(Object.keys(response)).toEqual(['format', 'version', 'modes', 'runs', 'envelope']);
+    expect(response).toMatchObject({ format: 'swaybook-response', version: 1 });
+    expect(response.modes).toHaveLength(3);
+    for (const mode of response.modes) {
+      expect(Object.keys(mode).sort()).toEqual([
+        'effectiveMass',
+        'effectiveMassRatio',
+        'participation',
+        'period',
+        'shape',
+      ]);
+      expect(mode.shape.at(-1)).toBe(1);
+    }
+    const [run] = response.runs;
+    expect(Object.keys(run).sort()).toEqual([
+      'base',
+      'completed',
+      'energy',
+      'floors',
+      'method',
+      'motion',
+      'step',
+      'stepError',
+      'steps',
+      'storeys',
+    ]);
+    expect(run).toMatchObject({ motion: 'A', step: 0.01, completed: true, stepError: 0.004 });
+    expect(response.runs[1].stepError).toBeNull();
+    expect(Object.keys(run.storeys[0]).sort()).toEqual([
+      'dissipated',
+      'peakDrift',
+      'peakDriftRatio',
+      'peakOverturning',
+      'peakShear',
+      'peakTime',
+      'residualDrift',
+    ]);
+    expect(Object.keys(run.floors[0]).sort()).toEqual(['peakAcceleration', 'peakDisplacement', 'peakVelocity']);
+    expect(run.base).toEqual({
+      peakShear: run.storeys[0].peakShear,
+      peakOverturning: run.storeys[0].peakOverturning,
+    });
+    // Ground up: floor 1 moves with storey 1 alone.
+    expect(run.floors[0].peakDisplacement).toBe(run.storeys[0].peakDrift);
+  });
+
+  test('the ratio is factor x measure / limit, and the governing motion is the one with the largest value', () => {
+    response.envelope.storeys.forEach((storey, i) => {
+      const ratios = response.runs.map((run) => run.storeys[i].peakDriftRatio);
+      const largest = Math.max(...ratios);
+      expect(storey.max).toBe(largest);
+      expect(storey.governing).toBe(response.runs[ratios.indexOf(largest)].motion);
+      expect(storey.ratio).toBeCloseTo((1.25 * largest) / 0.02, 12);
+      expect(Object.keys(storey.shear)).toEqual(['mean', 'median', 'max', 'governing']);
+    });
+    expect(response.envelope).toMatchObject({ measure: 'max', factor: 1.25, leftOut: ['C'] });
+    expect(response.envelope).not.toHaveProperty('incomplete');
+  });
+
+  test('survives JSON without losing a digit', () => {
+    expect(JSON.parse(JSON.stringify(response))).toEqual(response);
+  });
+});
+
+test('[FILE-2] a suite with a run that ended early has no statistics and says which run', () => {
+  const { envelope, runs } = responseOf(exampleSource({ strength: 100 }));
+  const [first] = runs;
+  expect(first.completed).toBe(false);
+  expect(first.reason?.why).toMatch(/^stopped as collapsed: storey \d, \w+, passed/);
+  expect(first.reason?.time).toBeGreaterThan(0);
+  expect(first.reason?.storey).toBeGreaterThanOrEqual(1);
+  expect(envelope.incomplete).toEqual(['A']);
+  for (const storey of envelope.storeys) {
+    expect(storey).toMatchObject({ mean: null, median: null, max: null, ratio: null, governing: null });
+    expect(storey.limit).toBe(0.02);
+    expect(storey.shear).toEqual({ mean: null, median: null, max: null, governing: null });
+  }
+});
