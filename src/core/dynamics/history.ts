@@ -1,6 +1,7 @@
 import type { Problem } from './problem.ts';
 import type { Histories } from './run.ts';
-import { SUM, type Workspace } from './workspace.ts';
+import { STRIDE, SUM_DAMPING, SUM_INPUT, SUM_KINETIC, SUM_STRAIN, TOTAL, U } from './stepping.ts';
+import type { Workspace } from './workspace.ts';
 
 /** Histories of one run may take so many bytes; beyond it only each k-th step is kept, and k is said. */
 export const HISTORY_LIMIT = 64 * 1024 * 1024;
@@ -39,19 +40,20 @@ export function keepHistory({ histories }: HistoryBuffers, problem: Problem, wor
   if (j % every !== 0) return;
   const at = j / every;
   const { stiffness } = problem.prepared.arrays;
-  const { u, total, sums } = work;
+  const { records, sums } = work;
   ground[at] = problem.ground[j];
   let below = 0;
-  for (let i = 0, place = at; i < u.length; i++, place += count) {
-    displacement[place] = u[i];
-    shear[place] = stiffness[i] * (u[i] - below);
-    acceleration[place] = total[i];
-    below = u[i];
+  for (let i = 0, from = 0, place = at; i < stiffness.length; i++, from += STRIDE, place += count) {
+    const u = records[from + U];
+    displacement[place] = u;
+    shear[place] = stiffness[i] * (u - below);
+    acceleration[place] = records[from + TOTAL];
+    below = u;
   }
-  energy.input[at] = sums[SUM.input] / 2;
-  energy.kinetic[at] = sums[SUM.kinetic] / 2;
-  energy.strain[at] = sums[SUM.strain] / 2;
-  energy.damping[at] = sums[SUM.damping] / 2;
+  energy.input[at] = sums[SUM_INPUT] / 2;
+  energy.kinetic[at] = sums[SUM_KINETIC] / 2;
+  energy.strain[at] = sums[SUM_STRAIN] / 2;
+  energy.damping[at] = sums[SUM_DAMPING] / 2;
 }
 
 /** The first `kept` instants of each row. */

@@ -1,10 +1,28 @@
-import { marchBanded } from './banded.ts';
-import { marchFull } from './full.ts';
 import { type HistoryBuffers, historyBuffers, keepHistory } from './history.ts';
 import type { Problem } from './problem.ts';
 import { emptyResiduals, keepResiduals, type Residuals, residualsOf } from './residual.ts';
 import type { Ending, MethodChoice, Run, Want } from './run.ts';
-import { SUM, type Workspace, workspace } from './workspace.ts';
+import {
+  COLLAPSED,
+  DIVERGED,
+  GOING,
+  LARGEST_GAP,
+  LARGEST_INPUT,
+  PEAK_DRIFT,
+  PEAK_OVERTURNING,
+  PEAK_STEP,
+  PEAK_TOTAL,
+  PEAK_U,
+  PEAK_V,
+  STOPPED,
+  STRIDE,
+  SUM_DAMPING,
+  SUM_INPUT,
+  SUM_KINETIC,
+  SUM_STRAIN,
+  stepTo,
+} from './stepping.ts';
+import { type Workspace, workspace } from './workspace.ts';
 
 /** A march under way: call `advance` until it says true, then `finish`. Nothing is allocated in `advance`. */
 export interface March {
@@ -25,14 +43,17 @@ export function march(problem: Problem, choice: MethodChoice, want: Want): Run {
 
 /** As `march`, in slices of the caller's choosing: the same bits. */
 export function startMarch(problem: Problem, choice: MethodChoice, want: Want): March {
-  const { steps, residualFrom } = problem;
+  const { steps, residualFrom, ground } = problem;
+  const { n } = problem.prepared.arrays;
   const work = workspace(problem);
-  const residuals = emptyResiduals(problem.prepared.arrays.n);
+  const { records, inverse, scheme, sums } = work;
+  const residuals = emptyResiduals(n);
   const histories = want.histories ? historyBuffers(problem) : null;
   if (histories) keepHistory(histories, problem, work, 0);
   let done = 0;
-  let over = steps === 0;
-  const bulkEnd = histories ? 0 : Math.min(steps, residualFrom);
+  // Up to here nothing is looked at between steps, so that they run in one go.
+  const unwatched = histories ? 0 : Math.min(steps, residualFrom);
+  const over = () => done >= steps || sums[STOPPED] !== GOING;
   return {
     steps,
     get done() {
@@ -40,46 +61,42 @@ export function startMarch(problem: Problem, choice: MethodChoice, want: Want): 
     },
     advance(count) {
       const end = Math.min(steps, done + count);
-      if (!over && done < Math.min(end, bulkEnd)) done = stepTo(problem, work, done, Math.min(end, bulkEnd));
-      while (!over && work.sums[SUM.stopped] === 0 && done < end) {
-        done = stepTo(problem, work, done, done + 1);
+      if (!over() && done < unwatched)
+        done = stepTo(records, inverse, n, ground, scheme, sums, done, Math.min(end, unwatched));
+      while (!over() && done < end) {
+        done = stepTo(records, inverse, n, ground, scheme, sums, done, done + 1);
         if (histories) keepHistory(histories, problem, work, done);
-        if (done > residualFrom) keepResiduals(residuals, work.u);
+        if (done > residualFrom) keepResiduals(residuals, records);
       }
-      over = done >= steps || work.sums[SUM.stopped] !== 0;
-      return over;
+      return over();
     },
-    finish: () => runOf(problem, choice, work, residuals, histories, done, endingOf(problem, work, done, over)),
+    finish: () => runOf(problem, choice, work, residuals, histories, done, endingOf(problem, work, done, over())),
   };
 }
 
-function stepTo(problem: Problem, work: Workspace, from: number, to: number): number {
-  const { system } = work;
-  return system.kind === 'banded'
-    ? marchBanded(problem, work, system, from, to)
-    : marchFull(problem, work, system, from, to);
-}
-
-function endingOf({ step, stopDrift, prepared }: Problem, work: Workspace, done: number, over: boolean): Ending | null {
+function endingOf(
+  { step, prepared, stopDrift }: Problem,
+  { records, sums }: Workspace,
+  done: number,
+  over: boolean,
+): Ending | null {
   const time = done * step;
-  if (work.sums[SUM.stopped] === 1) {
-    const { drift, driftAt } = work.peaks;
-    let storey = -1;
-    let worst = 0;
+  if (sums[STOPPED] === COLLAPSED) {
+    let [storey, worst] = [-1, 0];
     for (let i = 0; i < prepared.arrays.n; i++) {
-      const share = drift[i] / stopDrift[i];
-      if (driftAt[i] === done && share > worst) [storey, worst] = [i, share];
+      const share = records[i * STRIDE + PEAK_DRIFT] / stopDrift[i];
+      if (records[i * STRIDE + PEAK_STEP] === done && share > worst) [storey, worst] = [i, share];
     }
     return { status: 'collapsed', storey, time };
   }
-  if (work.sums[SUM.stopped] === 2) return { status: 'diverged', storey: -1, time };
+  if (sums[STOPPED] === DIVERGED) return { status: 'diverged', storey: -1, time };
   return over ? null : { status: 'cancelled', storey: -1, time };
 }
 
 function runOf(
   problem: Problem,
   method: MethodChoice,
-  { peaks, sums }: Workspace,
+  { records, sums }: Workspace,
   residuals: Residuals,
   histories: HistoryBuffers | null,
   done: number,
@@ -87,35 +104,32 @@ function runOf(
 ): Run {
   const { step, steps, prepared } = problem;
   const { n, stiffness, height } = prepared.arrays;
-  const copy = (x: Float64Array) => Float64Array.from(x);
+  const column = (field: number) => Float64Array.from({ length: n }, (_, i) => records[i * STRIDE + field]);
+  const peakDrift = column(PEAK_DRIFT);
   return {
     method,
     step,
     steps,
     ending,
     storeys: {
-      peakDrift: copy(peaks.drift),
-      peakDriftRatio: peaks.drift.map((d, i) => d / height[i]),
-      peakTime: peaks.driftAt.map((at) => at * step),
+      peakDrift,
+      peakDriftRatio: peakDrift.map((d, i) => d / height[i]),
+      peakTime: column(PEAK_STEP).map((at) => at * step),
       ...residualsOf(residuals),
       // An elastic storey without a damper: shear follows drift, so its peak is k times the peak drift.
-      peakShear: peaks.drift.map((d, i) => stiffness[i] * d),
-      peakOverturning: copy(peaks.overturning),
+      peakShear: peakDrift.map((d, i) => stiffness[i] * d),
+      peakOverturning: column(PEAK_OVERTURNING),
       dissipated: new Float64Array(n),
     },
-    floors: {
-      peakDisplacement: copy(peaks.displacement),
-      peakVelocity: copy(peaks.velocity),
-      peakAcceleration: copy(peaks.acceleration),
-    },
+    floors: { peakDisplacement: column(PEAK_U), peakVelocity: column(PEAK_V), peakAcceleration: column(PEAK_TOTAL) },
     energy: {
-      input: sums[SUM.input] / 2,
-      kinetic: sums[SUM.kinetic] / 2,
-      strain: sums[SUM.strain] / 2,
-      damping: sums[SUM.damping] / 2,
+      input: sums[SUM_INPUT] / 2,
+      kinetic: sums[SUM_KINETIC] / 2,
+      strain: sums[SUM_STRAIN] / 2,
+      damping: sums[SUM_DAMPING] / 2,
       dampers: 0,
       hysteretic: 0,
-      imbalance: sums[SUM.largestInput] > 0 ? sums[SUM.largestGap] / sums[SUM.largestInput] : 0,
+      imbalance: sums[LARGEST_INPUT] > 0 ? sums[LARGEST_GAP] / sums[LARGEST_INPUT] : 0,
     },
     histories: histories ? histories.upTo(done) : null,
   };

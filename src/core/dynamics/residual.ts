@@ -1,3 +1,5 @@
+import { STRIDE, U } from './stepping.ts';
+
 /** Sums over the last fundamental period of a run, one entry a storey. */
 export interface Residuals {
   count: number;
@@ -15,13 +17,14 @@ export function emptyResiduals(n: number): Residuals {
   };
 }
 
-/** Adds one step. @param u floor displacements, ground up [m] */
-export function keepResiduals(residuals: Residuals, u: Float64Array): void {
+/** Adds one step. @param records as in stepping.ts */
+export function keepResiduals(residuals: Residuals, records: Float64Array): void {
   const { sum, least, most } = residuals;
   let below = 0;
   for (let i = 0; i < sum.length; i++) {
-    const drift = u[i] - below;
-    below = u[i];
+    const u = records[i * STRIDE + U];
+    const drift = u - below;
+    below = u;
     sum[i] += drift;
     if (drift < least[i]) least[i] = drift;
     if (drift > most[i]) most[i] = drift;
