@@ -30,6 +30,8 @@ export interface DocumentState {
   readonly savedAt: number | null;
   /** Why it could not be saved, in words; null: all well. */
   readonly saveFault: string | null;
+  /** What was kept but could not be read, and where it is now, in words; null: nothing. */
+  readonly setAside: string | null;
 }
 
 export const documentStore = createStore<DocumentState>(() => ({
@@ -39,6 +41,7 @@ export const documentStore = createStore<DocumentState>(() => ({
   redoes: null,
   savedAt: null,
   saveFault: null,
+  setAside: null,
 }));
 
 export function useDocument<T>(selector: (state: DocumentState) => T): T {
@@ -93,11 +96,6 @@ export function effectiveProject({ project, draft }: Pick<DocumentState, 'projec
   const written = writeAt(project, draft.path, draft.value);
   effective.set(project, { draft, project: written });
   return written;
-}
-
-/** Every project that undo or redo can bring back: their motions' samples must stay. */
-export function reachableProjects(): readonly Project[] {
-  return [documentStore.getState().project, ...[...history.past, ...history.future].map((step) => step.project)];
 }
 
 function commit(label: string, change: (project: Project) => Project, counts: Counts, draft: Draft | null): void {

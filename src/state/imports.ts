@@ -1,27 +1,63 @@
 import type { RecordAnswers } from '../core/motion/reading.ts';
+import type { MotionEntry } from '../document/project.ts';
 import type { Engine, ReadAnswer, Reply } from '../engine/protocol.ts';
+import { documentStore, edit } from './document.ts';
+import { putSamples } from './samples.ts';
 
 export type { ReadAnswer, Reply } from '../engine/protocol.ts';
 
-let reader: Pick<Engine, 'read'> | null = null;
+let reader: Pick<Engine, 'read' | 'cancel'> | null = null;
 
 /** The engine reads the record files. Called once, by main.tsx. */
-export function startImports(engine: Pick<Engine, 'read'>): void {
+export function startImports(engine: Pick<Engine, 'read' | 'cancel'>): void {
   reader = engine;
 }
 
-/** Reads one record file off the main thread; a newer reading of the same question supersedes this one. */
+/**
+ * Reads one record file off the main thread. A newer reading of the same question (the same file with other answers)
+ * supersedes this one; the bytes are copied, so they can be read again.
+ */
 export async function readRecordFile(
   question: string,
   file: string,
   bytes: ArrayBuffer,
   answers: RecordAnswers,
 ): Promise<Reply<ReadAnswer>> {
-  if (!reader) return { status: 'failed', message: 'the engine is not there yet' };
-  return reader.read(question, file, bytes, answers);
+  if (!reader) return { status: 'failed', message: 'the engine was not started' };
+  return reader.read(`read ${question}`, file, bytes, answers);
 }
 
-/** Adds the motions of files read without an open fault, as one undo step. Returns the names they got. */
-export function addMotions(_answers: readonly ReadAnswer[]): readonly string[] {
-  return [];
+/** The dialog was closed: the reading is no longer wanted. */
+export function cancelReading(question: string): void {
+  reader?.cancel(`read ${question}`);
+}
+
+/**
+ * Adds the motions of files that were read without an open fault, as one undo step; others are passed over. A name that is
+ * taken gets a number. Returns the names they got.
+ */
+export function addMotions(answers: readonly ReadAnswer[]): readonly string[] {
+  const taken = new Set(documentStore.getState().project.motions.map((motion) => motion.name));
+  const entries: MotionEntry[] = [];
+  for (const { reading, samples } of answers) {
+    if (!reading.motion || !samples) continue;
+    const { acceleration, interval, origin } = reading.motion;
+    const name = freeName(reading.motion.name, taken);
+    taken.add(name);
+    putSamples(samples, acceleration);
+    entries.push({ name, interval, samples, count: acceleration.length, scale: 1, used: true, origin });
+  }
+  const names = entries.map((entry) => entry.name);
+  if (entries.length > 0) {
+    const label = names.length === 1 ? `add motion ${names[0]}` : `add ${names.length} motions`;
+    edit(label, (project) => ({ ...project, motions: [...project.motions, ...entries] }));
+  }
+  return names;
+}
+
+function freeName(name: string, taken: ReadonlySet<string>): string {
+  if (!taken.has(name)) return name;
+  let number = 2;
+  while (taken.has(`${name} (${number})`)) number += 1;
+  return `${name} (${number})`;
 }

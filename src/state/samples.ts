@@ -13,13 +13,6 @@ export function putSamples(digest: string, samples: Float64Array): void {
   written?.(digest, samples);
 }
 
-/** Lets go of samples that no project refers to any more. Returns their digests. */
-export function dropSamples(isReferred: (digest: string) => boolean): readonly string[] {
-  const dropped = [...memory.keys()].filter((digest) => !isReferred(digest));
-  for (const digest of dropped) memory.delete(digest);
-  return dropped;
-}
-
 /** Autosave hears of each digest once; null: nobody does. */
 export function onNewSamples(hear: ((digest: string, samples: Float64Array) => void) | null): void {
   written = hear;

@@ -1,0 +1,104 @@
+import { type Fault, faultLine, type Result } from '../core/fault.ts';
+import { PROJECT_FORMAT, PROJECT_VERSION, type Project } from '../document/project.ts';
+import type { Draft } from './document.ts';
+
+/** The document as the browser's store holds it: a project on its way, with cells not typed or not readable, samples apart. */
+export interface Envelope {
+  readonly format: typeof PROJECT_FORMAT;
+  readonly version: number;
+  readonly document: Project;
+}
+
+export function envelopeFor(document: Project): Envelope {
+  return { format: PROJECT_FORMAT, version: PROJECT_VERSION, document };
+}
+
+/** The project in a stored envelope, or why it cannot be used. A field may hold anything typed; the shape must be whole. */
+export function readEnvelope(stored: unknown): Result<Project> {
+  const faults: Fault[] = [];
+  const refuse = (where: string, message: string) =>
+    faults.push({ code: 'unreadable', where, message, mend: 'It is kept aside as it was' });
+  const root = objectOf(stored);
+  if (root?.format !== PROJECT_FORMAT) refuse('format', `is ${JSON.stringify(root?.format)}, not "${PROJECT_FORMAT}"`);
+  else if (typeof root.version !== 'number' || root.version > PROJECT_VERSION)
+    refuse('version', `is ${JSON.stringify(root.version)}, written by a later version than ${PROJECT_VERSION}`);
+  else for (const where of faultsOfShape(root.document)) refuse(where, 'is missing or of another kind');
+  return faults.length > 0 ? { ok: false, faults } : { ok: true, value: root?.document as Project };
+}
+
+/** The stored draft, or null where there is none that can be used. */
+export function readDraft(stored: unknown): Draft | null {
+  const draft = objectOf(stored);
+  const fine = draft && typeof draft.path === 'string' && typeof draft.text === 'string' && isTyped(draft.value);
+  return fine ? (draft as unknown as Draft) : null;
+}
+
+export function linesOf(faults: readonly Fault[]): string {
+  return faults.map(faultLine).join(' ');
+}
+
+/** Places where a stored project has not the shape that the application relies on. */
+function faultsOfShape(document: unknown): string[] {
+  const wrong: string[] = [];
+  const check = (where: string, fine: boolean) => {
+    if (!fine) wrong.push(where);
+  };
+  const project = objectOf(document);
+  const frame = objectOf(project?.frame);
+  const analysis = objectOf(project?.analysis);
+  const limits = objectOf(project?.limits);
+  check('title', typeof project?.title === 'string');
+  check('frame.pDelta', typeof frame?.pDelta === 'boolean');
+  check('frame.damping', isDamping(objectOf(frame?.damping)));
+  check('frame.storeys', Array.isArray(frame?.storeys));
+  for (const [i, entry] of listOf(frame?.storeys).entries()) {
+    const row = objectOf(entry);
+    check(`frame.storeys[${i}].name`, typeof row?.name === 'string');
+    for (const key of ['height', 'mass', 'stiffness']) check(`frame.storeys[${i}].${key}`, isTyped(row?.[key]));
+    check(`frame.storeys[${i}].gravity`, row?.gravity === undefined || isTyped(row.gravity));
+    check(`frame.storeys[${i}].law`, objectOf(row?.law)?.kind === 'elastic');
+  }
+  check('motions', Array.isArray(project?.motions));
+  for (const [i, entry] of listOf(project?.motions).entries()) {
+    const motion = objectOf(entry);
+    for (const key of ['name', 'samples']) check(`motions[${i}].${key}`, typeof motion?.[key] === 'string');
+    for (const key of ['interval', 'count']) check(`motions[${i}].${key}`, typeof motion?.[key] === 'number');
+    check(`motions[${i}].used`, typeof motion?.used === 'boolean');
+    check(`motions[${i}].scale`, isTyped(motion?.scale));
+  }
+  check('analysis.method', typeof objectOf(analysis?.method)?.kind === 'string');
+  check('analysis.step', isTyped(analysis?.step) || typeof objectOf(analysis?.step)?.parts === 'number');
+  for (const key of ['tail', 'stopDrift']) check(`analysis.${key}`, isTyped(analysis?.[key]));
+  for (const key of ['drift', 'factor']) check(`limits.${key}`, isTyped(limits?.[key]));
+  check('limits.source', typeof limits?.source === 'string');
+  return wrong;
+}
+
+function isDamping(damping: Record<string, unknown> | null): boolean {
+  switch (damping?.kind) {
+    case 'none':
+      return true;
+    case 'rayleigh':
+      return [damping.modes, damping.ratios].every((pair) => listOf(pair).length === 2 && listOf(pair).every(isTyped));
+    case 'modal':
+      return Array.isArray(damping.ratios) && damping.ratios.every(isTyped);
+    case 'stiffness-proportional':
+      return isTyped(damping.mode) && isTyped(damping.ratio);
+    default:
+      return false;
+  }
+}
+
+function isTyped(value: unknown): boolean {
+  return value === null || typeof value === 'number' || typeof value === 'string';
+}
+
+function objectOf(value: unknown): Record<string, unknown> | null {
+  return typeof value === 'object' && value !== null && !Array.isArray(value)
+    ? (value as Record<string, unknown>)
+    : null;
+}
+
+function listOf(value: unknown): readonly unknown[] {
+  return Array.isArray(value) ? value : [];
+}
