@@ -14,6 +14,8 @@ export interface Selection {
 export interface SessionState {
   readonly system: 'si' | 'us';
   readonly theme: 'system' | 'light' | 'dark';
+  /** Frame and Response are the two ends of `sheet`. */
+  readonly screen: 'sheet' | 'motions';
   readonly selection: Selection | null;
   /** Storey whose histories are shown; null: the governing one. */
   readonly storey: number | null;
@@ -36,6 +38,7 @@ const REMEMBERED = 'swaybook.session';
 export const sessionStore = createStore<SessionState>(() => ({
   system: 'si',
   theme: 'system',
+  screen: 'sheet',
   selection: null,
   storey: null,
   motion: null,
