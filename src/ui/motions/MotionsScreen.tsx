@@ -1,0 +1,4 @@
+/** The records of the suite: made by the panels room. */
+export function MotionsScreen() {
+  return <div className="page" />;
+}
