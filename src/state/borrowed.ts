@@ -1,3 +1,4 @@
+import type { Result } from '../core/fault.ts';
 import type { Project, Typed } from '../document/project.ts';
 
 /** Stands in for the document room's own functions until they are there. */
@@ -20,4 +21,18 @@ export function writeAt(project: Project, path: string, value: Typed): Project {
     return { ...record, [keys[at]]: into(record[keys[at]], at + 1) };
   };
   return into(project, 0) as Project;
+}
+
+export function demoProject(): { readonly project: Project; readonly samples: Map<string, Float64Array> } {
+  return { project: emptyProject(), samples: new Map() };
+}
+
+export function readProject(
+  _text: string,
+): Result<{ readonly project: Project; readonly samples: ReadonlyMap<string, Float64Array> }> {
+  return { ok: false, faults: [] };
+}
+
+export function writeProject(project: Project, _samplesOf: (digest: string) => Float64Array): string {
+  return JSON.stringify(project);
 }

@@ -1,16 +1,65 @@
-import type { Fault } from '../core/fault.ts';
+import type { Fault, Result } from '../core/fault.ts';
+import { demoProject, emptyProject, readProject, writeProject } from './borrowed.ts';
+import { documentStore, replace } from './document.ts';
+import { putSamples, samplesOf } from './samples.ts';
 
 /** What came of opening a project file: it took the document's place, or nothing happened and these are its faults. */
 export type Opened =
   | { readonly ok: true }
   | { readonly ok: false; readonly file: string; readonly faults: readonly Fault[] };
 
-/** Opens the text of a project file in the place of the document, as one undo step; a file with faults changes nothing. */
-export function openProject(file: string, _text: string): Opened {
-  return { ok: false, file, faults: [] };
+export interface ProjectFile {
+  readonly name: string;
+  readonly text: string;
 }
 
-/** The project file of the document as committed, and the name it should be saved under. */
-export function projectFile(): { readonly name: string; readonly text: string } {
-  return { name: 'untitled.swaybook.json', text: '' };
+/** Opens the text of a project file in the place of the document, as one undo step; a file with faults changes nothing. */
+export function openProject(file: string, text: string): Opened {
+  const read = readProject(text);
+  if (!read.ok) return { ok: false, file, faults: read.faults };
+  keepSamples(read.value.samples);
+  replace(`open ${file}`, read.value.project);
+  return { ok: true };
+}
+
+/** The demo in the place of the document, as one undo step. */
+export function openDemo(): void {
+  const { project, samples } = demoProject();
+  keepSamples(samples);
+  replace('open the demo', project);
+}
+
+/** An empty sheet in the place of the document, as one undo step. */
+export function newProject(): void {
+  replace('new project', emptyProject());
+}
+
+/**
+ * The project file of the document as committed, and the name it should be saved under. Refused where samples are missing:
+ * a file without them would not hold the project.
+ */
+export function projectFile(): Result<ProjectFile> {
+  const { project } = documentStore.getState();
+  const faults = project.motions.flatMap(({ name, samples }, i): Fault[] => {
+    if (samplesOf(samples)) return [];
+    const message = `the samples of ${name} are not in this browser's store`;
+    return [{ code: 'samples-missing', where: `motions[${i}]`, message, mend: 'Load its record again, or remove it' }];
+  });
+  if (faults.length > 0) return { ok: false, faults };
+  const text = writeProject(project, (digest) => samplesOf(digest) ?? new Float64Array());
+  return { ok: true, value: { name: `${fileName(project.title)}.swaybook.json`, text } };
+}
+
+/** A title as every file system takes it. */
+function fileName(title: string): string {
+  const name = title
+    .replace(/[\p{Cc}\\/:*?"<>|]+/gu, ' ')
+    .replace(/\s+/g, ' ')
+    .trim()
+    .replace(/^\.+|\.+$/g, '');
+  return name === '' ? 'untitled' : name.slice(0, 80).trim();
+}
+
+function keepSamples(samples: ReadonlyMap<string, Float64Array>): void {
+  for (const [digest, values] of samples) putSamples(digest, values);
 }

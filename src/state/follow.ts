@@ -54,6 +54,7 @@ export function follow(
   const failures = new Map<string, Fault>();
   let project: Project | null = null;
   let question: Question | null = null;
+  let modes: ResultsState['modes'] = null;
   /** Run with histories, and the key of what it was computed from. */
   let full: { readonly key: string; readonly run: Run } | null = null;
   let startedAt: number | null = null;
@@ -71,13 +72,13 @@ export function follow(
     failures.clear();
     const nothing = now.frame.storeys.length === 0 || !now.motions.some((motion) => motion.used);
     question = result.ok && !nothing ? questionOf(result.value) : null;
+    modes = result.ok && now.frame.storeys.length > 0 ? result.value.prepared.modes : null;
     cancelUnwanted();
     if (nothing) {
       rest({ status: 'empty', answers: null, chosen: null, stepErrors: null, changed: null, faults: faultsOf(result) });
     } else if (!result.ok) {
       rest({ status: 'stale', faults: result.faults });
     }
-    set({ modes: result.ok && now.frame.storeys.length > 0 ? result.value.prepared.modes : null });
     if (question && !publish()) plan(question);
   }
 
@@ -104,7 +105,7 @@ export function follow(
       });
     }
     const progress = { done: doneOf(asks), of: asks.length, startedAt };
-    set({ status: 'running', waits: false, faults: [], changed: changedSince(), progress });
+    set({ status: 'running', waits: false, faults: [], changed: changedSince(), progress, modes });
   }
 
   function submit(asking: Question): void {
@@ -264,7 +265,7 @@ export function follow(
     timers.tick.clear();
     timers.pause.clear();
     const changed = change.status === 'stale' ? changedSince() : null;
-    set({ slow: false, waits: false, progress: null, arrived: [], changed, ...change });
+    set({ slow: false, waits: false, progress: null, arrived: [], changed, modes, ...change });
   }
 
   function tick(): void {

@@ -42,13 +42,12 @@ type Action = typeof action extends fc.Arbitrary<infer T> ? T : never;
 function act(one: Action): void {
   if (one.kind === 'step') edit(`to ${one.value}`, stiffen(one.value));
   else if (one.kind === 'fold') edit(`drag to ${one.value}`, stiffen(one.value), { kind: 'fold', into: one.into });
-  else if (one.kind === 'undo') undo();
-  else if (one.kind === 'redo') redo();
-  else {
+  else if (one.kind === 'draft') {
     setDraft({ path: 'frame.storeys[1].stiffness', text: String(one.value), value: one.value });
     if (one.commit) commitDraft(`typed ${one.value}`);
     else setDraft(null);
-  }
+  } else if (one.kind === 'undo') undo();
+  else redo();
 }
 
 describe('undo and redo', () => {
