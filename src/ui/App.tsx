@@ -1,0 +1,64 @@
+import { lazy, Suspense, useEffect, useState } from 'react';
+
+import { useSession } from '../state/session.ts';
+import { appKey } from './appKeys.ts';
+import { Cautions } from './foot/Cautions.tsx';
+import { Evidence } from './foot/Evidence.tsx';
+import { Toast } from './foot/Toast.tsx';
+import { SheetScreen } from './sheet/SheetScreen.tsx';
+import { openExample } from './top/example.ts';
+import { pickProject, type Refused, saveProject } from './top/files.ts';
+import { RefusedDialog } from './top/RefusedDialog.tsx';
+import { TopBar } from './top/TopBar.tsx';
+import './tokens.css';
+import './controls/controls.css';
+import './foot/foot.css';
+import './app.css';
+
+const MotionsScreen = lazy(() =>
+  import('./motions/MotionsScreen.tsx').then((module) => ({ default: module.MotionsScreen })),
+);
+const Dialogs = lazy(() => import('./dialogs/Dialogs.tsx').then((module) => ({ default: module.Dialogs })));
+
+/** The whole page: bar, screen, footers, dialogs. */
+export function App() {
+  const screen = useSession((state) => state.screen);
+  const theme = useSession((state) => state.theme);
+  const [refused, setRefused] = useState<Refused | null>(null);
+  const open = () => pickProject(setRefused);
+
+  useEffect(() => {
+    if (theme === 'system') delete document.documentElement.dataset.theme;
+    else document.documentElement.dataset.theme = theme;
+  }, [theme]);
+  useEffect(() => {
+    const onKeyDown = (event: KeyboardEvent) =>
+      appKey(event, { open: () => pickProject(setRefused), save: saveProject });
+    window.addEventListener('keydown', onKeyDown);
+    return () => window.removeEventListener('keydown', onKeyDown);
+  }, []);
+
+  return (
+    <div className="app">
+      <TopBar onOpen={open} onSave={saveProject} />
+      <main>
+        {screen === 'motions' ? (
+          <Suspense fallback={null}>
+            <MotionsScreen />
+          </Suspense>
+        ) : (
+          <SheetScreen onOpen={open} onExample={openExample} />
+        )}
+      </main>
+      <footer className="feet" data-part="foot">
+        <Evidence />
+        <Cautions />
+      </footer>
+      <Toast />
+      <Suspense fallback={null}>
+        <Dialogs />
+      </Suspense>
+      {refused !== null && <RefusedDialog refused={refused} onClose={() => setRefused(null)} />}
+    </div>
+  );
+}

@@ -1,0 +1,103 @@
+import { printQuantity } from '../../core/units/quantities.ts';
+import { type Answers, useResults } from '../../state/results.ts';
+import { setSession } from '../../state/session.ts';
+import { dampingWords, methodWords } from './analysisWords.ts';
+
+/** How good the numbers are: what was assumed, the step, its error, the energy balance. The choices open their dialog. */
+export function Evidence() {
+  const answers = useResults((state) => state.answers);
+  const status = useResults((state) => state.status);
+  const stepErrors = useResults((state) => state.stepErrors);
+  if (answers === null) {
+    return (
+      <section className="foot evidence" aria-label="Evidence">
+        <h2 className="foot-head">Evidence</h2>
+        <span className="quiet">
+          none yet: method, step, step error and energy imbalance stand here after the first run
+        </span>
+      </section>
+    );
+  }
+  const { frame, analysis } = answers.case;
+  const old = status === 'stale';
+  return (
+    <section className={`foot evidence ${old ? 'old' : ''}`} aria-label="Evidence">
+      <h2 className="foot-head">Evidence</h2>
+      <ul className="facts">
+        <Choice>{dampingWords(frame.damping)}</Choice>
+        <Choice>P-Delta {frame.pDelta ? 'on' : 'off'}</Choice>
+        <Choice>{methodWords(analysis.method)}</Choice>
+        <Choice>
+          step {shortNumber(answers.step.size)} s{stepOrigin(answers)}
+        </Choice>
+        {stepErrors !== null && <StepError errors={Object.values(stepErrors)} />}
+        <li>
+          energy imbalance <b>{percent(Math.max(...answers.runs.map(({ run }) => run.energy.imbalance)))}</b>
+        </li>
+        <li>
+          step / shortest period{' '}
+          <b>{printQuantity(answers.step.overShortest, 'ratio', 'si', overDecimals(answers.step.overShortest))}</b>
+        </li>
+        <li>
+          {answers.step.limit === null ? (
+            'stable at any step'
+          ) : (
+            <>
+              stable up to a step of <b>{shortNumber(answers.step.limit)} s</b>
+            </>
+          )}
+        </li>
+        {old && <li>of the last finished run, {clock(answers.at)}</li>}
+      </ul>
+      <span className="at-end">
+        {answers.runs.filter(({ run }) => run.ending === null).length} of {answers.case.motions.length} runs in{' '}
+        <b>{printQuantity(answers.took / 1000, 'time', 'si', 2)} s</b>
+      </span>
+    </section>
+  );
+}
+
+function Choice({ children }: { readonly children: React.ReactNode }) {
+  return (
+    <li>
+      <button type="button" className="choice" onClick={() => setSession({ dialog: 'analysis' })}>
+        {children}
+      </button>
+    </li>
+  );
+}
+
+function StepError({ errors }: { readonly errors: readonly number[] }) {
+  if (errors.length === 0) return null;
+  const largest = Math.max(...errors);
+  return (
+    <li>
+      step error <b>{percent(largest)}</b>, aim below 1 %
+    </li>
+  );
+}
+
+function stepOrigin(answers: Answers): string {
+  const { step } = answers.case.analysis;
+  if (typeof step !== 'object') return '';
+  return step.parts === 1 ? ', the interval' : `, the interval in ${step.parts}`;
+}
+
+/** A ratio as percent with two figures that count. */
+function percent(ratio: number): string {
+  const decimals = ratio >= 0.01 ? 1 : ratio >= 0.00005 ? 2 : 3;
+  return `${printQuantity(ratio, 'percent', 'si', decimals)} %`;
+}
+
+function overDecimals(value: number): number {
+  return value < 0.1 ? 3 : 2;
+}
+
+/** A step with no more figures than it has. */
+function shortNumber(value: number): string {
+  return String(Number(value.toPrecision(3)));
+}
+
+function clock(at: number): string {
+  return new Date(at).toTimeString().slice(0, 5);
+}

@@ -1,0 +1,163 @@
+import { useMemo } from 'react';
+import { printQuantity, type Quantity, type System, unitOf } from '../../core/units/quantities.ts';
+import { type Axis, decimalsOf, linesOf } from './axis.ts';
+import { COLUMN_QUANTITIES, type InputColumn } from './columns.ts';
+import { px } from './drawing.ts';
+import type { SheetLayout, Span } from './layout.ts';
+
+export interface HeadsProps {
+  readonly layout: SheetLayout;
+  readonly columns: readonly InputColumn[];
+  readonly system: System;
+  readonly sway: number | null;
+  readonly toScale: boolean;
+  /** "mean of 7"; null: no answers. */
+  readonly suite: string | null;
+  readonly statistic: string;
+  readonly letter: string | null;
+  readonly factor: number;
+  readonly driftAxis: Axis;
+  readonly limit: number | null;
+  readonly shearAxis: Axis | null;
+  readonly accelerationAxis: Axis | null;
+}
+
+const HEADS: Readonly<Record<InputColumn, string>> = {
+  name: 'Storey',
+  height: 'Height',
+  mass: 'Weight',
+  stiffness: 'Stiffness',
+  law: 'Law',
+  gravity: 'Gravity load',
+};
+
+/** The heads of the columns in three tiers: caption, name, unit or axis numbers. For the eye: the grid names its own columns. */
+export function Heads(props: HeadsProps) {
+  const { layout, columns, system, sway, toScale, suite, statistic, letter, factor, driftAxis, limit } = props;
+  const { narrow, inputs, frame, answers, drift, shear, acceleration } = layout;
+  const unit = (quantity: Quantity) => unitOf(quantity, system);
+  const scaleWords = toScale ? (narrow ? 'To scale' : 'The frame, heights to scale') : 'Heights not to scale';
+  const times = factor === 1 ? '' : ` × ${factor}`;
+  return (
+    <div className="heads" aria-hidden="true">
+      <div className="tier1" style={{ left: inputs.x, width: inputs.width }}>
+        You type
+      </div>
+      <div className="tier1" style={{ left: frame.x, width: frame.width }}>
+        {scaleWords}
+        {sway !== null && `, sway × ${sway}`}
+      </div>
+      <div className="tier1" style={{ left: answers.x, width: answers.width }}>
+        <span>{narrow ? 'Answers' : 'The storey answers'}</span>
+        {suite !== null && <Legend suite={suite} letter={letter} />}
+      </div>
+      <div className="tier-cells" style={{ left: inputs.x }}>
+        {columns.map((column) => {
+          const quantity = COLUMN_QUANTITIES[column];
+          return (
+            <div
+              key={column}
+              className={`head-cell ${quantity === null ? 'words' : ''}`}
+              style={{ gridColumn: column, gridRow: 1 }}
+            >
+              <span>{narrow && column === 'gravity' ? 'Gravity' : HEADS[column]}</span>
+              <span className="unit">{quantity === null ? '' : unit(quantity)}</span>
+            </div>
+          );
+        })}
+        <HeadCell column="frame" kind="plot" name={`Level, ${unit('length')}`} />
+        <HeadCell column="drift" kind="plot" name={`${narrow ? 'Peak drift' : 'Peak drift ratio'}${times}, %`} />
+        <HeadCell column="mean" kind="result" name={statistic} unit={unit('percent')} />
+        <HeadCell column="ratio" kind="result" name="Of limit" unit="ratio" />
+        {!narrow && <HeadCell column="shear" kind="plot" name="Storey shear" />}
+        <HeadCell column="force" kind="result" name={narrow ? 'Shear' : statistic} unit={unit('force')} />
+        {!narrow && <HeadCell column="acceleration" kind="plot" name="Floor accel." />}
+        <HeadCell column="g" kind="result" name={narrow ? 'Accel.' : statistic} unit={unit('acceleration')} />
+      </div>
+      <AxisNumbers span={drift} axis={driftAxis} quantity="ratio" system={system} keepFree={limit} />
+      {shear !== null && props.shearAxis !== null && (
+        <AxisNumbers span={shear} axis={props.shearAxis} quantity="force" system={system} keepFree={null} />
+      )}
+      {acceleration !== null && props.accelerationAxis !== null && (
+        <AxisNumbers
+          span={acceleration}
+          axis={props.accelerationAxis}
+          quantity="ratio"
+          system={system}
+          keepFree={null}
+        />
+      )}
+    </div>
+  );
+}
+
+function HeadCell({ column, kind, name, unit = '' }: { column: string; kind: string; name: string; unit?: string }) {
+  return (
+    <div className={`head-cell ${kind}`} style={{ gridColumn: column, gridRow: 1 }}>
+      <span>{name}</span>
+      <span className="unit">{unit}</span>
+    </div>
+  );
+}
+
+interface AxisNumbersProps {
+  readonly span: Span;
+  readonly axis: Axis;
+  readonly quantity: Quantity;
+  readonly system: System;
+  /** A value whose place another thing takes: no number near it. */
+  readonly keepFree: number | null;
+}
+
+function AxisNumbers({ span, axis, keepFree }: AxisNumbersProps) {
+  const scale = span.width / axis.end;
+  const numbers = useMemo(() => [0, ...linesOf(axis, axis.major)], [axis]);
+  const decimals = decimalsOf(axis.major);
+  return (
+    <svg className="axis-head" style={{ left: span.x }} width={span.width} height="60">
+      {numbers.map((value) =>
+        keepFree !== null && Math.abs(value - keepFree) * scale < 30 ? null : (
+          <text key={value} x={px(value * scale)} y="49" className="middle">
+            {printQuantity(value, 'count', 'si', decimals)}
+          </text>
+        ),
+      )}
+    </svg>
+  );
+}
+
+function Legend({ suite, letter }: { readonly suite: string; readonly letter: string | null }) {
+  return (
+    <>
+      <span className="key">
+        <svg width="21" height="11" viewBox="0 0 21 11">
+          <rect y="1" width="18" height="9" className="f-mean" />
+          <path d="M18.5 0V11" className="s-ink" strokeWidth="3" />
+        </svg>
+        {suite}
+      </span>
+      <span className="key">
+        <svg width="9" height="11" viewBox="0 0 9 11">
+          <path d="M1.5 0V11M5.5 0V11M7.5 0V11" className="s-ink3" />
+        </svg>
+        each motion
+      </span>
+      {letter !== null && (
+        <>
+          <span className="key">
+            <svg width="5" height="11" viewBox="0 0 5 11">
+              <path d="M2 0V11" className="s-accent" strokeWidth="2" />
+            </svg>
+            {letter}
+          </span>
+          <span className="key">
+            <svg width="10" height="11" viewBox="0 0 10 11">
+              <path d="M4.5 2.5l4 6.5h-8z" className="f-accent" />
+            </svg>
+            {letter} at the cursor
+          </span>
+        </>
+      )}
+    </>
+  );
+}

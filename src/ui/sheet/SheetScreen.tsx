@@ -1,0 +1,245 @@
+import { lazy, Suspense, useMemo, useRef, useState } from 'react';
+import { toDisplay } from '../../core/units/quantities.ts';
+import { effectiveProject, useDocument } from '../../state/document.ts';
+import { useResults } from '../../state/results.ts';
+import { useChosenMotion, useChosenStorey } from '../../state/selectors.ts';
+import { useSession } from '../../state/session.ts';
+import { letterOf } from '../controls/letters.ts';
+import { answerRowsOf, motionDrifts } from './answerRows.ts';
+import { CellLine } from './CellLine.tsx';
+import { CellTools } from './CellTools.tsx';
+import { ANSWER_COLUMNS } from './columns.ts';
+import { ensureStorey } from './commands.ts';
+import { DriftPlot } from './DriftPlot.tsx';
+import { swayFactor } from './drawing.ts';
+import { EmptyStart } from './EmptyStart.tsx';
+import { bayOf, FrameDrawing } from './FrameDrawing.tsx';
+import { Grid } from './Grid.tsx';
+import { Ground } from './Ground.tsx';
+import { Heads } from './Heads.tsx';
+import { open } from './keys.ts';
+import { LimitCell } from './LimitCell.tsx';
+import { PasteDialog } from './PasteDialog.tsx';
+import { rowsOf } from './rows.ts';
+import { AccelerationPlot, ShearPlot } from './SidePlots.tsx';
+import { useAxes } from './useAxes.ts';
+import { useLayout } from './useLayout.ts';
+import { Verdict } from './Verdict.tsx';
+import './sheet.css';
+
+const GroundStack = lazy(() => import('../strip/GroundStack.tsx').then((module) => ({ default: module.GroundStack })));
+const SquarePanels = lazy(() =>
+  import('../plots/SquarePanels.tsx').then((module) => ({ default: module.SquarePanels })),
+);
+
+export interface SheetScreenProps {
+  readonly onOpen: () => void;
+  readonly onExample: () => void;
+}
+
+/** Frame and Response: the two ends of one screen. What is typed, the frame, what it answers; the ground; the motion. */
+export function SheetScreen({ onOpen, onExample }: SheetScreenProps) {
+  const page = useRef<HTMLDivElement>(null);
+  const project = useDocument(effectiveProject);
+  const editing = useDocument((state) => state.draft !== null);
+  const system = useSession((state) => state.system);
+  const selection = useSession((state) => state.selection);
+  const status = useResults((state) => state.status);
+  const slow = useResults((state) => state.slow);
+  const found = useResults((state) => state.answers);
+  const arrivedRuns = useResults((state) => state.arrived);
+  const faults = useResults((state) => state.faults);
+  const chosenStorey = useChosenStorey();
+  const chosenMotion = useChosenMotion();
+  const [pasted, setPasted] = useState<string | null>(null);
+  const typedGravity = project.frame.storeys.some(({ gravity }) => gravity !== undefined);
+  const [gravityShown, setGravityShown] = useState<boolean | null>(null);
+  const gravity = project.frame.pDelta && (gravityShown ?? typedGravity);
+  const { layout, columns, free } = useLayout(page, gravity);
+
+  const { storeys } = project.frame;
+  const empty = storeys.length === 0;
+  const heights = useMemo(() => (empty ? [null] : storeys.map(({ height }) => asNumber(height))), [storeys, empty]);
+  const stiffnesses = useMemo(() => storeys.map(({ stiffness }) => asNumber(stiffness)), [storeys]);
+  const rows = useMemo(() => rowsOf(heights, free), [heights, free]);
+  const height = Math.max(free, rows.total);
+  const cell = selection ?? { storey: Math.max(0, chosenStorey), column: empty ? 'height' : 'stiffness' };
+  const shownCell = { storey: Math.min(cell.storey, rows.heights.length - 1), column: cell.column };
+
+  // Answers of another number of storeys would stand on the wrong rows.
+  const answers = useMemo(
+    () => (found === null || found.case.frame.storeys.length !== storeys.length ? null : answerRowsOf(found, system)),
+    [found, storeys.length, system],
+  );
+  const old = status === 'stale' || (status === 'running' && slow);
+  const factor = found?.envelope.factor ?? 1;
+  const arrived = useMemo(
+    () => (slow && answers !== null ? motionDrifts(arrivedRuns, factor, system) : []),
+    [slow, answers, arrivedRuns, factor, system],
+  );
+  const typedLimit = asNumber(project.limits.drift);
+  const limit = typedLimit === null ? null : toDisplay(typedLimit, 'percent', system);
+  const axes = useAxes(answers, limit, editing);
+  const letters = useMemo(
+    () => Object.fromEntries(project.motions.map((motion, index) => [motion.name, letterOf(index)])),
+    [project.motions],
+  );
+  const letter = chosenMotion === null ? null : (letters[chosenMotion] ?? null);
+  const sway = useMemo(() => {
+    const peaks = found?.runs.flatMap(({ run }) => Array.from(run.floors.peakDisplacement)) ?? [];
+    return peaks.length === 0
+      ? null
+      : swayFactor(Math.max(...peaks), rows.scale, bayOf(layout.frame.width, layout.narrow ? 16 : 24).room);
+  }, [found, rows.scale, layout]);
+  const edit = () =>
+    open({
+      ground: { storeys: rows.heights.length, columns: [...columns, ...ANSWER_COLUMNS] },
+      inputs: columns,
+      cell: shownCell,
+      ensureStorey,
+    });
+  const statistic = { mean: 'Mean', median: 'Median', max: 'Largest' }[answers?.measure ?? 'mean'];
+  const tall = rows.total > free + 40;
+  return (
+    <div
+      ref={page}
+      className={`page ${layout.narrow ? 'narrow' : ''} ${tall ? 'tall' : ''}`}
+      onScroll={(event) => event.currentTarget.classList.toggle('scrolled', event.currentTarget.scrollTop > 0)}
+    >
+      <div
+        className="sheet-page"
+        style={{
+          width: layout.width,
+          ['--tracks' as string]: layout.tracks,
+          ['--under-left' as string]: `${layout.frame.x + layout.frame.width - layout.margin}px`,
+          ['--under-right' as string]: `${layout.answers.width}px`,
+        }}
+      >
+        <div className="sheet-head">
+          <div
+            className="cell-line"
+            style={{
+              left: layout.margin,
+              width: layout.narrow
+                ? layout.width - 2 * layout.margin
+                : layout.frame.x + layout.frame.width - layout.margin,
+            }}
+          >
+            <CellLine project={project} system={system} cell={shownCell} faults={faults} onEdit={edit} />
+            <CellTools storey={shownCell.storey} empty={empty} gravity={gravity} onGravity={setGravityShown} />
+          </div>
+          <div
+            aria-live="polite"
+            className="verdict-place"
+            style={
+              layout.narrow
+                ? { left: layout.margin, width: layout.width - 2 * layout.margin }
+                : { left: layout.answers.x, width: layout.answers.width }
+            }
+          >
+            <Verdict letters={letters} />
+          </div>
+          <Heads
+            layout={layout}
+            columns={columns}
+            system={system}
+            sway={sway}
+            toScale={rows.toScale}
+            suite={
+              answers === null || found === null
+                ? null
+                : `${statistic.toLowerCase()} of ${found.envelope.motions.length}`
+            }
+            statistic={statistic}
+            letter={letter}
+            factor={factor}
+            driftAxis={axes.drift}
+            limit={limit}
+            shearAxis={answers === null ? null : axes.shear}
+            accelerationAxis={answers === null ? null : axes.acceleration}
+          />
+          <div className="limit-place" style={{ left: layout.drift.x }}>
+            <LimitCell x={Math.min(layout.drift.width, ((limit ?? 0) * layout.drift.width) / axes.drift.end)} />
+          </div>
+        </div>
+        <div className={`rows ${old ? 'old' : ''}`} style={{ height }}>
+          {empty && <EmptyStart system={system} onOpen={onOpen} onExample={onExample} width={layout.inputs.width} />}
+          <div className="grid-place" style={{ left: layout.margin, right: layout.margin }}>
+            <Grid
+              project={project}
+              columns={columns}
+              rows={rows}
+              narrow={layout.narrow}
+              system={system}
+              cell={shownCell}
+              chosenStorey={empty ? -1 : chosenStorey}
+              answers={answers}
+              old={old}
+              faults={faults}
+              letters={letters}
+              onPaste={setPasted}
+            />
+          </div>
+          <FrameDrawing
+            span={layout.frame}
+            rows={rows}
+            height={height}
+            heights={heights}
+            stiffnesses={empty ? [null] : stiffnesses}
+            over={old ? [] : (answers?.over ?? [])}
+            governing={answers?.governing ?? -1}
+            sway={sway ?? 1}
+            system={system}
+            ghost={empty}
+          />
+          <DriftPlot
+            span={layout.drift}
+            rows={rows}
+            height={height}
+            axis={axes.drift}
+            answers={answers}
+            limit={limit}
+            standing={old ? 'old' : 'current'}
+            arrived={arrived}
+            chosenMotion={chosenMotion}
+            storeyHeights={heights}
+            factor={factor}
+            letters={letters}
+          />
+          {layout.shear !== null && answers !== null && (
+            <ShearPlot span={layout.shear} rows={rows} height={height} axis={axes.shear} answers={answers} old={old} />
+          )}
+          {layout.acceleration !== null && answers !== null && (
+            <AccelerationPlot
+              span={layout.acceleration}
+              rows={rows}
+              height={height}
+              axis={axes.acceleration}
+              answers={answers}
+              old={old}
+              chosenMotion={chosenMotion}
+            />
+          )}
+        </div>
+        <div className="under">
+          <Ground margin={layout.margin} />
+          <div className="under-panels" style={{ margin: `0 ${layout.margin}px` }}>
+            <Suspense fallback={<div />}>
+              <GroundStack />
+            </Suspense>
+            <Suspense fallback={<div />}>
+              <SquarePanels />
+            </Suspense>
+          </div>
+        </div>
+      </div>
+      {pasted !== null && (
+        <PasteDialog text={pasted} cell={shownCell} columns={columns} system={system} onClose={() => setPasted(null)} />
+      )}
+    </div>
+  );
+}
+
+function asNumber(value: unknown): number | null {
+  return typeof value === 'number' ? value : null;
+}

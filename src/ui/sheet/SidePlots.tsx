@@ -1,0 +1,131 @@
+import { memo, useMemo } from 'react';
+import type { AnswerRows } from './answerRows.ts';
+import { type Axis, linesOf } from './axis.ts';
+import { px } from './drawing.ts';
+import type { Span } from './layout.ts';
+import type { Rows } from './rows.ts';
+
+export interface SidePlotProps {
+  readonly span: Span;
+  readonly rows: Rows;
+  readonly height: number;
+  readonly axis: Axis;
+  readonly answers: AnswerRows | null;
+  readonly old: boolean;
+}
+
+/** Storey shear of the suite, one bar a row. */
+export const ShearPlot = memo(function ShearPlot({ span, rows, height, axis, answers, old }: SidePlotProps) {
+  const scale = span.width / axis.end;
+  const sky = height - rows.total;
+  const shear = answers?.shear ?? null;
+  return (
+    <svg
+      className="sheet-svg"
+      style={{ left: span.x }}
+      width={span.width}
+      height={height}
+      role="img"
+      aria-label="Peak storey shear; the numbers stand beside it"
+    >
+      <AxisLines axis={axis} scale={scale} height={height} />
+      {shear !== null &&
+        rows.heights.map((size, storey) => {
+          const end = Math.min((shear[storey] ?? 0) * scale, span.width + 4);
+          const middle = sky + (rows.tops[storey] ?? 0) + size / 2;
+          const body = size < 28 ? 4 : 6;
+          return old ? (
+            // biome-ignore lint/suspicious/noArrayIndexKey: a row is its storey
+            <path
+              key={storey}
+              d={`M0 ${middle - body}H${px(end)}v${2 * body}H0`}
+              className="s-ink3"
+              strokeDasharray="3 2"
+            />
+          ) : (
+            // biome-ignore lint/suspicious/noArrayIndexKey: a row is its storey
+            <g key={storey}>
+              <rect className="f-mean" y={middle - body} width={end} height={2 * body} />
+              <path d={`M${px(end)} ${middle - body - 1}v${2 * body + 2}`} className="s-ink" strokeWidth="3" />
+            </g>
+          );
+        })}
+    </svg>
+  );
+});
+
+/** Total floor acceleration as a line through the floor lines: each motion, the chosen one, the suite. */
+export const AccelerationPlot = memo(function AccelerationPlot({
+  span,
+  rows,
+  height,
+  axis,
+  answers,
+  old,
+  chosenMotion,
+}: SidePlotProps & { readonly chosenMotion: string | null }) {
+  const scale = span.width / axis.end;
+  const sky = height - rows.total;
+  const line = useMemo(
+    () => (values: readonly number[]) =>
+      values
+        .map((value, floor) => `${floor === 0 ? 'M' : 'L'}${px(value * scale)} ${sky + (rows.tops[floor] ?? 0)}`)
+        .join(''),
+    [rows, sky, scale],
+  );
+  const suite = answers?.acceleration ?? null;
+  const chosen = answers?.motions.find(({ motion }) => motion === chosenMotion);
+  return (
+    <svg
+      className="sheet-svg"
+      style={{ left: span.x }}
+      width={span.width}
+      height={height}
+      role="img"
+      aria-label="Peak floor acceleration; the numbers stand beside it"
+    >
+      <AxisLines axis={axis} scale={scale} height={height} />
+      {answers !== null && (
+        <g opacity={old ? 0.45 : undefined}>
+          <path
+            d={answers.motions.map((motion) => line(motion.acceleration)).join('')}
+            className="s-suite"
+            strokeWidth="0.7"
+            opacity="0.55"
+          />
+          {chosen !== undefined && <path d={line(chosen.acceleration)} className="s-accent" strokeWidth="1.2" />}
+          {suite !== null && (
+            <>
+              <path d={line(suite)} className="s-bar" strokeWidth="1.6" strokeLinejoin="round" />
+              <g className="f-bar" stroke="var(--paper)">
+                {suite.map((value, floor) => (
+                  // biome-ignore lint/suspicious/noArrayIndexKey: a dot is its floor
+                  <circle
+                    key={floor}
+                    cx={px(value * scale)}
+                    cy={sky + (rows.tops[floor] ?? 0)}
+                    r={(rows.heights[floor] ?? 0) < 28 ? 2 : 3.2}
+                  />
+                ))}
+              </g>
+            </>
+          )}
+        </g>
+      )}
+    </svg>
+  );
+});
+
+function AxisLines({ axis, scale, height }: { readonly axis: Axis; readonly scale: number; readonly height: number }) {
+  return (
+    <>
+      <path
+        d={linesOf(axis, axis.minor)
+          .map((value) => `M${px(value * scale)} -4V${height}`)
+          .join('')}
+        className="s-hair"
+      />
+      <path d={`M0 -4V${height}`} className="s-ink3" />
+    </>
+  );
+}

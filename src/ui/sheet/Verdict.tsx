@@ -1,0 +1,179 @@
+import { useEffect, useState } from 'react';
+import { verdictOf } from '../../core/checks/verdict.ts';
+import { edit, useDocument } from '../../state/document.ts';
+import { type ResultsState, runNow, stop, useResults } from '../../state/results.ts';
+import { Button } from '../controls/Button.tsx';
+import { CautionMark, Icon } from '../controls/Icon.tsx';
+
+export interface VerdictProps {
+  readonly letters: Readonly<Record<string, string>>;
+}
+
+/** One sentence on what governs, or on why there is none; said aloud once a run. */
+export function Verdict({ letters }: VerdictProps) {
+  const status = useResults((state) => state.status);
+  const slow = useResults((state) => state.slow);
+  const waits = useResults((state) => state.waits);
+  const answers = useResults((state) => state.answers);
+  const changed = useResults((state) => state.changed);
+  const faults = useResults((state) => state.faults);
+  const project = useDocument((state) => state.project);
+
+  if (status === 'running' && slow) return <Running />;
+  if (status === 'empty' || answers === null) {
+    const missing = [
+      project.frame.storeys.length === 0 ? 'a storey' : '',
+      project.motions.some((motion) => motion.used) ? '' : 'a record',
+    ]
+      .filter((word) => word !== '')
+      .join(' and ');
+    const many = faults.length > 1 ? `; ${faults.length} things to settle` : '';
+    return (
+      <Line
+        kind="quiet-verdict"
+        headline="Nothing to check yet"
+        detail={
+          missing !== ''
+            ? `${missing} ${missing.includes(' and ') ? 'are' : 'is'} missing`
+            : faults[0] === undefined
+              ? ''
+              : `${faults[0].message}${many}`
+        }
+      />
+    );
+  }
+  if (status === 'stale') {
+    return (
+      <Line
+        kind="old"
+        headline={`Out of date${changed === null ? '' : `: ${changed}`}`}
+        detail={waits ? '' : why(faults)}
+      >
+        {waits && (
+          <Button kind="primary" size="medium" onClick={runNow}>
+            Run {answers.case.motions.length} motions
+          </Button>
+        )}
+        {waits && <span className="keycap">F9</span>}
+      </Line>
+    );
+  }
+  const { envelope, runs } = answers;
+  const failed = runs.find(({ run }) => run.ending !== null);
+  const verdict = verdictOf(
+    envelope,
+    answers.case.frame.storeys.map((storey) => storey.name),
+  );
+  if (failed !== undefined && envelope.incomplete.length > 0) {
+    const letter = letters[failed.motion] ?? failed.motion;
+    return (
+      <Line kind="over" mark headline={verdict.headline} detail={verdict.detail}>
+        <Button size="medium" onClick={() => leaveOut(failed.motion)}>
+          Leave {letter} out
+        </Button>
+      </Line>
+    );
+  }
+  const left = envelope.leftOut[0];
+  return (
+    <Line
+      kind={verdict.over ? 'over' : ''}
+      mark={verdict.over}
+      met={!verdict.over}
+      headline={verdict.headline}
+      detail={verdict.detail}
+    >
+      {left !== undefined && envelope.leftOut.length === 1 && (
+        <Button size="medium" onClick={() => bringBack(left)}>
+          Bring {letters[left] ?? left} back
+        </Button>
+      )}
+    </Line>
+  );
+}
+
+function why(faults: ResultsState['faults']): string {
+  const first = faults[0];
+  if (first === undefined) return 'the answers are those of the last run';
+  return `${first.message}${faults.length > 1 ? `; ${faults.length} things to settle` : ''}`;
+}
+
+interface LineProps {
+  readonly kind: string;
+  readonly headline: string;
+  readonly detail: string;
+  readonly mark?: boolean;
+  readonly met?: boolean;
+  readonly children?: React.ReactNode;
+}
+
+function Line({ kind, headline, detail, mark = false, met = false, children }: LineProps) {
+  return (
+    <div className={`verdict ${kind}`}>
+      <span className="headline">
+        {mark && <CautionMark solid size={14} />}
+        {met && <Icon name="check" />}
+        {headline}
+      </span>
+      <span className="detail">{detail}</span>
+      {children !== undefined && <span className="mends">{children}</span>}
+    </div>
+  );
+}
+
+function Running() {
+  const progress = useResults((state) => state.progress);
+  const changed = useResults((state) => state.changed);
+  const [now, setNow] = useState(() => Date.now());
+  useEffect(() => {
+    const clock = setInterval(() => setNow(Date.now()), 250);
+    return () => clearInterval(clock);
+  }, []);
+  const done = progress?.done ?? 0;
+  const of = progress?.of ?? 1;
+  const share = of > 0 ? done / of : 0;
+  const spent = progress === null ? 0 : Math.max(0, now - progress.startedAt) / 1000;
+  const left = share > 0.05 ? `, about ${Math.ceil((spent * (1 - share)) / share)} s left` : '';
+  return (
+    <>
+      <div className="verdict">
+        <span className="headline">
+          Running: {Math.floor(done)} of {of} motions
+        </span>
+        <span className="detail">
+          {changed === null ? '' : `${changed}; `}
+          {Math.round(100 * share)} %{left}
+        </span>
+        <span className="mends">
+          <Button size="medium" onClick={stop}>
+            Stop
+          </Button>
+          <span className="keycap">Esc</span>
+        </span>
+      </div>
+      <div className="run-progress" role="progressbar" aria-label="Run" aria-valuenow={Math.round(100 * share)}>
+        <i style={{ width: `${100 * share}%` }} />
+      </div>
+    </>
+  );
+}
+
+function leaveOut(name: string): void {
+  edit(`leave out ${name}`, (project) => ({
+    ...project,
+    motions: project.motions.map((motion) =>
+      motion.name === name ? { ...motion, used: false, reason: motion.reason ?? 'did not run to its end' } : motion,
+    ),
+  }));
+}
+
+function bringBack(name: string): void {
+  edit(`bring back ${name}`, (project) => ({
+    ...project,
+    motions: project.motions.map((motion) => {
+      if (motion.name !== name) return motion;
+      const { reason: _, ...rest } = motion;
+      return { ...rest, used: true };
+    }),
+  }));
+}

@@ -1,0 +1,80 @@
+import type { Measure } from '../../core/checks/statistic.ts';
+import { printQuantity, printRatio, type System, toDisplay } from '../../core/units/quantities.ts';
+import type { Answers, MotionRun } from '../../state/results.ts';
+
+/** What the sheet draws and prints of an answer, in display units; storeys from the ground up. */
+export interface AnswerRows {
+  readonly storeys: number;
+  readonly measure: Measure;
+  readonly over: readonly boolean[];
+  readonly governing: number;
+  /** Drift that is compared [%]; null while a motion is not finished. */
+  readonly drift: readonly number[] | null;
+  readonly limit: number;
+  /** Of each motion: name and compared drift a storey [%]. */
+  readonly motions: readonly MotionDrift[];
+  /** [display force] */
+  readonly shear: readonly number[] | null;
+  /** Total floor acceleration [g], floor 1 first. */
+  readonly acceleration: readonly number[] | null;
+  readonly print: {
+    readonly drift: readonly string[];
+    readonly ratio: readonly string[];
+    readonly shear: readonly string[];
+    readonly acceleration: readonly string[];
+  };
+  /** Runs that did not reach their end. */
+  readonly failed: readonly { readonly motion: string; readonly storey: number; readonly time: number }[];
+}
+
+export interface MotionDrift {
+  readonly motion: string;
+  readonly drift: readonly number[];
+  readonly acceleration: readonly number[];
+  /** False where the run ended early: its ticks are how far it came. */
+  readonly finished: boolean;
+}
+
+/** Drifts of runs as the axis shows them: times the factor of the limit, so that bar, tick and limit compare. */
+export function motionDrifts(runs: readonly MotionRun[], factor: number, system: System): MotionDrift[] {
+  return runs.map(({ motion, run }) => ({
+    motion,
+    drift: Array.from(run.storeys.peakDriftRatio, (value) => toDisplay(factor * value, 'percent', system)),
+    acceleration: Array.from(run.floors.peakAcceleration, (value) => toDisplay(value, 'acceleration', system)),
+    finished: run.ending === null,
+  }));
+}
+
+export function answerRowsOf(answers: Answers, system: System): AnswerRows {
+  const { envelope, runs } = answers;
+  const { measure, ratio, limit } = envelope;
+  const storeys = answers.case.frame.storeys.length;
+  const none = Array.from({ length: storeys }, () => 'none');
+  const print = (values: Float64Array | undefined, quantity: 'percent' | 'force' | 'acceleration', decimals: number) =>
+    values === undefined ? none : Array.from(values, (value) => printQuantity(value, quantity, system, decimals));
+  const shown = (values: Float64Array | undefined, quantity: 'percent' | 'force' | 'acceleration') =>
+    values === undefined ? null : Array.from(values, (value) => toDisplay(value, quantity, system));
+  const compared = ratio?.map((value) => value * limit);
+  const shear = envelope.shear?.[measure];
+  const acceleration = envelope.acceleration?.[measure];
+  return {
+    storeys,
+    measure,
+    over: Array.from({ length: storeys }, (_, storey) => (ratio?.[storey] ?? 0) > 1),
+    governing: envelope.governingStorey,
+    drift: shown(compared, 'percent'),
+    limit: toDisplay(limit, 'percent', system),
+    motions: motionDrifts(runs, envelope.factor, system),
+    shear: shown(shear, 'force'),
+    acceleration: shown(acceleration, 'acceleration'),
+    print: {
+      drift: print(compared, 'percent', 2),
+      ratio: ratio === null ? none : Array.from(ratio, printRatio),
+      shear: print(shear, 'force', 0),
+      acceleration: print(acceleration, 'acceleration', 2),
+    },
+    failed: runs.flatMap(({ motion, run }) =>
+      run.ending === null ? [] : [{ motion, storey: run.ending.storey, time: run.ending.time }],
+    ),
+  };
+}

@@ -1,0 +1,42 @@
+/** A number for an SVG attribute: a tenth of a pixel is enough. */
+export function px(value: number): string {
+  return String(Math.round(value * 10) / 10);
+}
+
+/** A column in double curvature between two floors: vertical at both ends. */
+export function columnPath(xFoot: number, yFoot: number, xHead: number, yHead: number): string {
+  const reach = 0.3833 * (yFoot - yHead);
+  return `M${px(xFoot)} ${px(yFoot)}C${px(xFoot)} ${px(yFoot - reach)} ${px(xHead)} ${px(yHead + reach)} ${px(xHead)} ${px(yHead)}`;
+}
+
+/** Upright ticks of one row as one path. */
+export function ticksPath(xs: readonly number[], top: number, bottom: number): string {
+  return xs.map((x) => `M${px(x)} ${px(top)}V${px(bottom)}`).join('');
+}
+
+/** The triangle under a bar that marks the drift at the cursor. */
+export function markPath(x: number, top: number): string {
+  return `M${px(x)} ${px(top)}l4 6h-8z`;
+}
+
+/** Line widths of the columns [px]: 1.2 for the softest storey, 3.4 for the stiffest, 2.4 where all are alike. */
+export function columnWidths(stiffnesses: readonly (number | null)[]): number[] {
+  const known = stiffnesses.filter((value): value is number => value !== null && value > 0);
+  const least = Math.min(...known);
+  const span = Math.max(...known) - least;
+  return stiffnesses.map((value) =>
+    value === null || !(value > 0) || !(span > 0) ? 2.4 : 1.2 + (2.2 * (value - least)) / span,
+  );
+}
+
+/**
+ * The largest whole number up to 20 that keeps the sway inside its room.
+ *
+ * @param peak   largest floor displacement of the suite [m]
+ * @param scale  [px/m]
+ * @param room   [px]
+ */
+export function swayFactor(peak: number, scale: number, room: number): number {
+  if (!(peak > 0)) return 20;
+  return Math.min(20, Math.max(1, Math.floor(room / (peak * scale))));
+}

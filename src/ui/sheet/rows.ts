@@ -1,0 +1,62 @@
+/** Heights of the storey rows [px]: to scale, so that up is height. */
+export interface Rows {
+  /** Row height of each storey, from the ground up. */
+  readonly heights: readonly number[];
+  /** Distance of each storey's top from the roof line, from the ground up. */
+  readonly tops: readonly number[];
+  readonly total: number;
+  /** [px/m] */
+  readonly scale: number;
+  /** False where a row had to be made higher than its storey. */
+  readonly toScale: boolean;
+}
+
+const LEAST_SCALE = 8;
+const LARGEST_SCALE = 14;
+/** A row is never under this. */
+const LEAST_ROW = 20;
+/** Height drawn for a storey whose own is not typed yet, where no other storey has one [m]. */
+const UNTYPED_HEIGHT = 3.6;
+
+/**
+ * @param heights  storey heights from the ground up, null where not typed or not readable [m]
+ * @param free     height the building may take [px]
+ *
+ * A building that would not fit at 8 px/m is drawn smaller for as long as no row gets under 20 px, so that a tall one is
+ * seen whole; from there on rows keep 20 px and the sheet scrolls.
+ */
+export function rowsOf(heights: readonly (number | null)[], free: number): Rows {
+  const known = heights.filter((height): height is number => height !== null && height > 0 && Number.isFinite(height));
+  const usual = known.length > 0 ? known.reduce((sum, height) => sum + height, 0) / known.length : UNTYPED_HEIGHT;
+  const drawn = heights.map((height) => (height !== null && height > 0 && Number.isFinite(height) ? height : usual));
+  const metres = drawn.reduce((sum, height) => sum + height, 0);
+  const fitting = metres > 0 ? free / metres : LARGEST_SCALE;
+  const lowest = Math.min(...drawn);
+  const least = Math.min(LEAST_SCALE, LEAST_ROW / lowest);
+  const scale = Math.min(LARGEST_SCALE, Math.max(fitting, least));
+  const squeezed = fitting < least;
+  const used = squeezed ? fitting : scale;
+
+  let level = 0;
+  let edge = 0;
+  let toScale = true;
+  const sizes = drawn.map((height) => {
+    level += height;
+    const next = Math.round(level * used);
+    const size = squeezed ? Math.max(LEAST_ROW, Math.round(height * used)) : next - edge;
+    edge = next;
+    if (size >= LEAST_ROW) {
+      if (squeezed && size !== Math.round(height * used)) toScale = false;
+      return size;
+    }
+    toScale = false;
+    return LEAST_ROW;
+  });
+  const total = sizes.reduce((sum, size) => sum + size, 0);
+  let below = 0;
+  const tops = sizes.map((size) => {
+    below += size;
+    return total - below;
+  });
+  return { heights: sizes, tops, total, scale: used, toScale };
+}

@@ -1,0 +1,31 @@
+import { useRef } from 'react';
+import type { AnswerRows } from './answerRows.ts';
+import { type Axis, axisFor } from './axis.ts';
+
+export interface Axes {
+  readonly drift: Axis;
+  readonly shear: Axis;
+  readonly acceleration: Axis;
+}
+
+/** The axes of the sheet. They hold their range while a cell is edited, so that bars and not the axis move. */
+export function useAxes(answers: AnswerRows | null, limit: number | null, editing: boolean): Axes {
+  const held = useRef<Axes | null>(null);
+  if (editing && held.current !== null) return held.current;
+  const axes = axesOf(answers, limit);
+  held.current = answers === null ? null : axes;
+  return axes;
+}
+
+function axesOf(answers: AnswerRows | null, limit: number | null): Axes {
+  const aim = limit ?? 0;
+  if (answers === null)
+    return { drift: axisFor(Math.max(1.5 * aim, 0), 3), shear: axisFor(0, 2), acceleration: axisFor(0, 2) };
+  const drifts = answers.motions.flatMap(({ drift }) => drift);
+  const accelerations = answers.motions.flatMap(({ acceleration }) => acceleration);
+  return {
+    drift: axisFor(Math.max(1.08 * aim, ...drifts, ...(answers.drift ?? [])), 3),
+    shear: axisFor(Math.max(0, ...(answers.shear ?? [])), 1.2),
+    acceleration: axisFor(Math.max(0, ...accelerations), 2),
+  };
+}

@@ -1,0 +1,45 @@
+import { type RefObject, useLayoutEffect, useMemo, useState } from 'react';
+import { inputColumns } from './columns.ts';
+import { layoutOf, type SheetLayout } from './layout.ts';
+
+/** Heights of the parts above and below the sheet [px]: top bar, line and verdict, heads, ground, footers. */
+const WIDE_AROUND = 48 + 44 + 60 + 12 + 62;
+const NARROW_AROUND = 48 + 76 + 60 + 12 + 93;
+const PANELS = 384;
+const LEAST_FREE = 300;
+
+export interface PageSize {
+  readonly layout: SheetLayout;
+  readonly columns: ReturnType<typeof inputColumns>;
+  /** Height the building may take [px]. */
+  readonly free: number;
+}
+
+/** The layout of the sheet for the page as wide as it is. */
+export function useLayout(page: RefObject<HTMLElement | null>, gravity: boolean): PageSize {
+  const [size, setSize] = useState({ width: window.innerWidth, window: window.innerWidth, height: window.innerHeight });
+  useLayoutEffect(() => {
+    const measure = () => {
+      const width = page.current?.clientWidth ?? window.innerWidth;
+      setSize((before) =>
+        before.width === width && before.window === window.innerWidth && before.height === window.innerHeight
+          ? before
+          : { width, window: window.innerWidth, height: window.innerHeight },
+      );
+    };
+    measure();
+    const observer = new ResizeObserver(measure);
+    if (page.current !== null) observer.observe(page.current);
+    window.addEventListener('resize', measure);
+    return () => {
+      observer.disconnect();
+      window.removeEventListener('resize', measure);
+    };
+  }, [page]);
+  return useMemo(() => {
+    const columns = inputColumns(gravity);
+    const layout = layoutOf(size.width, size.window, columns);
+    const around = layout.narrow ? NARROW_AROUND : WIDE_AROUND;
+    return { columns, layout, free: Math.max(LEAST_FREE, size.height - around - PANELS) };
+  }, [size, gravity]);
+}

@@ -1,0 +1,34 @@
+import { Button } from '../controls/Button.tsx';
+import { Dialog } from '../controls/Dialog.tsx';
+import type { Refused } from './files.ts';
+
+/** Why a project file was not opened: all of it at once. The document stays as it was. */
+export function RefusedDialog({ refused, onClose }: { readonly refused: Refused; readonly onClose: () => void }) {
+  const { file, faults } = refused;
+  return (
+    <Dialog
+      title={`${file} was not opened`}
+      width={640}
+      onClose={onClose}
+      foot={
+        <Button kind="primary" onClick={onClose}>
+          Close
+        </Button>
+      }
+    >
+      <p className="quiet">
+        {faults.length === 1 ? 'One thing stands' : `${faults.length} things stand`} in the way. Your document is as it
+        was, and so is the file.
+      </p>
+      <ul className="fault-list">
+        {faults.map((fault) => (
+          <li key={fault.where + fault.code}>
+            <b>{fault.where}</b>
+            <span>{fault.message}</span>
+            <span className="quiet">{fault.mend}</span>
+          </li>
+        ))}
+      </ul>
+    </Dialog>
+  );
+}
