@@ -35,7 +35,7 @@ export function shownText(project: Project, path: string, system: System): strin
 }
 
 /** What a text in a field is taken for: a number (SI), null, or the text itself where it cannot be read yet. */
-function valueOf(path: string, text: string, system: System): Typed {
+function valueRead(path: string, text: string, system: System): Typed {
   const quantity = quantityOf(path);
   if (quantity === null) return text;
   const reading = readQuantity(text, quantity, system, committedNumber(path));
@@ -52,7 +52,7 @@ export function committedNumber(path: string): number | null {
 /** The text of a field while it is edited: the draft, so that the answers follow each key. */
 export function typeField(path: string, text: string, system: System): void {
   if (documentStore.getState().draft?.path !== path) commitOpenDraft();
-  setDraft({ path, text, value: valueOf(path, text, system) });
+  setDraft({ path, text, value: valueRead(path, text, system) });
 }
 
 /** Opens a field for editing with its value as it stands. */

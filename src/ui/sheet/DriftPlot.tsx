@@ -71,7 +71,6 @@ export function DriftPlot(props: DriftPlotProps) {
       {answers !== null &&
         rows.heights.map((size, storey) => (
           <DriftRow
-            // biome-ignore lint/suspicious/noArrayIndexKey: a row is its storey
             key={storey}
             middle={sky + (rows.tops[storey] ?? 0) + size / 2}
             size={size}
@@ -89,7 +88,6 @@ export function DriftPlot(props: DriftPlotProps) {
       {answers !== null && <Lit motions={answers.motions} rows={rows} sky={sky} scale={scale} width={span.width} />}
       <g ref={marks} fill="var(--accent)">
         {rows.heights.map((_, storey) => (
-          // biome-ignore lint/suspicious/noArrayIndexKey: a row is its storey
           <path key={storey} />
         ))}
       </g>

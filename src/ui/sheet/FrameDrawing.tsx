@@ -104,7 +104,6 @@ export function FrameDrawing(props: FrameDrawingProps) {
       <g ref={columns} fill="none">
         {widths.map((width, storey) => (
           <path
-            // biome-ignore lint/suspicious/noArrayIndexKey: a path is its storey
             key={storey}
             className={over[storey] && storey === governing ? 's-signal' : 's-ink'}
             strokeWidth={Math.round(width * 100) / 100}
@@ -113,14 +112,12 @@ export function FrameDrawing(props: FrameDrawingProps) {
       </g>
       <g ref={slabs} className="f-ink">
         {rows.tops.map((top, storey) => (
-          // biome-ignore lint/suspicious/noArrayIndexKey: a slab is its floor
           <rect key={storey} y={sky + top - 2.5} width={right - left + 18} height="5" />
         ))}
       </g>
       <path d={`M${left - 6} ${height - 3}h12v5h-12zM${right - 6} ${height - 3}h12v5h-12z`} className="f-ink" />
       <g>
         {floors.map((y, floor) => (
-          // biome-ignore lint/suspicious/noArrayIndexKey: a level is its floor
           <g key={floor}>
             <path d={`M2 ${y - 6}h8l-4 6z`} className="s-ink3" />
             <text x="13" y={y - 3} className="halo">

@@ -114,7 +114,7 @@ function AxisNumbers({ span, axis, keepFree }: AxisNumbersProps) {
   const numbers = useMemo(() => [0, ...linesOf(axis, axis.major)], [axis]);
   const decimals = decimalsOf(axis.major);
   return (
-    <svg className="axis-head" style={{ left: span.x }} width={span.width} height="60">
+    <svg className="axis-head" aria-hidden="true" style={{ left: span.x }} width={span.width} height="60">
       {numbers.map((value) =>
         keepFree !== null && Math.abs(value - keepFree) * scale < 30 ? null : (
           <text key={value} x={px(value * scale)} y="49" className="middle">
@@ -130,14 +130,14 @@ function Legend({ suite, letter }: { readonly suite: string; readonly letter: st
   return (
     <>
       <span className="key">
-        <svg width="21" height="11" viewBox="0 0 21 11">
+        <svg aria-hidden="true" width="21" height="11" viewBox="0 0 21 11">
           <rect y="1" width="18" height="9" className="f-mean" />
           <path d="M18.5 0V11" className="s-ink" strokeWidth="3" />
         </svg>
         {suite}
       </span>
       <span className="key">
-        <svg width="9" height="11" viewBox="0 0 9 11">
+        <svg aria-hidden="true" width="9" height="11" viewBox="0 0 9 11">
           <path d="M1.5 0V11M5.5 0V11M7.5 0V11" className="s-ink3" />
         </svg>
         each motion
@@ -145,13 +145,13 @@ function Legend({ suite, letter }: { readonly suite: string; readonly letter: st
       {letter !== null && (
         <>
           <span className="key">
-            <svg width="5" height="11" viewBox="0 0 5 11">
+            <svg aria-hidden="true" width="5" height="11" viewBox="0 0 5 11">
               <path d="M2 0V11" className="s-accent" strokeWidth="2" />
             </svg>
             {letter}
           </span>
           <span className="key">
-            <svg width="10" height="11" viewBox="0 0 10 11">
+            <svg aria-hidden="true" width="10" height="11" viewBox="0 0 10 11">
               <path d="M4.5 2.5l4 6.5h-8z" className="f-accent" />
             </svg>
             {letter} at the cursor

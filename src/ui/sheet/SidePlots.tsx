@@ -35,7 +35,6 @@ export const ShearPlot = memo(function ShearPlot({ span, rows, height, axis, ans
           const middle = sky + (rows.tops[storey] ?? 0) + size / 2;
           const body = size < 28 ? 4 : 6;
           return old ? (
-            // biome-ignore lint/suspicious/noArrayIndexKey: a row is its storey
             <path
               key={storey}
               d={`M0 ${middle - body}H${px(end)}v${2 * body}H0`}
@@ -43,7 +42,6 @@ export const ShearPlot = memo(function ShearPlot({ span, rows, height, axis, ans
               strokeDasharray="3 2"
             />
           ) : (
-            // biome-ignore lint/suspicious/noArrayIndexKey: a row is its storey
             <g key={storey}>
               <rect className="f-mean" y={middle - body} width={end} height={2 * body} />
               <path d={`M${px(end)} ${middle - body - 1}v${2 * body + 2}`} className="s-ink" strokeWidth="3" />
@@ -99,7 +97,6 @@ export const AccelerationPlot = memo(function AccelerationPlot({
               <path d={line(suite)} className="s-bar" strokeWidth="1.6" strokeLinejoin="round" />
               <g className="f-bar" stroke="var(--paper)">
                 {suite.map((value, floor) => (
-                  // biome-ignore lint/suspicious/noArrayIndexKey: a dot is its floor
                   <circle
                     key={floor}
                     cx={px(value * scale)}

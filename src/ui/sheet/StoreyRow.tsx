@@ -19,7 +19,6 @@ export interface StoreyRowProps {
   readonly storey: number;
   readonly row: Row;
   readonly size: number;
-  readonly last: boolean;
   readonly system: System;
   readonly columns: readonly InputColumn[];
   readonly narrow: boolean;
@@ -70,13 +69,15 @@ export const StoreyRow = memo(function StoreyRow(props: StoreyRowProps) {
       style={{ height: size }}
       data-storey={storey}
     >
-      <div className="storey-head" role="rowheader">
+      <div
+        className="storey-head"
+        role="rowheader"
+        data-cell="name"
+        tabIndex={cell === 'name' && !nameEditing ? 0 : -1}
+        aria-selected={cell === 'name'}
+      >
         <span className="index">{storey + 1}</span>
-        <span
-          className={`name ${shown ? '' : 'alone'} ${state('name')}`}
-          data-cell="name"
-          tabIndex={cell === 'name' && !nameEditing ? 0 : -1}
-        >
+        <span className={`name ${shown ? '' : 'alone'} ${state('name')}`}>
           {nameEditing ? (
             <CellInput
               path={cellPath(storey, 'name')}
@@ -85,7 +86,7 @@ export const StoreyRow = memo(function StoreyRow(props: StoreyRowProps) {
               label={`Storey ${storey + 1}, name`}
             />
           ) : (
-            row.name || ' '
+            row.name || '\u00a0'
           )}
         </span>
         {shown && <span className={`tag ${failed ? 'failed' : ''}`}>{tag}</span>}
