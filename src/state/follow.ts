@@ -13,6 +13,7 @@ import { expectedTime } from './expected.ts';
 import { type Ask, atHalfStep, type Question, questionOf, withHistories } from './question.ts';
 import { recentRuns } from './recent.ts';
 import { sessionStore } from './session.ts';
+import { timer } from './timer.ts';
 
 /** Waiting times [ms]; the tests choose their own. */
 export interface Pace {
@@ -361,30 +362,5 @@ function samplesLost({ motion }: Ask): Fault {
     where: `motions.${motion}`,
     message: `the samples of ${motion} are not in this browser's store`,
     mend: 'Load its record again, or open the project file that holds it',
-  };
-}
-
-interface Timer {
-  set(milliseconds: number, task: () => void): void;
-  clear(): void;
-  waits(): boolean;
-}
-
-function timer(): Timer {
-  let handle: ReturnType<typeof setTimeout> | null = null;
-  const clear = () => {
-    if (handle !== null) clearTimeout(handle);
-    handle = null;
-  };
-  return {
-    set(milliseconds, task) {
-      clear();
-      handle = setTimeout(() => {
-        handle = null;
-        task();
-      }, milliseconds);
-    },
-    clear,
-    waits: () => handle !== null,
   };
 }
