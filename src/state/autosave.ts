@@ -2,7 +2,7 @@ import type { Result } from '../core/fault.ts';
 import type { Project } from '../document/project.ts';
 import { type Draft, documentStore, effectiveProject, restore } from './document.ts';
 import type { Keeper } from './keeper.ts';
-import { linesOf, readDraft, readEnvelope } from './kept.ts';
+import { linesOf, readDraft, readEnvelope, writtenAt } from './kept.ts';
 import { onNewSamples, putSamples, samplesOf } from './samples.ts';
 import { KEYS, type Writer, writerTo } from './writer.ts';
 
@@ -63,6 +63,7 @@ export async function startAutosave(keeper: Keeper, { first, alone, onLeave }: A
   }
   const aside = kept && !kept.ok ? await moveAside(keeper, stored, linesOf(kept.faults)) : true;
   if (!aside) return nothing;
+  documentStore.setState({ savedAt: kept?.ok ? writtenAt(stored.document) : null });
   const known = await collect(keeper, stored.keys);
   const writer = writerTo(keeper, known, (refusal) => {
     if (refusal === null) documentStore.setState({ savedAt: Date.now(), saveFault: null });
@@ -87,9 +88,8 @@ function follow(writer: Writer, unsaved: boolean, onLeave: AutosaveOptions['onLe
   });
   const off = documentStore.subscribe((now, before) => {
     if (now.project !== before.project) writer.document(now.project);
-    if (now.draft === before.draft) return;
-    if (now.draft) later();
-    else writeDraft();
+    if (now.draft && now.draft !== before.draft) later();
+    else if (now.draft !== before.draft) writeDraft();
   });
   onNewSamples((digest, samples) => writer.samples(digest, samples));
   const { project } = documentStore.getState();

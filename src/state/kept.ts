@@ -6,11 +6,19 @@ import type { Draft } from './document.ts';
 export interface Envelope {
   readonly format: typeof PROJECT_FORMAT;
   readonly version: number;
+  /** When it was written [ms since 1970]. */
+  readonly at: number;
   readonly document: Project;
 }
 
-export function envelopeFor(document: Project): Envelope {
-  return { format: PROJECT_FORMAT, version: PROJECT_VERSION, document };
+export function envelopeFor(document: Project, at: number): Envelope {
+  return { format: PROJECT_FORMAT, version: PROJECT_VERSION, at, document };
+}
+
+/** When a stored envelope was written; null where it does not say. */
+export function writtenAt(stored: unknown): number | null {
+  const at = objectOf(stored)?.at;
+  return typeof at === 'number' ? at : null;
 }
 
 /** The project in a stored envelope, or why it cannot be used. A field may hold anything typed; the shape must be whole. */

@@ -14,86 +14,71 @@ export interface Writer {
   samples(digest: string, samples: Float64Array): void;
   document(project: Project): void;
   draft(draft: Draft | null): void;
-  /** Settles when everything asked so far was written or refused. Tries again what was refused before. */
+  /** Tries again what was refused; settles when everything asked so far was written or refused. */
   flush(): Promise<void>;
 }
 
+interface Write {
+  readonly key: string;
+  readonly act: () => Promise<void>;
+}
+
 /**
- * Writes to the browser's store, one write after the other, always the newest of each: what is asked during a write is
- * written after it, and what was refused stays asked for.
+ * Writes to the browser's store at once, so that a page which is left has asked for everything: the keeper takes writes in the
+ * order asked. What was refused is kept and tried again with the next write, unless a newer one for its key was taken.
  *
  * @param known  digests whose samples are stored already
- * @param told   after each round: why something was refused, or null
+ * @param told   whenever nothing is under way: why something was refused, or null
  */
 export function writerTo(keeper: Keeper, known: Set<string>, told: (refusal: string | null) => void): Writer {
-  const samples = new Map<string, Float64Array>();
-  let document: Project | null = null;
-  let draft: { readonly value: Draft | null } | null = null;
-  let round: Promise<void> | null = null;
-  let again = false;
+  const newest = new Map<string, Write>();
+  const refused = new Map<Write, string>();
+  const underWay = new Set<Promise<void>>();
 
-  /** One after the other: samples before the document that refers to them. A refusal of one does not keep the others back. */
-  async function writeAll(): Promise<void> {
-    await null;
-    do {
-      again = false;
-      let refusal: string | null = null;
-      let attempts = 0;
-      const attempt = async (write: () => Promise<void>) => {
-        attempts += 1;
-        try {
-          await write();
-        } catch (error) {
-          refusal ??= error instanceof Error ? error.message : String(error);
-        }
-      };
-      for (const [digest, values] of samples) {
-        await attempt(async () => {
-          await keeper.set(KEYS.samples(digest), values);
-          known.add(digest);
-          samples.delete(digest);
-        });
-      }
-      const [project, typed] = [document, draft];
-      if (project) {
-        await attempt(async () => {
-          await keeper.set(KEYS.document, envelopeFor(project));
-          if (document === project) document = null;
-        });
-      }
-      if (typed) {
-        await attempt(async () => {
-          if (typed.value) await keeper.set(KEYS.draft, typed.value);
-          else await keeper.delete(KEYS.draft);
-          if (draft === typed) draft = null;
-        });
-      }
-      if (attempts > 0) told(refusal);
-    } while (again);
-    // Here and not in a `finally` of the promise: nothing may be asked between the last look at `again` and this.
-    round = null;
+  function ask(key: string, act: () => Promise<void>): void {
+    const write = { key, act };
+    newest.set(key, write);
+    tryAgain();
+    start(write);
   }
 
-  function start(): Promise<void> {
-    if (round) again = true;
-    else round = writeAll();
-    return round;
+  function start(write: Write): void {
+    const done = write.act().then(
+      () => settle(write, null),
+      (error) => settle(write, error instanceof Error ? error.message : String(error)),
+    );
+    const one = done.then(() => {
+      underWay.delete(one);
+      if (underWay.size === 0) told(refused.values().next().value ?? null);
+    });
+    underWay.add(one);
+  }
+
+  function settle(write: Write, refusal: string | null): void {
+    if (refusal !== null && newest.get(write.key) === write) refused.set(write, refusal);
+  }
+
+  function tryAgain(): void {
+    const again = [...refused.keys()];
+    refused.clear();
+    for (const write of again) if (newest.get(write.key) === write) start(write);
   }
 
   return {
     samples(digest, values) {
       if (known.has(digest)) return;
-      samples.set(digest, values);
-      void start();
+      known.add(digest);
+      ask(KEYS.samples(digest), () => keeper.set(KEYS.samples(digest), values));
     },
     document(project) {
-      document = project;
-      void start();
+      ask(KEYS.document, () => keeper.set(KEYS.document, envelopeFor(project, Date.now())));
     },
     draft(value) {
-      draft = { value };
-      void start();
+      ask(KEYS.draft, () => (value ? keeper.set(KEYS.draft, value) : keeper.delete(KEYS.draft)));
     },
-    flush: () => start(),
+    async flush() {
+      tryAgain();
+      while (underWay.size > 0) await Promise.all(underWay);
+    },
   };
 }

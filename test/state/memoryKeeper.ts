@@ -7,19 +7,19 @@ export interface MemoryKeeper extends Keeper {
   readonly writes: string[];
   /** Refuses a call with these words while it returns some. */
   refuse: (call: 'get' | 'set' | 'delete' | 'keys', key: string) => string | null;
-  /** Writes under way at the same time, at most. */
-  readonly most: () => number;
+  /** Settles when every call made so far was taken or refused. */
+  idle(): Promise<void>;
 }
 
 export function memoryKeeper(initial: Iterable<readonly [string, unknown]> = []): MemoryKeeper {
   const values = new Map<string, unknown>(initial);
   const writes: string[] = [];
-  let [open, most] = [0, 0];
+  const open = new Set<Promise<void>>();
   const call = async <T>(kind: 'get' | 'set' | 'delete' | 'keys', key: string, act: () => T): Promise<T> => {
-    open += 1;
-    most = Math.max(most, open);
-    await new Promise((resolve) => setImmediate(resolve));
-    open -= 1;
+    const turn = new Promise<void>((resolve) => setImmediate(resolve));
+    open.add(turn);
+    await turn;
+    open.delete(turn);
     const refusal = keeper.refuse(kind, key);
     if (refusal !== null) throw new Error(refusal);
     return act();
@@ -28,7 +28,9 @@ export function memoryKeeper(initial: Iterable<readonly [string, unknown]> = [])
     values,
     writes,
     refuse: () => null,
-    most: () => most,
+    async idle() {
+      while (open.size > 0) await Promise.all(open);
+    },
     get: (key) => call('get', key, () => structuredClone(values.get(key))),
     set(key, value) {
       const copy = structuredClone(value);
