@@ -112,7 +112,7 @@ export function FrameDrawing(props: FrameDrawingProps) {
       </g>
       <g ref={slabs} className="f-ink">
         {rows.tops.map((top, storey) => (
-          <rect key={storey} y={sky + top - 2.5} width={right - left + 18} height="5" />
+          <Slab key={storey} y={sky + top} width={right - left + 18} thick={rows.toScale ? 5 : 3} />
         ))}
       </g>
       <path d={`M${left - 6} ${height - 3}h12v5h-12zM${right - 6} ${height - 3}h12v5h-12z`} className="f-ink" />
@@ -164,6 +164,10 @@ function writeRoof(
   text.setAttribute('x', px(left ? rest + 6 : rest + moved + 6));
   text.setAttribute('y', px(y - 6));
   text.textContent = `roof ${printQuantity(roof, 'displacement', system)} ${unitOf('displacement', system)}`;
+}
+
+function Slab({ y, width, thick }: { readonly y: number; readonly width: number; readonly thick: number }) {
+  return <rect y={y - thick / 2} width={width} height={thick} />;
 }
 
 /** Where a building will stand: three dashed storeys. */

@@ -1,6 +1,6 @@
 import { useMemo } from 'react';
 import { printQuantity, type Quantity, type System, unitOf } from '../../core/units/quantities.ts';
-import { type Axis, decimalsOf, linesOf } from './axis.ts';
+import { type Axis, linesOf } from './axis.ts';
 import { COLUMN_QUANTITIES, type InputColumn } from './columns.ts';
 import { px } from './drawing.ts';
 import type { SheetLayout, Span } from './layout.ts';
@@ -74,18 +74,10 @@ export function Heads(props: HeadsProps) {
         {!narrow && <HeadCell column="acceleration" kind="plot" name="Floor accel." />}
         <HeadCell column="g" kind="result" name={narrow ? 'Accel.' : statistic} unit={unit('acceleration')} />
       </div>
-      <AxisNumbers span={drift} axis={driftAxis} quantity="ratio" system={system} keepFree={limit} />
-      {shear !== null && props.shearAxis !== null && (
-        <AxisNumbers span={shear} axis={props.shearAxis} quantity="force" system={system} keepFree={null} />
-      )}
+      <AxisNumbers span={drift} axis={driftAxis} keepFree={limit} />
+      {shear !== null && props.shearAxis !== null && <AxisNumbers span={shear} axis={props.shearAxis} />}
       {acceleration !== null && props.accelerationAxis !== null && (
-        <AxisNumbers
-          span={acceleration}
-          axis={props.accelerationAxis}
-          quantity="ratio"
-          system={system}
-          keepFree={null}
-        />
+        <AxisNumbers span={acceleration} axis={props.accelerationAxis} />
       )}
     </div>
   );
@@ -103,27 +95,31 @@ function HeadCell({ column, kind, name, unit = '' }: { column: string; kind: str
 interface AxisNumbersProps {
   readonly span: Span;
   readonly axis: Axis;
-  readonly quantity: Quantity;
-  readonly system: System;
   /** A value whose place another thing takes: no number near it. */
-  readonly keepFree: number | null;
+  readonly keepFree?: number | null;
 }
 
-function AxisNumbers({ span, axis, keepFree }: AxisNumbersProps) {
+function AxisNumbers({ span, axis, keepFree = null }: AxisNumbersProps) {
   const scale = span.width / axis.end;
   const numbers = useMemo(() => [0, ...linesOf(axis, axis.major)], [axis]);
-  const decimals = decimalsOf(axis.major);
   return (
     <svg className="axis-head" aria-hidden="true" style={{ left: span.x }} width={span.width} height="60">
       {numbers.map((value) =>
         keepFree !== null && Math.abs(value - keepFree) * scale < 30 ? null : (
           <text key={value} x={px(value * scale)} y="49" className="middle">
-            {printQuantity(value, 'count', 'si', decimals)}
+            {printQuantity(value, 'count', 'si', decimalsIn(value))}
           </text>
         ),
       )}
     </svg>
   );
+}
+
+/** Decimals a number of an axis needs of its own: 0, 0.5, 1. */
+function decimalsIn(value: number): number {
+  const text = String(Number(value.toPrecision(6)));
+  const point = text.indexOf('.');
+  return point < 0 ? 0 : text.length - point - 1;
 }
 
 function Legend({ suite, letter }: { readonly suite: string; readonly letter: string | null }) {

@@ -6,6 +6,9 @@ import { commitField, giveUpField, shownText, typeField, wordsOf } from '../cont
 
 const PATH = 'limits.drift';
 
+/** Below this the word stands beside the cell: above it stands the name of the column [px]. */
+const NAME_ENDS = 130;
+
 /** The allowable drift as a typed cell on the axis; its line runs from here to the ground. */
 export function LimitCell({ x }: { readonly x: number }) {
   const system = useSession((state) => state.system);
@@ -15,7 +18,7 @@ export function LimitCell({ x }: { readonly x: number }) {
   const wrong = wordsOf(project, PATH, system, fault);
   const id = useId();
   return (
-    <div className="limit-cell" style={{ left: x }}>
+    <div className={`limit-cell ${x < NAME_ENDS ? 'beside' : ''}`} style={{ left: x }}>
       <label htmlFor={id}>limit</label>
       <input
         id={id}

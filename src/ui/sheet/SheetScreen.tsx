@@ -155,7 +155,7 @@ export function SheetScreen({ onOpen, onExample }: SheetScreenProps) {
             factor={factor}
             driftAxis={axes.drift}
             limit={limit}
-            shearAxis={answers === null ? null : axes.shear}
+            shearAxis={answers?.shear ? axes.shear : null}
             accelerationAxis={answers === null ? null : axes.acceleration}
           />
           <div className="limit-place" style={{ left: layout.drift.x }}>
@@ -165,6 +165,17 @@ export function SheetScreen({ onOpen, onExample }: SheetScreenProps) {
         <div className={`rows ${old ? 'old' : ''}`} style={{ height }}>
           {empty && <EmptyStart system={system} onOpen={onOpen} onExample={onExample} width={layout.inputs.width} />}
           <div className="grid-place" style={{ left: layout.margin, right: layout.margin }}>
+            {empty &&
+              [2, 3].map((index) => (
+                <div
+                  key={index}
+                  className="ghost-row"
+                  style={{ bottom: rows.total + 50 * (index - 2) }}
+                  aria-hidden="true"
+                >
+                  {index}
+                </div>
+              ))}
             <Grid
               project={project}
               columns={columns}

@@ -77,7 +77,7 @@ export const StoreyRow = memo(function StoreyRow(props: StoreyRowProps) {
         aria-selected={cell === 'name'}
       >
         <span className="index">{storey + 1}</span>
-        <span className={`name ${shown ? '' : 'alone'} ${state('name')}`}>
+        <span className={`name ${shown ? '' : 'alone'} ${row.name === '' ? 'untyped' : ''} ${state('name')}`}>
           {nameEditing ? (
             <CellInput
               path={cellPath(storey, 'name')}
@@ -86,7 +86,7 @@ export const StoreyRow = memo(function StoreyRow(props: StoreyRowProps) {
               label={`Storey ${storey + 1}, name`}
             />
           ) : (
-            row.name || '\u00a0'
+            row.name || (chosen || storey === 0 ? 'name' : '\u00a0')
           )}
         </span>
         {shown && <span className={`tag ${failed ? 'failed' : ''}`}>{tag}</span>}

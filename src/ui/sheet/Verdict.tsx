@@ -60,10 +60,7 @@ export function Verdict({ letters }: VerdictProps) {
   }
   const { envelope, runs } = answers;
   const failed = runs.find(({ run }) => run.ending !== null);
-  const verdict = verdictOf(
-    envelope,
-    answers.case.frame.storeys.map((storey) => storey.name),
-  );
+  const verdict = verdictOf(envelope, runs);
   if (failed !== undefined && envelope.incomplete.length > 0) {
     const letter = letters[failed.motion] ?? failed.motion;
     return (

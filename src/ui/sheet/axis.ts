@@ -26,8 +26,3 @@ export function linesOf(axis: Axis, step: number): number[] {
   const count = Math.floor(axis.end / step + 1e-9);
   return Array.from({ length: count }, (_, index) => (index + 1) * step);
 }
-
-/** Decimals that a number of an axis needs. */
-export function decimalsOf(step: number): number {
-  return Math.max(0, -Math.floor(Math.log10(step) + 1e-9));
-}

