@@ -17,12 +17,18 @@ if (missing === null || missing.length > 0) {
   must('npm', ['ci', '--include=dev', '--no-audit', '--no-fund']);
 }
 
-if (process.argv.includes('--browser') && (await findChromium()) === null) {
+const chromium = () =>
+  findChromium().catch((fault) => {
+    say(fault.message);
+    process.exit(1);
+  });
+
+if (process.argv.includes('--browser') && (await chromium()) === null) {
   if (existsSync('/etc/debian_version') && process.getuid?.() === 0) {
     say("installing Debian's chromium (no browser found; SWAYBOOK_CHROMIUM may name one)");
     if (run('apt-get', ['update', '-q']) === 0) run('apt-get', ['install', '-y', '-q', 'chromium']);
   }
-  if ((await findChromium()) === null) {
+  if ((await chromium()) === null) {
     say("installing Playwright's chromium (no browser found; SWAYBOOK_CHROMIUM may name one)");
     must('npx', ['playwright', 'install', 'chromium']);
   }
