@@ -10,8 +10,8 @@ import type { ReportRun, ReportSource } from './source.ts';
  */
 export type ResponseFile = ReturnType<typeof responseOf>;
 
-export const RESPONSE_FORMAT = 'swaybook-response';
-export const RESPONSE_VERSION = 1;
+const RESPONSE_FORMAT = 'swaybook-response';
+const RESPONSE_VERSION = 1;
 
 export function responseOf({ prepared, runs, envelope }: Pick<ReportSource, 'prepared' | 'runs' | 'envelope'>) {
   const { frame, modes } = prepared;
