@@ -1,6 +1,6 @@
 import type { Problem } from './problem.ts';
 import type { Histories } from './run.ts';
-import { STRIDE, SUM_DAMPING, SUM_INPUT, SUM_KINETIC, SUM_STRAIN, TOTAL, U } from './stepping.ts';
+import { FIELD, SUM } from './stepping.ts';
 import type { Workspace } from './workspace.ts';
 
 /** Histories of one run may take so many bytes; beyond it only each k-th step is kept, and k is said. */
@@ -43,17 +43,17 @@ export function keepHistory({ histories }: HistoryBuffers, problem: Problem, wor
   const { records, sums } = work;
   ground[at] = problem.ground[j];
   let below = 0;
-  for (let i = 0, from = 0, place = at; i < stiffness.length; i++, from += STRIDE, place += count) {
-    const u = records[from + U];
+  for (let i = 0, from = 0, place = at; i < stiffness.length; i++, from += FIELD.STRIDE, place += count) {
+    const u = records[from + FIELD.U];
     displacement[place] = u;
     shear[place] = stiffness[i] * (u - below);
-    acceleration[place] = records[from + TOTAL];
+    acceleration[place] = records[from + FIELD.TOTAL];
     below = u;
   }
-  energy.input[at] = sums[SUM_INPUT] / 2;
-  energy.kinetic[at] = sums[SUM_KINETIC] / 2;
-  energy.strain[at] = sums[SUM_STRAIN] / 2;
-  energy.damping[at] = sums[SUM_DAMPING] / 2;
+  energy.input[at] = sums[SUM.INPUT] / 2;
+  energy.kinetic[at] = sums[SUM.KINETIC] / 2;
+  energy.strain[at] = sums[SUM.STRAIN] / 2;
+  energy.damping[at] = sums[SUM.DAMPING] / 2;
 }
 
 /** The first `kept` instants of each row. */

@@ -2,29 +2,10 @@ import { type HistoryBuffers, historyBuffers, keepHistory } from './history.ts';
 import type { Problem } from './problem.ts';
 import { emptyResiduals, keepResiduals, type Residuals, residualsOf } from './residual.ts';
 import type { Ending, MethodChoice, Run, Want } from './run.ts';
-import {
-  COLLAPSED,
-  DIVERGED,
-  GOING,
-  LARGEST_GAP,
-  LARGEST_INPUT,
-  PEAK_DRIFT,
-  PEAK_OVERTURNING,
-  PEAK_STEP,
-  PEAK_TOTAL,
-  PEAK_U,
-  PEAK_V,
-  STOPPED,
-  STRIDE,
-  SUM_DAMPING,
-  SUM_INPUT,
-  SUM_KINETIC,
-  SUM_STRAIN,
-  stepTo,
-} from './stepping.ts';
+import { FIELD, STATE, SUM, stepTo } from './stepping.ts';
 import { type Workspace, workspace } from './workspace.ts';
 
-/** A march under way: call `advance` until it says true, then `finish`. Nothing is allocated in `advance`. */
+/** FIELD.A march under way: call `advance` until it says true, then `finish`. Nothing is allocated in `advance`. */
 export interface March {
   readonly steps: number;
   readonly done: number;
@@ -53,7 +34,7 @@ export function startMarch(problem: Problem, choice: MethodChoice, want: Want): 
   let done = 0;
   // Up to here nothing is looked at between steps, so that they run in one go.
   const unwatched = histories ? 0 : Math.min(steps, residualFrom);
-  const over = () => done >= steps || sums[STOPPED] !== GOING;
+  const over = () => done >= steps || sums[SUM.STOPPED] !== STATE.GOING;
   return {
     steps,
     get done() {
@@ -81,15 +62,15 @@ function endingOf(
   over: boolean,
 ): Ending | null {
   const time = done * step;
-  if (sums[STOPPED] === COLLAPSED) {
+  if (sums[SUM.STOPPED] === STATE.COLLAPSED) {
     let [storey, worst] = [-1, 0];
     for (let i = 0; i < prepared.arrays.n; i++) {
-      const share = records[i * STRIDE + PEAK_DRIFT] / stopDrift[i];
-      if (records[i * STRIDE + PEAK_STEP] === done && share > worst) [storey, worst] = [i, share];
+      const share = records[i * FIELD.STRIDE + FIELD.PEAK_DRIFT] / stopDrift[i];
+      if (records[i * FIELD.STRIDE + FIELD.PEAK_STEP] === done && share > worst) [storey, worst] = [i, share];
     }
     return { status: 'collapsed', storey, time };
   }
-  if (sums[STOPPED] === DIVERGED) return { status: 'diverged', storey: -1, time };
+  if (sums[SUM.STOPPED] === STATE.DIVERGED) return { status: 'diverged', storey: -1, time };
   return over ? null : { status: 'cancelled', storey: -1, time };
 }
 
@@ -104,8 +85,8 @@ function runOf(
 ): Run {
   const { step, steps, prepared } = problem;
   const { n, stiffness, height } = prepared.arrays;
-  const column = (field: number) => Float64Array.from({ length: n }, (_, i) => records[i * STRIDE + field]);
-  const peakDrift = column(PEAK_DRIFT);
+  const column = (field: number) => Float64Array.from({ length: n }, (_, i) => records[i * FIELD.STRIDE + field]);
+  const peakDrift = column(FIELD.PEAK_DRIFT);
   return {
     method,
     step,
@@ -114,22 +95,26 @@ function runOf(
     storeys: {
       peakDrift,
       peakDriftRatio: peakDrift.map((d, i) => d / height[i]),
-      peakTime: column(PEAK_STEP).map((at) => at * step),
+      peakTime: column(FIELD.PEAK_STEP).map((at) => at * step),
       ...residualsOf(residuals),
       // An elastic storey without a damper: shear follows drift, so its peak is k times the peak drift.
       peakShear: peakDrift.map((d, i) => stiffness[i] * d),
-      peakOverturning: column(PEAK_OVERTURNING),
+      peakOverturning: column(FIELD.PEAK_OVERTURNING),
       dissipated: new Float64Array(n),
     },
-    floors: { peakDisplacement: column(PEAK_U), peakVelocity: column(PEAK_V), peakAcceleration: column(PEAK_TOTAL) },
+    floors: {
+      peakDisplacement: column(FIELD.PEAK_U),
+      peakVelocity: column(FIELD.PEAK_V),
+      peakAcceleration: column(FIELD.PEAK_TOTAL),
+    },
     energy: {
-      input: sums[SUM_INPUT] / 2,
-      kinetic: sums[SUM_KINETIC] / 2,
-      strain: sums[SUM_STRAIN] / 2,
-      damping: sums[SUM_DAMPING] / 2,
+      input: sums[SUM.INPUT] / 2,
+      kinetic: sums[SUM.KINETIC] / 2,
+      strain: sums[SUM.STRAIN] / 2,
+      damping: sums[SUM.DAMPING] / 2,
       dampers: 0,
       hysteretic: 0,
-      imbalance: sums[LARGEST_INPUT] > 0 ? sums[LARGEST_GAP] / sums[LARGEST_INPUT] : 0,
+      imbalance: sums[SUM.LARGEST_INPUT] > 0 ? sums[SUM.LARGEST_GAP] / sums[SUM.LARGEST_INPUT] : 0,
     },
     histories: histories ? histories.upTo(done) : null,
   };

@@ -1,4 +1,4 @@
-import { STRIDE, U } from './stepping.ts';
+import { FIELD } from './stepping.ts';
 
 /** Sums over the last fundamental period of a run, one entry a storey. */
 export interface Residuals {
@@ -22,7 +22,7 @@ export function keepResiduals(residuals: Residuals, records: Float64Array): void
   const { sum, least, most } = residuals;
   let below = 0;
   for (let i = 0; i < sum.length; i++) {
-    const u = records[i * STRIDE + U];
+    const u = records[i * FIELD.STRIDE + FIELD.U];
     const drift = u - below;
     below = u;
     sum[i] += drift;

@@ -2,22 +2,7 @@ import { assembleTridiagonal } from '../frame/matrices.ts';
 import type { PreparedFrame } from '../frame/prepare.ts';
 import { factorTridiagonal } from '../linalg/tridiagonal.ts';
 import type { Problem } from './problem.ts';
-import {
-  A,
-  DAMPING_RATE,
-  FLOOR_DASHPOT,
-  LEVER,
-  MASS,
-  MULTIPLIER,
-  PER_MASS,
-  PER_PIVOT,
-  type Scheme,
-  STIFFNESS,
-  STOP,
-  STOREY_DASHPOT,
-  STRIDE,
-  SUMS,
-} from './stepping.ts';
+import { FIELD, type Scheme, SUM } from './stepping.ts';
 
 /** All scratch of one march, made once: the only thing a step may write. */
 export interface Workspace {
@@ -33,16 +18,16 @@ export interface Workspace {
 export function workspace({ prepared, method, step, ground, stopDrift }: Problem): Workspace {
   const { n, mass, stiffness, netStiffness, height } = prepared.arrays;
   const { am, af, beta, gamma } = method;
-  const records = new Float64Array(n * STRIDE);
+  const records = new Float64Array(n * FIELD.STRIDE);
   for (let i = 0; i < n; i++) {
-    const at = i * STRIDE;
-    records[at + MASS] = mass[i];
-    records[at + PER_MASS] = 1 / mass[i];
-    records[at + STIFFNESS] = netStiffness[i];
-    records[at + LEVER] = stiffness[i] * height[i];
-    records[at + STOP] = stopDrift[i];
+    const at = i * FIELD.STRIDE;
+    records[at + FIELD.MASS] = mass[i];
+    records[at + FIELD.PER_MASS] = 1 / mass[i];
+    records[at + FIELD.STIFFNESS] = netStiffness[i];
+    records[at + FIELD.LEVER] = stiffness[i] * height[i];
+    records[at + FIELD.STOP] = stopDrift[i];
     // At rest, M a = -M ag at t = 0.
-    records[at + A] = -ground[0];
+    records[at + FIELD.A] = -ground[0];
   }
   const system: StepMatrix = {
     onMass: 1 - am,
@@ -53,7 +38,7 @@ export function workspace({ prepared, method, step, ground, stopDrift }: Problem
   let inverse: Float64Array | null = null;
   if (damping.kind === 'banded') setFactors(records, prepared, damping.floor, damping.storey, system);
   else inverse = setFull(records, prepared, damping.ratios, system, -ground[0]);
-  return { records, inverse, scheme: { am, af, beta, gamma, h: step }, sums: new Float64Array(SUMS) };
+  return { records, inverse, scheme: { am, af, beta, gamma, h: step }, sums: new Float64Array(SUM.SUMS) };
 }
 
 /** Factors on M, C and K in the matrix that a step solves with. */
@@ -77,16 +62,16 @@ function setFactors(
   if ('row' in factors)
     throw new RangeError(`march: the step's matrix is not positive definite at storey ${factors.row}`);
   for (let i = 0; i < arrays.n; i++) {
-    const at = i * STRIDE;
-    records[at + FLOOR_DASHPOT] = floorDashpot[i];
-    records[at + STOREY_DASHPOT] = storeyDashpot[i];
-    records[at + MULTIPLIER] = factors.multiplier[i];
-    records[at + PER_PIVOT] = factors.pivotInverse[i];
+    const at = i * FIELD.STRIDE;
+    records[at + FIELD.FLOOR_DASHPOT] = floorDashpot[i];
+    records[at + FIELD.STOREY_DASHPOT] = storeyDashpot[i];
+    records[at + FIELD.MULTIPLIER] = factors.multiplier[i];
+    records[at + FIELD.PER_PIVOT] = factors.pivotInverse[i];
   }
 }
 
 /**
- * Modal damping is diagonal in the modes, and so is the step's matrix: its inverse is sum phi phi^T / (phi^T A phi). C a at
+ * Modal damping is diagonal in the modes, and so is the step's matrix: its inverse is sum phi phi^T / (phi^T FIELD.A phi). C a at
  * the start, where a is `uniform` on every floor, is found the same way.
  */
 function setFull(
@@ -105,7 +90,7 @@ function setFull(
     const share = 1 / (modalMass * (onMass + onDamping * rate + onStiffness * frequency * frequency));
     for (let i = 0; i < n; i++) {
       for (let j = 0; j < n; j++) inverse[i * n + j] += share * shape[i] * shape[j];
-      records[i * STRIDE + DAMPING_RATE] += rate * participation * uniform * mass[i] * shape[i];
+      records[i * FIELD.STRIDE + FIELD.DAMPING_RATE] += rate * participation * uniform * mass[i] * shape[i];
     }
   });
   return inverse;
