@@ -24,18 +24,27 @@ export function Evidence() {
     <section className={`foot evidence ${old ? 'old' : ''}`} aria-label="Evidence">
       <h2 className="foot-head">Evidence</h2>
       <ul className="facts">
-        <Choice>{dampingWords(frame.damping)}</Choice>
+        <Choice>
+          <Worded words={dampingWords(frame.damping)} from=" in " />
+        </Choice>
         <Choice>P-Delta {frame.pDelta ? 'on' : 'off'}</Choice>
-        <Choice>{methodWords(analysis.method)}</Choice>
+        <Choice>
+          <Worded words={methodWords(analysis.method)} from="," />
+        </Choice>
         <Choice>
           step {shortNumber(answers.step.size)} s{stepOrigin(answers)}
         </Choice>
         {stepErrors !== null && <StepError errors={Object.values(stepErrors)} />}
         <li>
-          energy imbalance <b>{percent(Math.max(...answers.runs.map(({ run }) => run.energy.imbalance)))}</b>
+          <span className="long">energy </span>imbalance{' '}
+          <b>{percent(Math.max(...answers.runs.map(({ run }) => run.energy.imbalance)))}</b>
         </li>
         <li>
-          step / shortest period{' '}
+          step<span className="long"> / shortest period</span>
+          <span className="short">
+            {' '}
+            / T<sub>min</sub>
+          </span>{' '}
           <b>{printQuantity(answers.step.overShortest, 'ratio', 'si', overDecimals(answers.step.overShortest))}</b>
         </li>
         <li>
@@ -67,12 +76,25 @@ function Choice({ children }: { readonly children: React.ReactNode }) {
   );
 }
 
+/** What begins with `from` is left out where the page is not wide. */
+function Worded({ words, from }: { readonly words: string; readonly from: string }) {
+  const at = words.indexOf(from);
+  if (at < 0) return words;
+  return (
+    <>
+      {words.slice(0, at)}
+      <span className="long">{words.slice(at)}</span>
+    </>
+  );
+}
+
 function StepError({ errors }: { readonly errors: readonly number[] }) {
   if (errors.length === 0) return null;
   const largest = Math.max(...errors);
   return (
     <li>
-      step error <b>{percent(largest)}</b>, aim below 1 %
+      step error <b>{percent(largest)}</b>
+      <span className="long">, aim below 1 %</span>
     </li>
   );
 }

@@ -18,6 +18,8 @@ export interface HeadsProps {
   readonly factor: number;
   readonly driftAxis: Axis;
   readonly limit: number | null;
+  /** The word "limit" stands at the right of its cell. */
+  readonly beside: boolean;
   readonly shearAxis: Axis | null;
   readonly accelerationAxis: Axis | null;
 }
@@ -71,10 +73,16 @@ export function Heads(props: HeadsProps) {
         <HeadCell column="ratio" kind="result" name="Of limit" unit="ratio" />
         {!narrow && <HeadCell column="shear" kind="plot" name="Storey shear" />}
         <HeadCell column="force" kind="result" name={narrow ? 'Shear' : statistic} unit={unit('force')} />
-        {!narrow && <HeadCell column="acceleration" kind="plot" name="Floor accel." />}
+        {!narrow && (
+          <HeadCell
+            column="acceleration"
+            kind="plot"
+            name={acceleration !== null && acceleration.width < 60 ? 'Accel.' : 'Floor accel.'}
+          />
+        )}
         <HeadCell column="g" kind="result" name={narrow ? 'Accel.' : statistic} unit={unit('acceleration')} />
       </div>
-      <AxisNumbers span={drift} axis={driftAxis} keepFree={limit} />
+      <AxisNumbers span={drift} axis={driftAxis} keepFree={limit} after={props.beside ? 62 : 30} />
       {shear !== null && props.shearAxis !== null && <AxisNumbers span={shear} axis={props.shearAxis} />}
       {acceleration !== null && props.accelerationAxis !== null && (
         <AxisNumbers span={acceleration} axis={props.accelerationAxis} />
@@ -97,15 +105,17 @@ interface AxisNumbersProps {
   readonly axis: Axis;
   /** A value whose place another thing takes: no number near it. */
   readonly keepFree?: number | null;
+  /** How far to its right that thing reaches [px]. */
+  readonly after?: number;
 }
 
-function AxisNumbers({ span, axis, keepFree = null }: AxisNumbersProps) {
+function AxisNumbers({ span, axis, keepFree = null, after = 30 }: AxisNumbersProps) {
   const scale = span.width / axis.end;
   const numbers = useMemo(() => [0, ...linesOf(axis, axis.major)], [axis]);
   return (
     <svg className="axis-head" aria-hidden="true" style={{ left: span.x }} width={span.width} height="60">
       {numbers.map((value) =>
-        keepFree !== null && Math.abs(value - keepFree) * scale < 30 ? null : (
+        keepFree !== null && (value - keepFree) * scale > -30 && (value - keepFree) * scale < after ? null : (
           <text key={value} x={px(value * scale)} y="49" className="middle">
             {printQuantity(value, 'count', 'si', decimalsIn(value))}
           </text>

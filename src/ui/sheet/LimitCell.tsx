@@ -6,11 +6,8 @@ import { commitField, giveUpField, shownText, typeField, wordsOf } from '../cont
 
 const PATH = 'limits.drift';
 
-/** Below this the word stands beside the cell: above it stands the name of the column [px]. */
-const NAME_ENDS = 130;
-
 /** The allowable drift as a typed cell on the axis; its line runs from here to the ground. */
-export function LimitCell({ x }: { readonly x: number }) {
+export function LimitCell({ x, beside }: { readonly x: number; readonly beside: boolean }) {
   const system = useSession((state) => state.system);
   const project = useDocument(effectiveProject);
   const typed = useDocument((state) => (state.draft?.path === PATH ? state.draft.text : null));
@@ -18,7 +15,7 @@ export function LimitCell({ x }: { readonly x: number }) {
   const wrong = wordsOf(project, PATH, system, fault);
   const id = useId();
   return (
-    <div className={`limit-cell ${x < NAME_ENDS ? 'beside' : ''}`} style={{ left: x }}>
+    <div className={`limit-cell ${beside ? 'beside' : ''}`} style={{ left: x }}>
       <label htmlFor={id}>limit</label>
       <input
         id={id}

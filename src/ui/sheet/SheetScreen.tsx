@@ -1,4 +1,4 @@
-import { lazy, Suspense, useMemo, useRef, useState } from 'react';
+import { lazy, Suspense, useLayoutEffect, useMemo, useRef, useState } from 'react';
 import { toDisplay } from '../../core/units/quantities.ts';
 import { effectiveProject, useDocument } from '../../state/document.ts';
 import { useResults } from '../../state/results.ts';
@@ -80,6 +80,9 @@ export function SheetScreen({ onOpen, onExample }: SheetScreenProps) {
   const typedLimit = asNumber(project.limits.drift);
   const limit = typedLimit === null ? null : toDisplay(typedLimit, 'percent', system);
   const axes = useAxes(answers, limit, editing);
+  const limitX = Math.min(layout.drift.width, ((limit ?? 0) * layout.drift.width) / axes.drift.end);
+  // Over the cell stands the name of the column where the limit is near the start of the axis.
+  const beside = limitX < (layout.narrow ? 95 : 122);
   const letters = useMemo(
     () => Object.fromEntries(project.motions.map((motion, index) => [motion.name, letterOf(index)])),
     [project.motions],
@@ -100,6 +103,13 @@ export function SheetScreen({ onOpen, onExample }: SheetScreenProps) {
     });
   const statistic = { mean: 'Mean', median: 'Median', max: 'Largest' }[answers?.measure ?? 'mean'];
   const tall = rows.total > free + 40;
+  // A building taller than the sheet opens at the storey that is shown, not at the roof.
+  const opened = useRef(false);
+  useLayoutEffect(() => {
+    if (!tall || opened.current || page.current === null) return;
+    opened.current = true;
+    page.current.querySelector(`[data-storey="${shownCell.storey}"]`)?.scrollIntoView({ block: 'center' });
+  }, [tall, shownCell.storey]);
   return (
     <div
       ref={page}
@@ -155,11 +165,12 @@ export function SheetScreen({ onOpen, onExample }: SheetScreenProps) {
             factor={factor}
             driftAxis={axes.drift}
             limit={limit}
+            beside={beside}
             shearAxis={answers?.shear ? axes.shear : null}
             accelerationAxis={answers === null ? null : axes.acceleration}
           />
           <div className="limit-place" style={{ left: layout.drift.x }}>
-            <LimitCell x={Math.min(layout.drift.width, ((limit ?? 0) * layout.drift.width) / axes.drift.end)} />
+            <LimitCell x={limitX} beside={beside} />
           </div>
         </div>
         <div className={`rows ${old ? 'old' : ''}`} style={{ height }}>
