@@ -74,7 +74,7 @@ interface MenuListProps {
 }
 
 /** The list alone, for menus opened by something other than a button. */
-export function MenuList({ id, anchor, label, items, align, onClose }: MenuListProps) {
+function MenuList({ id, anchor, label, items, align, onClose }: MenuListProps) {
   const list = useRef<HTMLDivElement>(null);
   useLayoutEffect(() => {
     const element = list.current;

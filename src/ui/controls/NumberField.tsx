@@ -54,7 +54,9 @@ export function NumberField({
         value={typed ?? shownText(project, path, system)}
         onFocus={(event) => event.target.select()}
         onChange={(event) => typeField(path, event.target.value, system)}
-        onBlur={() => commitField(path, system)}
+        onBlur={(event) => {
+          if (document.activeElement !== event.target) commitField(path, system);
+        }}
         onKeyDown={(event) => {
           if (event.key === 'Enter') commitField(path, system);
           else if (event.key === 'Escape' && typed !== null) giveUpField(path);

@@ -65,12 +65,17 @@ export const AccelerationPlot = memo(function AccelerationPlot({
   const scale = span.width / axis.end;
   const sky = height - rows.total;
   const line = useMemo(
-    () => (values: readonly number[]) =>
-      values
-        .map((value, floor) => `${floor === 0 ? 'M' : 'L'}${px(value * scale)} ${sky + (rows.tops[floor] ?? 0)}`)
-        .join(''),
-    [rows, sky, scale],
+    () => (values: readonly number[], ground: number | undefined) => {
+      const from = ground === undefined ? '' : `M${px(ground * scale)} ${height}`;
+      const floors = values.map((value, floor) => {
+        const pen = floor === 0 && ground === undefined ? 'M' : 'L';
+        return `${pen}${px(value * scale)} ${sky + (rows.tops[floor] ?? 0)}`;
+      });
+      return from + floors.join('');
+    },
+    [rows, sky, scale, height],
   );
+  const ground = answers?.ground ?? null;
   const suite = answers?.acceleration ?? null;
   const chosen = answers?.motions.find(({ motion }) => motion === chosenMotion);
   return (
@@ -86,16 +91,23 @@ export const AccelerationPlot = memo(function AccelerationPlot({
       {answers !== null && (
         <g opacity={old ? 0.45 : undefined}>
           <path
-            d={answers.motions.map((motion) => line(motion.acceleration)).join('')}
+            d={answers.motions.map(({ motion, acceleration }) => line(acceleration, ground?.motions[motion])).join('')}
             className="s-suite"
             strokeWidth="0.7"
             opacity="0.55"
           />
-          {chosen !== undefined && <path d={line(chosen.acceleration)} className="s-accent" strokeWidth="1.2" />}
+          {chosen !== undefined && (
+            <path
+              d={line(chosen.acceleration, ground?.motions[chosen.motion])}
+              className="s-accent"
+              strokeWidth="1.2"
+            />
+          )}
           {suite !== null && (
             <>
-              <path d={line(suite)} className="s-bar" strokeWidth="1.6" strokeLinejoin="round" />
+              <path d={line(suite, ground?.suite)} className="s-bar" strokeWidth="1.6" strokeLinejoin="round" />
               <g className="f-bar" stroke="var(--paper)">
+                {ground !== null && <circle cx={px(ground.suite * scale)} cy={height} r="3.2" />}
                 {suite.map((value, floor) => (
                   <circle
                     key={floor}

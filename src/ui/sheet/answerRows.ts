@@ -1,6 +1,7 @@
-import type { Measure } from '../../core/checks/statistic.ts';
+import { type Measure, statisticOf } from '../../core/checks/statistic.ts';
 import { printQuantity, printRatio, type System, toDisplay } from '../../core/units/quantities.ts';
 import type { Answers, MotionRun } from '../../state/results.ts';
+import { samplesOf } from '../../state/samples.ts';
 
 /** What the sheet draws and prints of an answer, in display units; storeys from the ground up. */
 export interface AnswerRows {
@@ -17,6 +18,8 @@ export interface AnswerRows {
   readonly shear: readonly number[] | null;
   /** Total floor acceleration [g], floor 1 first. */
   readonly acceleration: readonly number[] | null;
+  /** Peak ground acceleration as scaled [g]: of the suite, and of each motion by name; null where samples are missing. */
+  readonly ground: { readonly suite: number; readonly motions: Readonly<Record<string, number>> } | null;
   readonly print: {
     readonly drift: readonly string[];
     readonly ratio: readonly string[];
@@ -67,6 +70,7 @@ export function answerRowsOf(answers: Answers, system: System): AnswerRows {
     motions: motionDrifts(runs, envelope.factor, system),
     shear: shown(shear, 'force'),
     acceleration: shown(acceleration, 'acceleration'),
+    ground: groundOf(answers, system),
     print: {
       drift: print(compared, 'percent', 2),
       ratio: ratio === null ? none : Array.from(ratio, printRatio),
@@ -77,4 +81,31 @@ export function answerRowsOf(answers: Answers, system: System): AnswerRows {
       run.ending === null ? [] : [{ motion, storey: run.ending.storey, time: run.ending.time }],
     ),
   };
+}
+
+const peaks = new WeakMap<Float64Array, number>();
+
+function peakOf(samples: Float64Array): number {
+  const known = peaks.get(samples);
+  if (known !== undefined) return known;
+  let peak = 0;
+  for (const value of samples) peak = Math.max(peak, Math.abs(value));
+  peaks.set(samples, peak);
+  return peak;
+}
+
+/** Where the acceleration profile meets the ground: the same statistic as the floors, of the scaled records. */
+function groundOf(answers: Answers, system: System): AnswerRows['ground'] {
+  const motions: Record<string, number> = {};
+  const all: Float64Array[] = [];
+  for (const { name, samples, scale } of answers.case.motions) {
+    const kept = samplesOf(samples);
+    if (kept === undefined) return null;
+    const peak = Math.abs(scale) * peakOf(kept);
+    all.push(Float64Array.of(peak));
+    motions[name] = toDisplay(peak, 'acceleration', system);
+  }
+  if (all.length === 0) return null;
+  const suite = statisticOf(all)[answers.envelope.measure][0] ?? 0;
+  return { suite: toDisplay(suite, 'acceleration', system), motions };
 }
