@@ -1,0 +1,203 @@
+import fc from 'fast-check';
+import { describe, expect, test } from 'vitest';
+import {
+  fromDisplay,
+  printQuantity,
+  printRatio,
+  printTyped,
+  type Quantity,
+  type System,
+} from '../../../src/core/units/quantities.ts';
+import { readColumn, readQuantity } from '../../../src/core/units/read.ts';
+
+const value = (text: string, quantity: Quantity, system: System = 'si', current: number | null = null) => {
+  const reading = readQuantity(text, quantity, system, current);
+  return reading.kind === 'value' ? reading.value : reading.kind;
+};
+const QUANTITIES: readonly Quantity[] = [
+  'length',
+  'drift',
+  'weight',
+  'force',
+  'stiffness',
+  'moment',
+  'energy',
+  'acceleration',
+  'velocity',
+  'time',
+  'percent',
+  'ratio',
+];
+
+describe('[UNI-1] a typed text', () => {
+  test.each<[string, Quantity, System, number]>([
+    ['3.6', 'length', 'si', 3.6],
+    ['3,6', 'length', 'si', 3.6],
+    ['3600 mm', 'length', 'si', 3.6],
+    ['12 ft', 'length', 'si', 12 * 0.3048],
+    ['12 ft 6 in', 'length', 'si', 12.5 * 0.3048],
+    ['12\' 6"', 'length', 'us', 12.5 * 0.3048],
+    ['12', 'length', 'us', 12 * 0.3048],
+    ['250 kN', 'force', 'us', 250e3],
+    ['56 kip', 'force', 'si', 56 * 4448.2216152605],
+    ['56 KIP', 'force', 'si', 56 * 4448.2216152605],
+    ['455', 'stiffness', 'si', 455e6],
+    ['455 kN/mm', 'stiffness', 'us', 455e6],
+    ['4.55e8 N/m', 'stiffness', 'si', 4.55e8],
+    ['31.54 kip/in', 'stiffness', 'si', (31.54 * 4448.2216152605) / 0.0254],
+    ['412 t', 'weight', 'si', 412e3],
+    ['7 250', 'weight', 'si', 7250e3 / 9.80665],
+    ['7\u202f250', 'weight', 'si', 7250e3 / 9.80665],
+    ['1,250,000', 'ratio', 'si', 1250000],
+    ['1.250,5', 'ratio', 'si', 1250.5],
+    ['1,250.5', 'ratio', 'si', 1250.5],
+    ['0,125', 'ratio', 'si', 0.125],
+    ['1,25', 'ratio', 'si', 1.25],
+    ['.5', 'ratio', 'si', 0.5],
+    ['455*1.1', 'ratio', 'si', 500.50000000000006],
+    ['(2+3)*4 - 1', 'ratio', 'si', 19],
+    ['−3', 'ratio', 'si', -3],
+    ['3 m + 600 mm', 'length', 'si', 3.6],
+    ['3 + 600 mm', 'length', 'si', 3.6],
+    ['1.5', 'percent', 'si', 0.015],
+    ['1.5 %', 'percent', 'si', 0.015],
+    ['1/550', 'percent', 'si', 1 / 550],
+    ['0.3 g', 'acceleration', 'si', 0.3 * 9.80665],
+    ['300 gal', 'acceleration', 'si', 3],
+  ])('%s as %s (%s)', (text, quantity, system, expected) => {
+    expect(Math.abs((value(text, quantity, system) as number) / expected - 1)).toBeLessThan(1e-12);
+  });
+
+  test.each<[string, number]>([
+    ['+10%', 110],
+    ['-5 %', 95],
+    ['*1.1', 110.00000000000001],
+    ['/2', 50],
+  ])('%s changes the current value', (text, expected) => expect(value(text, 'ratio', 'si', 100)).toBe(expected));
+
+  test('a change without a value, a unit of another kind, words and traps are unreadable, each with a mend', () => {
+    for (const [text, quantity] of [
+      ['+10%', 'length'],
+      ['250 kN', 'length'],
+      ['3 furlong', 'length'],
+      ['abc', 'length'],
+      ['1..2', 'length'],
+      ['1 2', 'length'],
+      ["1'250", 'ratio'],
+      ['(2', 'ratio'],
+      ['2)', 'ratio'],
+      ['1/0', 'ratio'],
+      ['1e999', 'ratio'],
+      ['NaN', 'ratio'],
+      ['Infinity', 'ratio'],
+      ['0x10', 'ratio'],
+      ['2 m * 3 m', 'length'],
+      ['alert(1)', 'ratio'],
+    ] as const) {
+      const reading = readQuantity(text, quantity, 'si');
+      expect(reading.kind, text).toBe('unreadable');
+      if (reading.kind === 'unreadable') {
+        expect(reading.why.length).toBeGreaterThan(3);
+        expect(reading.mend.length).toBeGreaterThan(3);
+      }
+    }
+    expect(readQuantity('  ', 'length', 'si')).toEqual({ kind: 'empty' });
+  });
+
+  test('a lone comma before exactly three digits has two readings', () => {
+    expect(readQuantity('1,250', 'length', 'si')).toEqual({
+      kind: 'ambiguous',
+      readings: [
+        { value: 1.25, shown: '1.25 m' },
+        { value: 1250, shown: '1\u202f250 m' },
+      ],
+    });
+    expect(readQuantity('1,250 kN', 'force', 'si').kind).toBe('ambiguous');
+    expect(readQuantity('1,2500', 'length', 'si').kind).toBe('value');
+  });
+
+  test('reading never throws and never gives a number that is not finite', () => {
+    let cases = 0;
+    fc.assert(
+      fc.property(
+        fc.oneof(fc.string(), fc.stringMatching(/^[-+*/()\d., %a-zA-Z'"]{0,20}$/)),
+        fc.constantFrom(...QUANTITIES),
+        fc.constantFrom<System>('si', 'us'),
+        (text, quantity, system) => {
+          cases++;
+          const reading = readQuantity(text, quantity, system, 5);
+          if (reading.kind === 'value') expect(Number.isFinite(reading.value)).toBe(true);
+        },
+      ),
+      { numRuns: 2000 },
+    );
+    expect(cases).toBe(2000);
+    expect(readQuantity('('.repeat(5000), 'ratio', 'si').kind).toBe('unreadable');
+  });
+});
+
+describe('[UNI-2] a pasted column', () => {
+  test('one plain cell decides for all', () => {
+    expect(readColumn(['1,250', '3,5'], 'length', 'si')).toEqual({ kind: 'values', values: [1.25, 3.5] });
+    expect(readColumn(['1,250', '2,000.5'], 'length', 'si')).toEqual({ kind: 'values', values: [1250, 2000.5] });
+  });
+  test('an undecided column gives both readings', () => {
+    expect(readColumn(['1,250', '', '2'], 'length', 'si')).toEqual({
+      kind: 'undecided',
+      decimal: [1.25, null, 2],
+      thousands: [1250, null, 2],
+    });
+  });
+  test('bad cells are named, all of them', () => {
+    const reading = readColumn(['1', 'x', '3', '4 kip'], 'length', 'si');
+    expect(reading.kind === 'faults' && reading.faults.map((fault) => fault.row)).toEqual([1, 3]);
+  });
+});
+
+describe('[UNI-3] a printed number', () => {
+  test('reads back to the same value in every quantity and system', () => {
+    let cases = 0;
+    fc.assert(
+      fc.property(
+        fc.double({ min: 1e-6, max: 1e9, noNaN: true }),
+        fc.constantFrom(...QUANTITIES),
+        fc.constantFrom<System>('si', 'us'),
+        (shown, quantity, system) => {
+          cases++;
+          const si = fromDisplay(shown, quantity, system);
+          const text = printTyped(si, quantity, system);
+          const back = readQuantity(text, quantity, system);
+          expect(back.kind, text).toBe('value');
+          if (back.kind === 'value') expect(Math.abs(back.value / si - 1)).toBeLessThan(1e-14);
+        },
+      ),
+      { numRuns: 1000 },
+    );
+    expect(cases).toBe(1000);
+  });
+  test('what was typed is shown as typed', () => {
+    for (const text of ['455', '3.6', '0.005', '7\u202f250', '31.54', '1.1']) {
+      for (const quantity of QUANTITIES) {
+        for (const system of ['si', 'us'] as const) {
+          const si = value(text, quantity, system);
+          expect(printTyped(si as number, quantity, system)).toBe(text);
+        }
+      }
+    }
+  });
+  test('answers have fixed decimals, thousands from four digits, a real minus, none for nothing', () => {
+    expect(printQuantity(9676e3, 'force', 'si')).toBe('9\u202f676');
+    expect(printQuantity(-0.378, 'displacement', 'si')).toBe('−378');
+    expect(printQuantity(-0.0001, 'length', 'si')).toBe('0.00');
+    expect(printQuantity(null, 'force', 'si')).toBe('none');
+    expect(printQuantity(Number.NaN, 'force', 'si')).toBe('none');
+    expect(printQuantity(0.016, 'percent', 'us')).toBe('1.60');
+  });
+  test('a ratio is shown as 1.00 only if it is not over', () => {
+    expect(printRatio(1)).toBe('1.00');
+    expect(printRatio(0.9999)).toBe('1.00');
+    expect(printRatio(1.0001)).toBe('1.001');
+    expect(printRatio(1.0049)).toBe('1.005');
+    expect(printRatio(1.07)).toBe('1.07');
+  });
+});
