@@ -1,20 +1,31 @@
+import { cautionsOf } from '../core/checks/cautions.ts';
 import { envelopeOf } from '../core/checks/envelope.ts';
 import { stepLimit, stepOf } from '../core/dynamics/steps.ts';
 import type { Case } from '../document/case.ts';
 import type { Answers, MotionRun } from './answers.ts';
 import type { Question } from './question.ts';
 
+/** What an answer is made from, beside the question: all its runs, and what is known behind them. */
+export interface Found {
+  readonly runs: readonly MotionRun[];
+  readonly stepErrors: Readonly<Record<string, number>> | null;
+  /** Samples of a motion by digest, for what is said of the record itself. */
+  readonly samplesOf: (digest: string) => Float64Array | undefined;
+  /** [ms] of computing, and when it was done [ms since 1970]. */
+  readonly took: number;
+  readonly at: number;
+}
+
 /** The whole answer to a question whose runs are all in. */
-export function answersOf(
-  { key, case: from }: Question,
-  runs: readonly MotionRun[],
-  _stepErrors: Readonly<Record<string, number>> | null,
-  took: number,
-  at: number = Date.now(),
-): Answers {
-  const envelope = envelopeOf(runs, from.limits, from.leftOut);
-  const { modes } = from.prepared;
-  return { key, case: from, modes, runs, envelope, cautions: [], step: stepFacts(from), took, at };
+export function answersOf({ key, case: from }: Question, { runs, stepErrors, samplesOf, took, at }: Found): Answers {
+  const { limits, analysis, prepared, leftOut } = from;
+  const envelope = envelopeOf(runs, limits, leftOut);
+  const motions = from.motions.map(({ name, interval, samples }) => {
+    const values = samplesOf(samples);
+    return { name, interval, ...(values ? { lastOverPeak: lastOverPeak(values) } : {}) };
+  });
+  const cautions = cautionsOf({ envelope, limits, analysis, prepared, runs, motions, stepErrors });
+  return { key, case: from, modes: prepared.modes, runs, envelope, cautions, step: stepFacts(from), took, at };
 }
 
 function stepFacts({ analysis, motions, prepared: { modes } }: Case): Answers['step'] {
@@ -22,4 +33,18 @@ function stepFacts({ analysis, motions, prepared: { modes } }: Case): Answers['s
   const size = Math.max(...sizes);
   const shortestPeriod = modes[modes.length - 1].period;
   return { size, shortestPeriod, overShortest: size / shortestPeriod, limit: stepLimit(modes, analysis.method) };
+}
+
+/** Records do not change: their share is looked up at each keystroke, computed once. */
+const shares = new WeakMap<Float64Array, number>();
+
+/** Magnitude of the last sample over that of the largest [-]; 0 for a record of zeros. */
+function lastOverPeak(samples: Float64Array): number {
+  const known = shares.get(samples);
+  if (known !== undefined) return known;
+  let peak = 0;
+  for (let i = 0; i < samples.length; i++) peak = Math.max(peak, Math.abs(samples[i]));
+  const share = peak > 0 ? Math.abs(samples[samples.length - 1]) / peak : 0;
+  shares.set(samples, share);
+  return share;
 }

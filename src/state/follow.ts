@@ -17,7 +17,7 @@ import { timer } from './timer.ts';
 
 /** Waiting times [ms]; the tests choose their own. */
 export interface Pace {
-  /** A rerun expected to take longer waits for a pause in the typing. */
+  /** A rerun expected to take longer waits for a pause in the typing, once there is typing: the first change never waits. */
   readonly quick: number;
   readonly pause: number;
   /** A rerun expected to take longer waits for F9. */
@@ -60,6 +60,7 @@ export function follow(
   let full: { readonly key: string; readonly run: Run } | null = null;
   let startedAt: number | null = null;
   let asked = { at: 0, weight: 0 };
+  let changedAt = Number.NEGATIVE_INFINITY;
   const timers = { pause: timer(), shown: timer(), tick: timer(), evidence: timer() };
   const set = (change: Partial<ResultsState>) => resultsStore.setState(change);
 
@@ -93,7 +94,10 @@ export function follow(
       return;
     }
     begin(asking);
-    if (time <= pace.quick) submit(asking);
+    const now = performance.now();
+    const typing = now - changedAt < pace.pause;
+    changedAt = now;
+    if (time <= pace.quick || !typing) submit(asking);
     else timers.pause.set(pace.pause, () => submit(asking));
   }
 
@@ -179,7 +183,7 @@ export function follow(
     }
     const stepErrors = errorsOf(question);
     const took = asked.weight > 0 ? performance.now() - asked.at : (resultsStore.getState().answers?.took ?? 0);
-    const answers = answersOf(question, found, stepErrors, took);
+    const answers = answersOf(question, { runs: found, stepErrors, samplesOf, took, at: Date.now() });
     const ask = chosenAsk(answers.envelope);
     if (ask && full?.key !== ask.key && askHistories(ask) && expected.of(ask.weight) <= pace.quick) {
       if (resultsStore.getState().status !== 'running') begin(question);
@@ -243,8 +247,9 @@ export function follow(
     const { status, answers } = resultsStore.getState();
     if (status !== 'current' || !question || !answers) return;
     const stepErrors = errorsOf(question);
-    if (stepErrors)
-      set({ stepErrors, answers: answersOf(question, answers.runs, stepErrors, answers.took, answers.at) });
+    if (!stepErrors) return;
+    const { runs: found, took, at } = answers;
+    set({ stepErrors, answers: answersOf(question, { runs: found, stepErrors, samplesOf, took, at }) });
   }
 
   /** Step error a motion, once all that ran to their end have one. */
