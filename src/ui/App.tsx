@@ -6,6 +6,7 @@ import { Cautions } from './foot/Cautions.tsx';
 import { Evidence } from './foot/Evidence.tsx';
 import { Toast } from './foot/Toast.tsx';
 import { SheetScreen } from './sheet/SheetScreen.tsx';
+import { followProjectDrops } from './top/dropProject.ts';
 import { openExample } from './top/example.ts';
 import { pickProject, type Refused, saveProject } from './top/files.ts';
 import { RefusedDialog } from './top/RefusedDialog.tsx';
@@ -31,6 +32,7 @@ export function App() {
     if (theme === 'system') delete document.documentElement.dataset.theme;
     else document.documentElement.dataset.theme = theme;
   }, [theme]);
+  useEffect(() => followProjectDrops(setRefused), []);
   useEffect(() => {
     const onKeyDown = (event: KeyboardEvent) =>
       appKey(event, { open: () => pickProject(setRefused), save: saveProject });

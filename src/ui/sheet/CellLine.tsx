@@ -1,6 +1,6 @@
 import type { Fault } from '../../core/fault.ts';
 import { printQuantity, printRatio, type System, unitOf } from '../../core/units/quantities.ts';
-import { readAt } from '../../document/fields.ts';
+import { fieldOf, readAt } from '../../document/fields.ts';
 import type { Project } from '../../document/project.ts';
 import { useDocument } from '../../state/document.ts';
 import { Button } from '../controls/Button.tsx';
@@ -89,7 +89,7 @@ function unitOfColumn(column: string, system: System): string | null {
 /** One fact that follows from a cell; where the text is no plain number, first the value as it is read. */
 function factOf(project: Project, storey: number, column: string, system: System, typed: string | null): string {
   const path = cellPath(storey, column);
-  if (storey >= project.frame.storeys.length) return column === 'height' ? 'floor to floor' : '';
+  if (storey >= project.frame.storeys.length) return fieldOf(path).hint;
   const value = readAt(project, path);
   const facts: string[] = [];
   const quantity = quantityOf(path);
@@ -97,15 +97,8 @@ function factOf(project: Project, storey: number, column: string, system: System
     facts.push(`read as ${printQuantity(value, quantity, system)} ${unitOf(quantity, system)}`);
   }
   if (typeof value === 'number' && column !== 'name') facts.push(comparison(project, storey, column, value, system));
-  if (value === null) facts.push(column === 'gravity' ? 'not typed: the weight of the floor is taken' : hint(column));
+  if (value === null) facts.push(fieldOf(path).hint);
   return facts.filter((fact) => fact !== '').join('; ');
-}
-
-function hint(column: string): string {
-  if (column === 'height') return 'floor to floor';
-  if (column === 'mass') return 'seismic weight of the floor on top of this storey';
-  if (column === 'stiffness') return 'lateral stiffness of the whole storey';
-  return '';
 }
 
 function comparison(project: Project, storey: number, column: string, value: number, system: System): string {

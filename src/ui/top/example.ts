@@ -1,4 +1,4 @@
-import { demoProject } from '../../document/demo.ts';
+import { demoProject } from '../../state/borrowed.ts';
 import { replace } from '../../state/document.ts';
 import { putSamples } from '../../state/samples.ts';
 

@@ -14,14 +14,18 @@ export function pickProject(onRefused: (refused: Refused) => void): void {
   const input = document.createElement('input');
   input.type = 'file';
   input.accept = '.json,application/json';
-  input.onchange = async () => {
+  input.onchange = () => {
     const file = input.files?.[0];
-    if (file === undefined) return;
-    const opened = openProject(file.name, await file.text());
-    if (!opened.ok) onRefused({ file: opened.file, faults: opened.faults });
-    else setSession({ toast: `${file.name} is open; undo brings the other one back` });
+    if (file !== undefined) void openFile(file, onRefused);
   };
   input.click();
+}
+
+/** Opens a file as a project, or says everything that is wrong in it. */
+export async function openFile(file: File, onRefused: (refused: Refused) => void): Promise<void> {
+  const opened = openProject(file.name, await file.text());
+  if (!opened.ok) onRefused({ file: opened.file, faults: opened.faults });
+  else setSession({ toast: `${file.name} is open; undo brings the other one back` });
 }
 
 /** Gives the project file to the browser to keep. */

@@ -1,0 +1,83 @@
+import { useState } from 'react';
+import { headOf } from '../../core/report/head.ts';
+import type { Column, Table } from '../../core/report/table.ts';
+import { printQuantity, type System } from '../../core/units/quantities.ts';
+import './table.css';
+
+export interface TableViewProps {
+  readonly table: Table;
+  readonly system: System;
+  /** [px] */
+  readonly height: number;
+}
+
+const ROW = 24;
+/** Rows kept ready above and below those in sight. */
+const SPARE = 12;
+
+/** A result table as it is printed. Only the rows in sight stand in the page, so that a long history opens at once. */
+export function TableView({ table, system, height }: TableViewProps) {
+  const [top, setTop] = useState(0);
+  const rows = table.columns[0]?.values.length ?? 0;
+  const from = Math.max(0, Math.min(rows - 1, Math.floor(top / ROW)) - SPARE);
+  const to = Math.min(rows, Math.ceil((top + height) / ROW) + SPARE);
+  return (
+    // biome-ignore lint/a11y/noNoninteractiveTabindex: a part that scrolls must be reachable by keyboard
+    // biome-ignore lint/a11y/useSemanticElements: a section would be one more landmark
+    <div
+      className="table-view"
+      style={{ maxHeight: height }}
+      role="region"
+      aria-label={table.title}
+      tabIndex={0}
+      onScroll={(event) => setTop(event.currentTarget.scrollTop)}
+    >
+      <table aria-rowcount={rows + 1}>
+        <thead>
+          <tr aria-rowindex={1}>
+            {table.columns.map((column) => (
+              <th key={column.key} scope="col" className={column.quantity === 'text' ? 'words' : ''}>
+                {headOf(column, system)}
+              </th>
+            ))}
+          </tr>
+        </thead>
+        <tbody>
+          <Spacer rows={from} columns={table.columns.length} />
+          {Array.from({ length: to - from }, (_, i) => from + i).map((row) => (
+            <tr key={row} aria-rowindex={row + 2}>
+              {table.columns.map((column) => (
+                <Cell key={column.key} column={column} row={row} system={system} />
+              ))}
+            </tr>
+          ))}
+          <Spacer rows={rows - to} columns={table.columns.length} />
+        </tbody>
+      </table>
+    </div>
+  );
+}
+
+function Spacer({ rows, columns }: { readonly rows: number; readonly columns: number }) {
+  if (rows <= 0) return null;
+  return (
+    <tr aria-hidden="true">
+      <td colSpan={columns} style={{ height: rows * ROW, padding: 0, border: 0 }} />
+    </tr>
+  );
+}
+
+function Cell({
+  column: { values, quantity, decimals },
+  row,
+  system,
+}: {
+  readonly column: Column;
+  readonly row: number;
+  readonly system: System;
+}) {
+  const value = values[row];
+  if (quantity === 'text' || typeof value === 'string') return <td className="words">{value ?? ''}</td>;
+  const none = value === null || !Number.isFinite(value);
+  return <td className={none ? 'none' : ''}>{printQuantity(value, quantity, system, decimals)}</td>;
+}

@@ -1,0 +1,31 @@
+type Draw = () => Promise<void>;
+
+/** What waits to be drawn: one entry a plot, a newer one takes the place of the older. */
+const waiting = new Map<object, Draw>();
+let under = false;
+
+/** Draws at most one plot a frame, in the order in which they were first asked for; returns how to withdraw it. */
+export function queueDraw(plot: object, draw: Draw): () => void {
+  waiting.set(plot, draw);
+  if (!under) {
+    under = true;
+    requestAnimationFrame(next);
+  }
+  return () => {
+    if (waiting.get(plot) === draw) waiting.delete(plot);
+  };
+}
+
+function next(): void {
+  const [entry] = waiting;
+  if (entry === undefined) {
+    under = false;
+    return;
+  }
+  const [plot, draw] = entry;
+  waiting.delete(plot);
+  // The rest of the frame belongs to the answers: the plot is drawn after them, and the next one not before the next frame.
+  setTimeout(() => {
+    void draw().finally(() => requestAnimationFrame(next));
+  }, 0);
+}
