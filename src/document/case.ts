@@ -1,9 +1,14 @@
+import { z } from 'zod';
 import type { Limits } from '../core/checks/limits.ts';
-import type { PreparedFrame } from '../core/doors.ts';
+import { type PreparedFrame, prepareFrame } from '../core/doors.ts';
 import type { Analysis } from '../core/dynamics/run.ts';
-import type { Result } from '../core/fault.ts';
+import { stabilityFault, stepOf } from '../core/dynamics/steps.ts';
+import type { Fault, Result } from '../core/fault.ts';
 import type { Frame } from '../core/frame/frame.ts';
-import type { Project } from './project.ts';
+import { crossChecks } from './crossChecks.ts';
+import { faultsOf } from './faults.ts';
+import type { MotionEntry, Project } from './project.ts';
+import { analysisSchema, frameSchema, limitsSchema, motionUse } from './schema.ts';
 
 /** The document as plain numbers: what the calculation needs and nothing else. */
 export interface Case {
@@ -24,9 +29,76 @@ export interface Case {
   readonly leftOut: readonly string[];
 }
 
+/** What of the document is checked; samples, counts and origins are the program's own. */
+const caseSchema = z.object({
+  frame: frameSchema,
+  analysis: analysisSchema,
+  limits: limitsSchema,
+  motions: z.array(z.object(motionUse)),
+});
+
 /**
- * The case of a document, or every reason why there is none (a cell not typed, not readable or out of range; a reference
- * to a mode that is not there; no storey; a step that is no whole part of an interval or beyond the stability limit; a
- * frame unstable under gravity). A frame without motions is a case (modes are still shown).
+ * The case of a document, or every reason why there is none: a cell not typed, not readable or out of range; a reference to a
+ * mode that is not there; no storey; a step that is no whole part of an interval or beyond the stability limit; a frame
+ * unstable under gravity. A frame without motions is a case (modes are still shown).
  */
-export declare function caseOf(project: Project): Result<Case>;
+export function caseOf(project: Project): Result<Case> {
+  if (project.frame.storeys.length === 0) {
+    const fault: Fault = {
+      code: 'no-storey',
+      where: 'frame.storeys',
+      message: 'there is no storey yet',
+      mend: 'Type the first storey',
+    };
+    return { ok: false, faults: [fault] };
+  }
+  const parsed = caseSchema.safeParse(project);
+  const faults = [...(parsed.success ? [] : faultsOf(parsed.error, project)), ...crossChecks(project)];
+  if (!parsed.success || faults.length > 0) return { ok: false, faults };
+  const { frame, analysis, limits } = parsed.data;
+  const prepared = prepareFrame(frame);
+  if (!prepared.ok) return prepared;
+  const used = project.motions.filter((motion) => motion.used);
+  const wrong = stepFaults(used, analysis, prepared.value);
+  if (wrong.length > 0) return { ok: false, faults: wrong };
+  return {
+    ok: true,
+    value: {
+      frame,
+      prepared: prepared.value,
+      analysis,
+      limits,
+      motions: used.map(({ name, interval, samples, count, scale }) => ({
+        name,
+        interval,
+        samples,
+        count,
+        scale: Number(scale),
+      })),
+      leftOut: project.motions.filter((motion) => !motion.used).map(({ name }) => name),
+    },
+  };
+}
+
+/** Each fault of the step once, with the motions it comes from. */
+function stepFaults(motions: readonly MotionEntry[], analysis: Analysis, { modes }: PreparedFrame): Fault[] {
+  const faults = new Map<string, { fault: Fault; names: string[] }>();
+  const keep = (fault: Fault, name: string) => {
+    const known = faults.get(fault.message);
+    if (known) known.names.push(name);
+    else faults.set(fault.message, { fault, names: [name] });
+  };
+  for (const { name, interval } of motions) {
+    const step = stepOf(analysis.step, interval);
+    if (!step.ok) {
+      for (const fault of step.faults) keep(fault, name);
+      continue;
+    }
+    const unstable = stabilityFault(modes, analysis.method, step.value.size);
+    if (unstable) keep(unstable, name);
+  }
+  return Array.from(faults.values(), ({ fault, names }) => ({
+    ...fault,
+    message: names.length > 0 && motions.length > 1 ? `${fault.message} (${names.join(', ')})` : fault.message,
+  }));
+}

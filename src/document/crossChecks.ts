@@ -1,0 +1,114 @@
+import type { Fault } from '../core/fault.ts';
+
+/**
+ * What no key can tell alone, on whatever stands there (parts that are of the wrong shape have faults of their own and are
+ * passed over): modes that exist and differ, Rayleigh damping on more than one storey, names of motions, a reason for what is
+ * left out, hardening and flag height that fit together.
+ */
+export function crossChecks(raw: unknown): Fault[] {
+  const project = objectOf(raw);
+  const frame = objectOf(project?.frame);
+  const storeys = listOf(frame?.storeys);
+  return [
+    ...dampingFaults(objectOf(frame?.damping), storeys.length),
+    ...storeys.flatMap((entry, i) => lawFaults(objectOf(objectOf(entry)?.law), `frame.storeys[${i}].law`)),
+    ...storeys.flatMap((entry, i) => roleFaults(objectOf(entry), i)),
+    ...motionFaults(listOf(project?.motions)),
+  ];
+}
+
+function dampingFaults(damping: Record<string, unknown> | null, storeys: number): Fault[] {
+  if (damping === null || storeys === 0) return [];
+  const faults: Fault[] = [];
+  const exists = (mode: unknown, where: string) => {
+    if (typeof mode !== 'number' || !Number.isInteger(mode) || mode < 1 || mode <= storeys) return;
+    faults.push({
+      code: 'no-such-mode',
+      where,
+      message: `mode ${mode} is not there: a frame of ${storeys} ${storeys === 1 ? 'storey' : 'storeys'} has ${storeys} ${storeys === 1 ? 'mode' : 'modes'}`,
+      mend: `Type a mode from 1 to ${storeys}`,
+    });
+  };
+  if (damping.kind === 'rayleigh') {
+    if (storeys === 1) {
+      const message = 'Rayleigh damping needs two modes, and one storey has one';
+      return [{ code: 'rayleigh-on-one-storey', where: 'frame.damping', message, mend: 'Choose modal damping' }];
+    }
+    const [i, j] = listOf(damping.modes);
+    exists(i, 'frame.damping.modes[0]');
+    exists(j, 'frame.damping.modes[1]');
+    if (typeof i === 'number' && i === j) {
+      const message = `both modes are mode ${i}, they must differ`;
+      faults.push({ code: 'same-mode', where: 'frame.damping.modes[1]', message, mend: 'Type two different modes' });
+    }
+  }
+  if (damping.kind === 'stiffness-proportional') exists(damping.mode, 'frame.damping.mode');
+  return faults;
+}
+
+function lawFaults(law: Record<string, unknown> | null, where: string): Fault[] {
+  if (law?.kind === 'bouc-wen' && typeof law.beta === 'number' && typeof law.gamma === 'number') {
+    if (Math.abs(law.beta + law.gamma - 1) > 1e-9) {
+      const message = `beta + gamma is ${law.beta + law.gamma}, must be 1`;
+      return [{ code: 'out-of-range', where: `${where}.gamma`, message, mend: `Type gamma ${1 - law.beta}` }];
+    }
+  }
+  if (law?.kind === 'flag' && typeof law.ratio === 'number' && typeof law.hardening === 'number') {
+    if (law.ratio > 1 - law.hardening) {
+      const message = `is ${law.ratio}, must be at most 1 - hardening = ${1 - law.hardening}: more would not re-centre`;
+      return [{ code: 'out-of-range', where: `${where}.ratio`, message, mend: 'Type a lower ratio' }];
+    }
+  }
+  return [];
+}
+
+function roleFaults(storey: Record<string, unknown> | null, i: number): Fault[] {
+  if (storey?.role !== 'isolator' || i === 0) return [];
+  const message = 'only the first storey can be an isolator';
+  return [
+    {
+      code: 'isolator-not-first',
+      where: `frame.storeys[${i}].role`,
+      message,
+      mend: 'Move it to the ground, or take the role out',
+    },
+  ];
+}
+
+function motionFaults(motions: readonly unknown[]): Fault[] {
+  const faults: Fault[] = [];
+  const first = new Map<string, number>();
+  for (const [i, entry] of motions.entries()) {
+    const motion = objectOf(entry);
+    if (motion === null) continue;
+    const { name, used, reason } = motion;
+    if (typeof name === 'string') {
+      const before = first.get(name);
+      if (before === undefined) first.set(name, i);
+      else {
+        const message = `"${name}" is also the name of motions[${before}]: names are unique in a project`;
+        faults.push({ code: 'same-name', where: `motions[${i}].name`, message, mend: 'Give it another name' });
+      }
+    }
+    if (used === false && (typeof reason !== 'string' || reason.trim() === '')) {
+      const message = 'the motion is left out and no reason is given';
+      faults.push({
+        code: 'no-reason',
+        where: `motions[${i}].reason`,
+        message,
+        mend: 'Type why it is left out, or use it',
+      });
+    }
+  }
+  return faults;
+}
+
+function objectOf(value: unknown): Record<string, unknown> | null {
+  return typeof value === 'object' && value !== null && !Array.isArray(value)
+    ? (value as Record<string, unknown>)
+    : null;
+}
+
+function listOf(value: unknown): readonly unknown[] {
+  return Array.isArray(value) ? value : [];
+}

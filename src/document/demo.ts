@@ -1,0 +1,57 @@
+import { digestOfSamples } from '../core/digest.ts';
+import { demoMotions } from '../core/motion/demoMotions.ts';
+import { STANDARD_GRAVITY } from '../core/units/constants.ts';
+import type { OpenedProject } from './file.ts';
+import type { MotionEntry, StoreyRow } from './project.ts';
+
+/** The frame of an invented clinic, from the ground up: name, height [m], weight [kN], stiffness [kN/mm]. */
+const CLINIC: readonly (readonly [string, number, number, number])[] = [
+  ['Entrance', 4.8, 6900, 640],
+  ['Imaging', 4.2, 7250, 455],
+  ['Theatres', 4.2, 7100, 460],
+  ['Maternity', 3.6, 6450, 440],
+  ['Wards', 3.6, 6300, 395],
+  ['Wards', 3.6, 6300, 345],
+  ['Wards', 3.6, 6300, 280],
+  ['Plant', 3.6, 5350, 205],
+];
+
+/** Factors by which the seven synthetic motions are used; chosen so that one storey is a little over the invented limit. */
+const FACTORS: readonly number[] = [1, 1, 1, 1, 1, 1, 1];
+
+/**
+ * The example that a first visit opens: a frame, a brief and motions of our own, all invented. Nothing in it describes a real
+ * building, site or record.
+ */
+export function demoProject(): OpenedProject {
+  const samples = new Map<string, Float64Array>();
+  const motions = demoMotions().map(({ name, interval, acceleration, origin }, i): MotionEntry => {
+    const digest = digestOfSamples(acceleration);
+    samples.set(digest, acceleration);
+    return { name, interval, samples: digest, count: acceleration.length, scale: FACTORS[i] ?? 1, used: true, origin };
+  });
+  const storeys = CLINIC.map(
+    ([name, height, weight, stiffness]): StoreyRow => ({
+      name,
+      height,
+      mass: (weight * 1e3) / STANDARD_GRAVITY,
+      stiffness: stiffness * 1e6,
+      law: { kind: 'elastic' },
+    }),
+  );
+  return {
+    project: {
+      title: 'Riverside clinic, transverse frame',
+      frame: { storeys, damping: { kind: 'rayleigh', modes: [1, 3], ratios: [0.05, 0.05] }, pDelta: true },
+      motions,
+      analysis: { method: { kind: 'newmark', beta: 0.25, gamma: 0.5 }, step: 0.005, tail: 5, stopDrift: 0.1 },
+      limits: {
+        drift: 0.015,
+        factor: 1,
+        source:
+          'Invented design brief 4.2: 1.5 % of storey height, design earthquake, mean of seven unreduced histories',
+      },
+    },
+    samples,
+  };
+}
