@@ -46,12 +46,12 @@ export function Grid(props: GridProps) {
     ensureStorey,
   };
 
-  // The focus follows the chosen cell wherever a key or the end of an edit left it.
+  // The focus follows the chosen cell wherever a key or the end of an edit left it; at first it starts there.
   useLayoutEffect(() => {
     const root = grid.current;
     if (root === null || edited !== null) return;
     const focused = document.activeElement;
-    if (!wanted.current && !root.contains(focused)) return;
+    if (!wanted.current && focused !== document.body && !root.contains(focused)) return;
     wanted.current = false;
     const target = root.querySelector<HTMLElement>(`[data-storey="${cell.storey}"] [data-cell="${cell.column}"]`);
     if (target === focused) return;

@@ -111,7 +111,7 @@ function restingKey(event: KeyboardEvent, keyboard: Keyboard): boolean {
     default:
       if (key.length !== 1 || key === ' ' || !isTyped(column)) return false;
       if ('[]?'.includes(key) && column !== 'name') return false;
-      keyboard.ensureStorey();
+      begin(keyboard);
       typeField(cellPath(storey, column), key, sessionStore.getState().system);
       return true;
   }
@@ -121,9 +121,15 @@ function restingKey(event: KeyboardEvent, keyboard: Keyboard): boolean {
 export function open(keyboard: Keyboard): boolean {
   const { storey, column } = keyboard.cell;
   if (!isTyped(column)) return false;
-  keyboard.ensureStorey();
+  begin(keyboard);
   openField(cellPath(storey, column), sessionStore.getState().system);
   return true;
+}
+
+/** An edit begins: the cell is the reader's own from here on, and on an empty sheet its storey is made. */
+function begin({ cell, ensureStorey }: Keyboard): void {
+  if (sessionStore.getState().selection === null) choose(cell.storey, cell.column);
+  ensureStorey();
 }
 
 function altKeyOn(event: KeyboardEvent, storey: number): boolean {
