@@ -22,13 +22,13 @@ export function TableView({ table, system, height }: TableViewProps) {
   const from = Math.max(0, Math.min(rows - 1, Math.floor(top / ROW)) - SPARE);
   const to = Math.min(rows, Math.ceil((top + height) / ROW) + SPARE);
   return (
-    // biome-ignore lint/a11y/noNoninteractiveTabindex: a part that scrolls must be reachable by keyboard
     // biome-ignore lint/a11y/useSemanticElements: a section would be one more landmark
     <div
       className="table-view"
       style={{ maxHeight: height }}
       role="region"
       aria-label={table.title}
+      // biome-ignore lint/a11y/noNoninteractiveTabindex: a part that scrolls must be reachable by keyboard
       tabIndex={0}
       onScroll={(event) => setTop(event.currentTarget.scrollTop)}
     >
@@ -61,8 +61,8 @@ export function TableView({ table, system, height }: TableViewProps) {
 function Spacer({ rows, columns }: { readonly rows: number; readonly columns: number }) {
   if (rows <= 0) return null;
   return (
-    <tr aria-hidden="true">
-      <td colSpan={columns} style={{ height: rows * ROW, padding: 0, border: 0 }} />
+    <tr>
+      <td colSpan={columns} className="spacer" style={{ height: rows * ROW }} />
     </tr>
   );
 }

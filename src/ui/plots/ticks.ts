@@ -21,7 +21,7 @@ export function ticksBetween(from: number, to: number, most: number): Ticks {
   const step = niceStep(length / most);
   const first = Math.ceil(from / step - 1e-9);
   const last = Math.floor(to / step + 1e-9);
-  const at = Array.from({ length: last - first + 1 }, (_, i) => (first + i) * step);
+  const at = Array.from({ length: last - first + 1 }, (_, i) => (first + i) * step + 0);
   return { at, decimals: decimalsOf(step) };
 }
 

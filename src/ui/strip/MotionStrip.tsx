@@ -1,4 +1,4 @@
-import { memo, useMemo } from 'react';
+import { memo } from 'react';
 import { axisUnitOf } from '../../core/units/axisUnit.ts';
 import { printQuantity, type System } from '../../core/units/quantities.ts';
 import { thinned } from '../plots/thin.ts';
@@ -29,14 +29,8 @@ export const MotionStrip = memo(function MotionStrip({ axis, band, scale, system
   const even = evenAxis(unit.onAxis(Math.abs(factor) * Math.abs(facts?.peak ?? 0)));
   const middle = band.height / 2;
   const y = (value: number) => middle - (unit.onAxis(value) / even.end) * middle;
-  const line = useMemo(
-    () => (samples === null || entry === null ? '' : tracePath(samples, entry.interval, factor, scale, y)),
-    [samples, entry, factor, scale, even.end, middle],
-  );
-  const litLine = useMemo(
-    () => (lit === null ? '' : tracePath(lit.samples, lit.interval, lit.factor, scale, y)),
-    [lit, scale, even.end, middle],
-  );
+  const line = samples === null || entry === null ? '' : tracePath(samples, entry.interval, factor, scale, y);
+  const litLine = lit === null ? '' : tracePath(lit.samples, lit.interval, lit.factor, scale, y);
   const inside = (time: number) => time >= range[0] && time <= range[1];
   const free = Math.max(0, x(axis.lastSample));
   return (
@@ -55,7 +49,7 @@ export const MotionStrip = memo(function MotionStrip({ axis, band, scale, system
           <g key={tick}>
             <path d={`M0 ${Math.round(at) + 0.5}H${width}`} className={tick === 0 ? 's-rule' : 's-hair'} />
             <text x="-6" y={at + 4} className="end">
-              {unit.printTick(tick, even.ticks.decimals)}
+              {unit.printTick(tick, tick === 0 ? 0 : even.ticks.decimals)}
             </text>
           </g>
         );
@@ -128,7 +122,7 @@ function StrongMotion({
 }) {
   if (strong === null) return null;
   return (
-    <rect x={x(strong.from)} y={y} width={Math.max(1, x(strong.to) - x(strong.from))} height="4" className="f-suite" />
+    <rect x={x(strong.from)} y={y} width={Math.max(1, x(strong.to) - x(strong.from))} height="4" fill="var(--suite)" />
   );
 }
 

@@ -1,0 +1,48 @@
+import { describe, expect, it } from 'vitest';
+import { contentOf, ENERGY_PARTS, TIME_PANELS, valueAt } from '../../../src/ui/strip/panelContent.ts';
+import { noise, run, shearFrame } from '../../support/frames.ts';
+
+const HEIGHT = 3.2;
+const frame = shearFrame([2e5, 2e5, 1.5e5], [2e8, 1.6e8, 1.2e8], { kind: 'modal', ratios: [0.05] }, HEIGHT);
+const result = run(frame, noise(5, 1500), 0.01, { histories: true, tail: 2 });
+const heights = [HEIGHT, HEIGHT, HEIGHT];
+
+describe('contentOf', () => {
+  it('shows histories whose largest values are the peaks of the run, at the times of the run', () => {
+    for (const storey of [0, 1, 2]) {
+      const drift = contentOf('drift', result, storey, heights);
+      expect(drift).not.toBeNull();
+      if (drift === null) continue;
+      expect(Math.max(...drift.values.map(Math.abs))).toBeCloseTo(result.storeys.peakDriftRatio[storey], 14);
+      expect(Math.abs(valueAt(drift.values, drift.interval, drift.peak.time))).toBeCloseTo(drift.peak.value, 14);
+      const shear = contentOf('storey-shear', result, storey, heights);
+      expect(shear?.peak.value).toBe(result.storeys.peakShear[storey]);
+      expect(Math.abs(valueAt(shear?.values ?? new Float64Array(), 0.01, shear?.peak.time ?? 0))).toBeCloseTo(
+        result.storeys.peakShear[storey],
+        3,
+      );
+    }
+  });
+
+  it('stacks the energies up to the input, as far apart as the run says', () => {
+    const energy = contentOf('energy', result, 0, heights);
+    const top = energy?.stack.at(-1)?.sum ?? new Float64Array();
+    const { input } = result.histories?.energy ?? { input: new Float64Array() };
+    let [apart, largest] = [0, 0];
+    for (let j = 0; j < input.length; j++) {
+      largest = Math.max(largest, Math.abs(input[j]));
+      apart = Math.max(apart, Math.abs(input[j] - top[j]));
+    }
+    expect(energy?.stack.map(({ part }) => part)).toEqual(ENERGY_PARTS.filter((part) => result.energy[part] !== 0));
+    expect(apart / largest).toBeLessThan(2 * result.energy.imbalance + 1e-12);
+    expect(apart).toBeGreaterThan(0);
+  });
+
+  it('has nothing for a run without histories, for no storey, for another building', () => {
+    for (const { kind } of TIME_PANELS) {
+      expect(contentOf(kind, { ...result, histories: null }, 0, heights)).toBeNull();
+      expect(contentOf(kind, result, -1, heights)).toBeNull();
+      expect(contentOf(kind, result, 0, [HEIGHT])).toBeNull();
+    }
+  });
+});
