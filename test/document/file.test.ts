@@ -203,7 +203,7 @@ describe('[DOC-2] motions by file', () => {
 
 describe('[DOC-3] versions', () => {
   test('lower versions are migrated one by one', () => {
-    const migrations = new Map([
+    const migrations = new Map<number, (raw: Record<string, unknown>) => Record<string, unknown>>([
       [1, (raw: Record<string, unknown>) => ({ ...raw, title: `${raw.title}!` })],
       [2, (raw: Record<string, unknown>) => ({ ...raw, added: true })],
     ]);
