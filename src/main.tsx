@@ -1,10 +1,10 @@
 import { createRoot } from 'react-dom/client';
+import { demoProject } from './document/demo.ts';
 import { workerEndpoint } from './engine/endpoint.ts';
 import { inlineEndpoint, inlineEngine } from './engine/inline.ts';
 import { createPool } from './engine/pool.ts';
 import type { Engine } from './engine/protocol.ts';
 import { startAutosave } from './state/autosave.ts';
-import { demoProject } from './state/borrowed.ts';
 import { startImports } from './state/imports.ts';
 import { browserKeeper } from './state/keeper.ts';
 import { aloneInBrowser, onLeavePage } from './state/page.ts';

@@ -1,6 +1,7 @@
 import type { Result } from '../core/fault.ts';
+import { fieldOf, writeAt } from '../document/fields.ts';
 import type { Project } from '../document/project.ts';
-import { type Draft, documentStore, effectiveProject, restore } from './document.ts';
+import { type Draft, documentStore, restore } from './document.ts';
 import type { Keeper } from './keeper.ts';
 import { linesOf, readDraft, readEnvelope, writtenAt } from './kept.ts';
 import { onNewSamples, putSamples, samplesOf } from './samples.ts';
@@ -128,7 +129,8 @@ async function reopen(keeper: Keeper, project: Project, draft: Draft | null): Pr
 /** Whether the draft's field is still there. */
 function fits(project: Project, draft: Draft): boolean {
   try {
-    return effectiveProject({ project, draft }) !== null;
+    fieldOf(draft.path);
+    return writeAt(project, draft.path, draft.value) !== null;
   } catch {
     return false;
   }

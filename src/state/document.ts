@@ -1,8 +1,8 @@
 import { useStore } from 'zustand';
 import { createStore } from 'zustand/vanilla';
-
+import { emptyProject } from '../document/empty.ts';
+import { writeAt } from '../document/fields.ts';
 import type { Project, Typed } from '../document/project.ts';
-import { emptyProject, writeAt } from './borrowed.ts';
 import { type Counts, type History, NO_HISTORY, record, stepBack, stepForward, type Travelled } from './undo.ts';
 
 export type { Counts } from './undo.ts';

@@ -1,5 +1,5 @@
 import type { Fault, Result } from '../core/fault.ts';
-import { demoProject, emptyProject, readProject, writeProject } from './borrowed.ts';
+import { readProject, writeProject } from '../document/file.ts';
 import { documentStore, replace } from './document.ts';
 import { putSamples, samplesOf } from './samples.ts';
 
@@ -17,21 +17,9 @@ export interface ProjectFile {
 export function openProject(file: string, text: string): Opened {
   const read = readProject(text);
   if (!read.ok) return { ok: false, file, faults: read.faults };
-  keepSamples(read.value.samples);
+  for (const [digest, values] of read.value.samples) putSamples(digest, values);
   replace(`open ${file}`, read.value.project);
   return { ok: true };
-}
-
-/** The demo in the place of the document, as one undo step. */
-export function openDemo(): void {
-  const { project, samples } = demoProject();
-  keepSamples(samples);
-  replace('open the demo', project);
-}
-
-/** An empty sheet in the place of the document, as one undo step. */
-export function newProject(): void {
-  replace('new project', emptyProject());
 }
 
 /**
@@ -58,8 +46,4 @@ function fileName(title: string): string {
     .trim()
     .replace(/^\.+|\.+$/g, '');
   return name === '' ? 'untitled' : name.slice(0, 80).trim();
-}
-
-function keepSamples(samples: ReadonlyMap<string, Float64Array>): void {
-  for (const [digest, values] of samples) putSamples(digest, values);
 }

@@ -1,4 +1,5 @@
 import type { RecordAnswers } from '../core/motion/reading.ts';
+import { addMotions as withMotions } from '../document/edits.ts';
 import type { MotionEntry } from '../document/project.ts';
 import type { Engine, ReadAnswer, Reply } from '../engine/protocol.ts';
 import { documentStore, edit } from './document.ts';
@@ -37,27 +38,18 @@ export function cancelReading(question: string): void {
  * taken gets a number. Returns the names they got.
  */
 export function addMotions(answers: readonly ReadAnswer[]): readonly string[] {
-  const taken = new Set(documentStore.getState().project.motions.map((motion) => motion.name));
   const entries: MotionEntry[] = [];
   for (const { reading, samples } of answers) {
     if (!reading.motion || !samples) continue;
-    const { acceleration, interval, origin } = reading.motion;
-    const name = freeName(reading.motion.name, taken);
-    taken.add(name);
+    const { name, acceleration, interval, origin } = reading.motion;
     putSamples(samples, acceleration);
     entries.push({ name, interval, samples, count: acceleration.length, scale: 1, used: true, origin });
   }
-  const names = entries.map((entry) => entry.name);
-  if (entries.length > 0) {
-    const label = names.length === 1 ? `add motion ${names[0]}` : `add ${names.length} motions`;
-    edit(label, (project) => ({ ...project, motions: [...project.motions, ...entries] }));
-  }
-  return names;
-}
-
-function freeName(name: string, taken: ReadonlySet<string>): string {
-  if (!taken.has(name)) return name;
-  let number = 2;
-  while (taken.has(`${name} (${number})`)) number += 1;
-  return `${name} (${number})`;
+  if (entries.length === 0) return [];
+  const label = entries.length === 1 ? `add motion ${entries[0].name}` : `add ${entries.length} motions`;
+  edit(label, (project) => withMotions(project, entries));
+  return documentStore
+    .getState()
+    .project.motions.slice(-entries.length)
+    .map((motion) => motion.name);
 }

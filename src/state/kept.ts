@@ -1,4 +1,5 @@
 import { type Fault, faultLine, type Result } from '../core/fault.ts';
+import { migrated } from '../document/migrations.ts';
 import { PROJECT_FORMAT, PROJECT_VERSION, type Project } from '../document/project.ts';
 import type { Draft } from './document.ts';
 
@@ -23,15 +24,17 @@ export function writtenAt(stored: unknown): number | null {
 
 /** The project in a stored envelope, or why it cannot be used. A field may hold anything typed; the shape must be whole. */
 export function readEnvelope(stored: unknown): Result<Project> {
-  const faults: Fault[] = [];
-  const refuse = (where: string, message: string) =>
-    faults.push({ code: 'unreadable', where, message, mend: 'It is kept aside as it was' });
-  const root = objectOf(stored);
-  if (root?.format !== PROJECT_FORMAT) refuse('format', `is ${JSON.stringify(root?.format)}, not "${PROJECT_FORMAT}"`);
-  else if (typeof root.version !== 'number' || root.version > PROJECT_VERSION)
-    refuse('version', `is ${JSON.stringify(root.version)}, written by a later version than ${PROJECT_VERSION}`);
-  else for (const where of faultsOfShape(root.document)) refuse(where, 'is missing or of another kind');
-  return faults.length > 0 ? { ok: false, faults } : { ok: true, value: root?.document as Project };
+  const envelope = objectOf(stored);
+  const current = migrated(
+    envelope && { ...objectOf(envelope.document), format: envelope.format, version: envelope.version },
+  );
+  if (!current.ok) return current;
+  const { format: _, version: __, ...document } = current.value;
+  const faults = faultsOfShape(document).map((where): Fault => {
+    const message = 'is missing or of another kind';
+    return { code: 'wrong-kind', where, message, mend: 'The project is kept aside as it was' };
+  });
+  return faults.length > 0 ? { ok: false, faults } : { ok: true, value: document as unknown as Project };
 }
 
 /** The stored draft, or null where there is none that can be used. */

@@ -1,4 +1,4 @@
-import { demoProject } from '../../state/borrowed.ts';
+import { demoProject } from '../../document/demo.ts';
 import { replace } from '../../state/document.ts';
 import { putSamples } from '../../state/samples.ts';
 
