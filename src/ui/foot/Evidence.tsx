@@ -49,10 +49,13 @@ export function Evidence() {
         </li>
         <li>
           {answers.step.limit === null ? (
-            'stable at any step'
+            <>
+              stable<span className="long"> at any step</span>
+            </>
           ) : (
             <>
-              stable up to a step of <b>{shortNumber(answers.step.limit)} s</b>
+              stable up to <span className="long">a step of </span>
+              <b>{shortNumber(answers.step.limit)} s</b>
             </>
           )}
         </li>
@@ -107,6 +110,7 @@ function stepOrigin(answers: Answers): string {
 
 /** A ratio as percent with two figures that count. */
 function percent(ratio: number): string {
+  if (ratio < 0.00001) return 'under 0.001 %';
   const decimals = ratio >= 0.01 ? 1 : ratio >= 0.00005 ? 2 : 3;
   return `${printQuantity(ratio, 'percent', 'si', decimals)} %`;
 }

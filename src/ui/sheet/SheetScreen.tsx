@@ -23,6 +23,7 @@ import { PasteDialog } from './PasteDialog.tsx';
 import { rowsOf } from './rows.ts';
 import { AccelerationPlot, ShearPlot } from './SidePlots.tsx';
 import { useAxes } from './useAxes.ts';
+import { useCursorAtPeak } from './useCursorAtPeak.ts';
 import { useLayout } from './useLayout.ts';
 import { Verdict } from './Verdict.tsx';
 import './sheet.css';
@@ -103,6 +104,7 @@ export function SheetScreen({ onOpen, onExample }: SheetScreenProps) {
     });
   const statistic = { mean: 'Mean', median: 'Median', max: 'Largest' }[answers?.measure ?? 'mean'];
   const tall = rows.total > free + 40;
+  useCursorAtPeak();
   // A building taller than the sheet opens at the storey that is shown, not at the roof.
   const opened = useRef(false);
   useLayoutEffect(() => {

@@ -46,7 +46,7 @@ export function Verdict({ letters }: VerdictProps) {
     return (
       <Line
         kind="old"
-        headline={`Out of date${changed === null ? '' : `: ${changed}`}`}
+        headline={`Out of date${changed === null ? '' : `: ${inSentence(changed)}`}`}
         detail={waits ? '' : why(faults)}
       >
         {waits && (
@@ -87,6 +87,11 @@ export function Verdict({ letters }: VerdictProps) {
       )}
     </Line>
   );
+}
+
+/** A label as it stands inside a sentence. */
+function inSentence(label: string): string {
+  return label.charAt(0).toLowerCase() + label.slice(1);
 }
 
 function why(faults: ResultsState['faults']): string {
@@ -138,7 +143,7 @@ function Running() {
           Running: {Math.floor(done)} of {of} motions
         </span>
         <span className="detail">
-          {changed === null ? '' : `${changed}; `}
+          {changed === null ? '' : `${inSentence(changed)}; `}
           {Math.round(100 * share)} %{left}
         </span>
         <span className="mends">

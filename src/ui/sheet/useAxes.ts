@@ -24,7 +24,12 @@ function axesOf(answers: AnswerRows | null, limit: number | null): Axes {
   const accelerations = answers.motions.flatMap(({ acceleration }) => acceleration);
   return {
     drift: axisFor(Math.max(1.08 * aim, ...drifts, ...(answers.drift ?? [])), 3.6),
-    shear: axisFor(Math.max(0, ...(answers.shear ?? [])), 1.2),
+    shear: filled(Math.max(0, ...(answers.shear ?? []))),
     acceleration: axisFor(Math.max(0, ...accelerations), 2),
   };
+}
+
+/** A small axis that its largest value fills, whatever its numbers. */
+function filled(largest: number): Axis {
+  return largest > 0 ? { ...axisFor(largest, 2), end: 1.1 * largest } : axisFor(0, 2);
 }
