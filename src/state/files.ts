@@ -1,5 +1,6 @@
 import type { Fault, Result } from '../core/fault.ts';
-import { readProject, writeProject } from '../document/file.ts';
+import { writeProject } from '../document/file.ts';
+import { readProjectOnItsWay } from '../document/onItsWay.ts';
 import { documentStore, replace } from './document.ts';
 import { putSamples, samplesOf } from './samples.ts';
 
@@ -13,9 +14,12 @@ export interface ProjectFile {
   readonly text: string;
 }
 
-/** Opens the text of a project file in the place of the document, as one undo step; a file with faults changes nothing. */
+/**
+ * Opens the text of a project file in the place of the document, as one undo step; a file with faults changes nothing. A
+ * document saved on its way is opened with its open cells: it lists them and does not run.
+ */
 export function openProject(file: string, text: string): Opened {
-  const read = readProject(text);
+  const read = readProjectOnItsWay(text);
   if (!read.ok) return { ok: false, file, faults: read.faults };
   for (const [digest, values] of read.value.samples) putSamples(digest, values);
   replace(`open ${file}`, read.value.project);
