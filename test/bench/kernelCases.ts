@@ -77,7 +77,7 @@ export function kernelProblem({ storeys: n, damping, method }: KernelCase): { pr
 /** The same case as the C twin reads it. */
 export function twinInput(problem: Problem, repeats: number): string {
   const { prepared, method, step, steps, ground } = problem;
-  const { records, inverse } = workspace(problem);
+  const { records, matrix } = workspace(problem);
   const { n } = prepared.arrays;
   const column = (field: number) => Array.from({ length: n }, (_, i) => records[i * FIELD.STRIDE + field]).join(' ');
   const fields = [
@@ -92,9 +92,9 @@ export function twinInput(problem: Problem, repeats: number): string {
   ];
   const { am, af, beta, gamma } = method;
   return [
-    [inverse ? 1 : 0, n, steps, repeats, step, am, af, beta, gamma].join(' '),
+    [matrix ? 1 : 0, n, steps, repeats, step, am, af, beta, gamma].join(' '),
     ...fields.map(column),
-    inverse ? Array.from(inverse).join(' ') : '',
+    matrix ? Array.from(matrix.inverse).join(' ') : '',
     Array.from(ground).join(' '),
   ].join('\n');
 }
@@ -112,7 +112,7 @@ export function timeKernel(
   const once = () => {
     work.records.set(fresh);
     sums.fill(0);
-    stepTo(work.records, work.inverse, n, problem.ground, work.scheme, sums, 0, problem.steps);
+    stepTo(work.records, work.matrix, n, problem.ground, work.scheme, sums, 0, problem.steps);
   };
   for (let i = 0; i < 60; i++) once();
   const batch = 5;

@@ -27,7 +27,7 @@ export function startMarch(problem: Problem, choice: MethodChoice, want: Want): 
   const { steps, residualFrom, ground } = problem;
   const { n } = problem.prepared.arrays;
   const work = workspace(problem);
-  const { records, inverse, scheme, sums } = work;
+  const { records, matrix, scheme, sums } = work;
   const residuals = emptyResiduals(n);
   const histories = want.histories ? historyBuffers(problem) : null;
   if (histories) keepHistory(histories, problem, work, 0);
@@ -43,9 +43,9 @@ export function startMarch(problem: Problem, choice: MethodChoice, want: Want): 
     advance(count) {
       const end = Math.min(steps, done + count);
       if (!over() && done < unwatched)
-        done = stepTo(records, inverse, n, ground, scheme, sums, done, Math.min(end, unwatched));
+        done = stepTo(records, matrix, n, ground, scheme, sums, done, Math.min(end, unwatched));
       while (!over() && done < end) {
-        done = stepTo(records, inverse, n, ground, scheme, sums, done, done + 1);
+        done = stepTo(records, matrix, n, ground, scheme, sums, done, done + 1);
         if (histories) keepHistory(histories, problem, work, done);
         if (done > residualFrom) keepResiduals(residuals, records);
       }

@@ -72,6 +72,12 @@ export const SUM = {
   SUMS,
 } as const;
 
+/** The inverse of the step's matrix, row-major n x n, and scratch of n for the right-hand side without gaps. */
+export interface FullMatrix {
+  readonly inverse: Float64Array;
+  readonly side: Float64Array;
+}
+
 /** The numbers of a scheme at a step, as Method: am, af, beta, gamma and h [s]. */
 export interface Scheme {
   readonly am: number;
@@ -86,20 +92,20 @@ export interface Scheme {
  * right-hand side and the elimination, downwards the substitution, the new state, energies and peaks, each number used while
  * it is still in a register.
  *
- * Damping is either dashpots (tridiagonal C: `inverse` is null, the records hold the factors) or a full matrix. For a full one
+ * Damping is either dashpots (tridiagonal C: `matrix` is null, the records hold the factors) or a full matrix. For a full one
  * the step's matrix A = (1 - am) M + (1 - af) (gamma h C + beta h^2 K) comes inverted, a step is one product with it, and C
  * itself is never needed: from A a(n+1) = r follows C a(n+1) = (r - (1 - am) M a(n+1) - (1 - af) beta h^2 K a(n+1)) /
  * ((1 - af) gamma h), and C v, C a are carried along by the scheme's own update of v.
  *
  * @param w        n records of STRIDE
- * @param inverse  A^-1, row-major n x n, or null
+ * @param matrix   the full matrix of the step, or null
  * @param ground   ag at each step, at least `to` + 1 entries [m/s2]
  * @param sums     SUMS entries
  * @returns the last step done: `to`, or the one at which sums[STOPPED] was set
  */
 export function stepTo(
   w: Float64Array,
-  inverse: Float64Array | null,
+  matrix: FullMatrix | null,
   n: number,
   ground: Float64Array,
   scheme: Scheme,
@@ -108,7 +114,7 @@ export function stepTo(
   to: number,
 ): number {
   const { am, af, beta, gamma, h } = scheme;
-  const full = inverse !== null;
+  const full = matrix !== null;
   const wf = 1 - af;
   const b0 = beta * h * h;
   const b1 = (0.5 - beta) * h * h;
@@ -156,7 +162,7 @@ export function stepTo(
     const fdTop = full ? w[p + DAMPING_FORCE] + ya * w[p + DAMPING_RATE] : w[p + FLOOR_DASHPOT] * y;
     r = -q - w[p + MASS] * (ag + am * ai) - fdTop - w[p + MULTIPLIER] * r;
     w[p + RHS] = r;
-    if (full) productInto(inverse, w, n);
+    if (full) productInto(matrix, w, n);
 
     let an = full ? w[p + NEXT] : r * w[p + PER_PIVOT];
     let un = w[p + U] + h * w[p + V] + b1 * ai + b0 * an;
@@ -251,7 +257,8 @@ export function stepTo(
 }
 
 /** NEXT = inverse x RHS, four rows at a time, so that four sums run side by side. */
-function productInto(inverse: Float64Array, w: Float64Array, n: number): void {
+function productInto({ inverse, side }: FullMatrix, w: Float64Array, n: number): void {
+  for (let i = 0, at = RHS; i < n; i++, at += STRIDE) side[i] = w[at];
   let i = 0;
   for (; i + 3 < n; i += 4) {
     const r0 = i * n;
@@ -263,7 +270,7 @@ function productInto(inverse: Float64Array, w: Float64Array, n: number): void {
     let s2 = 0;
     let s3 = 0;
     for (let c = 0; c < n; c++) {
-      const x = w[c * STRIDE + RHS];
+      const x = side[c];
       s0 += inverse[r0 + c] * x;
       s1 += inverse[r1 + c] * x;
       s2 += inverse[r2 + c] * x;
@@ -277,7 +284,7 @@ function productInto(inverse: Float64Array, w: Float64Array, n: number): void {
   }
   for (; i < n; i++) {
     let s = 0;
-    for (let c = 0; c < n; c++) s += inverse[i * n + c] * w[c * STRIDE + RHS];
+    for (let c = 0; c < n; c++) s += inverse[i * n + c] * side[c];
     w[i * STRIDE + NEXT] = s;
   }
 }

@@ -2,14 +2,14 @@ import { assembleTridiagonal } from '../frame/matrices.ts';
 import type { PreparedFrame } from '../frame/prepare.ts';
 import { factorTridiagonal } from '../linalg/tridiagonal.ts';
 import type { Problem } from './problem.ts';
-import { FIELD, type Scheme, SUM } from './stepping.ts';
+import { FIELD, type FullMatrix, type Scheme, SUM } from './stepping.ts';
 
 /** All scratch of one march, made once: the only thing a step may write. */
 export interface Workspace {
   /** n records, see stepping.ts. */
   readonly records: Float64Array;
-  /** Inverse of the step's matrix for full damping, row-major n x n; null where it is banded. */
-  readonly inverse: Float64Array | null;
+  /** The step's matrix where damping is full; null where it is banded. */
+  readonly matrix: FullMatrix | null;
   readonly scheme: Scheme;
   readonly sums: Float64Array;
 }
@@ -35,10 +35,10 @@ export function workspace({ prepared, method, step, ground, stopDrift }: Problem
     onStiffness: (1 - af) * beta * step * step,
   };
   const { damping } = prepared;
-  let inverse: Float64Array | null = null;
+  let matrix: FullMatrix | null = null;
   if (damping.kind === 'banded') setFactors(records, prepared, damping.floor, damping.storey, system);
-  else inverse = setFull(records, prepared, damping.ratios, system, -ground[0]);
-  return { records, inverse, scheme: { am, af, beta, gamma, h: step }, sums: new Float64Array(SUM.SUMS) };
+  else matrix = setFull(records, prepared, damping.ratios, system, -ground[0]);
+  return { records, matrix, scheme: { am, af, beta, gamma, h: step }, sums: new Float64Array(SUM.SUMS) };
 }
 
 /** Factors on M, C and K in the matrix that a step solves with. */
@@ -80,7 +80,7 @@ function setFull(
   ratios: Float64Array,
   { onMass, onDamping, onStiffness }: StepMatrix,
   uniform: number,
-): Float64Array {
+): FullMatrix {
   const { n, mass } = arrays;
   const inverse = new Float64Array(n * n);
   modes.forEach(({ shape, frequency, participation }, r) => {
@@ -93,5 +93,5 @@ function setFull(
       records[i * FIELD.STRIDE + FIELD.DAMPING_RATE] += rate * participation * uniform * mass[i] * shape[i];
     }
   });
-  return inverse;
+  return { inverse, side: new Float64Array(n) };
 }
