@@ -14,6 +14,9 @@ export interface DialogProps {
   readonly children: ReactNode;
 }
 
+const FIRST_STOP = '.dialog-body :is(input, select, textarea, button):not(:disabled):not([tabindex="-1"])';
+const MAIN_BUTTON = '.dialog-foot button:last-of-type:not(:disabled)';
+
 /** A modal dialog: shown while it is mounted. The browser's own element traps the focus; it goes back to where it came from. */
 export function Dialog({ title, onClose, width = 560, foot, sticky = false, children }: DialogProps) {
   const element = useRef<HTMLDialogElement>(null);
@@ -21,7 +24,12 @@ export function Dialog({ title, onClose, width = 560, foot, sticky = false, chil
   useEffect(() => {
     const dialog = element.current;
     const before = document.activeElement;
-    if (dialog !== null && !dialog.open) dialog.showModal();
+    if (dialog !== null && !dialog.open) {
+      dialog.showModal();
+      // The browser would take the cross, which stands first: start at the first field, else at the main button.
+      const first = dialog.querySelector<HTMLElement>(FIRST_STOP) ?? dialog.querySelector<HTMLElement>(MAIN_BUTTON);
+      first?.focus();
+    }
     return () => {
       dialog?.close();
       if (before instanceof HTMLElement || before instanceof SVGElement) before.focus();

@@ -87,6 +87,21 @@ export function stepLabel(project: Project, path: string, value: Typed, system: 
   return `${fieldOf(path).label(project)} ${say(readAt(project, path))} to ${say(value)}`;
 }
 
+/** A fault as one sentence with its place: "storey 3, height is not typed yet". */
+export function faultSentence(project: Project, { where, message }: Fault): string {
+  return `${placeWords(project, where)} ${message}`;
+}
+
+function placeWords(project: Project, where: string): string {
+  try {
+    const label = fieldOf(where).label(project);
+    return label.charAt(0).toLowerCase() + label.slice(1);
+  } catch {
+    // A place that nobody types into, such as the frame as a whole.
+    return where;
+  }
+}
+
 /** Gives up the edit of a field. */
 export function giveUpField(path: string): void {
   if (documentStore.getState().draft?.path === path) setDraft(null);

@@ -39,7 +39,8 @@ export function CellLine({ project, system, cell, faults, onEdit }: CellLineProp
   const text = !exists ? '' : (draft?.text ?? shownText(project, path, system));
   const fault = faults.find((entry) => entry.where === path);
   const readings = exists ? readingsOf(path, text, system) : [];
-  const wrong = exists && readings.length === 0 ? wordsOf(project, path, system, fault) : null;
+  const typed = exists && (draft !== null || readAt(project, path) !== null);
+  const wrong = typed && readings.length === 0 && text !== '' ? wordsOf(project, path, system, fault) : null;
   const unit = exists && quantity !== null ? unitOf(quantity, system) : unitOfColumn(column, system);
   return (
     <>

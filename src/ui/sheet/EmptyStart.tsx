@@ -24,7 +24,7 @@ export function EmptyStart({ system, onOpen, onExample, width }: EmptyStartProps
   const fits = countFits && reading.kind === 'value' && reading.value > 0;
   const make = () => {
     if (!fits || reading.kind !== 'value') return;
-    edit(`make ${storeys} equal storeys`, (project) => makeEqualStoreys(project, storeys, reading.value));
+    edit(`${storeys} equal storeys made`, (project) => makeEqualStoreys(project, storeys, reading.value));
     choose(storeys - 1, 'mass');
   };
   return (

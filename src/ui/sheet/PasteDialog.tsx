@@ -75,7 +75,7 @@ export function PasteDialog({ text, cell, columns, system, onClose }: PasteDialo
 
 function take(plan: Extract<PastePlan, { kind: 'ready' }>, column: string): void {
   const where = plan.low === plan.high ? `storey ${plan.high}` : `storeys ${plan.low} to ${plan.high}`;
-  edit(`paste into ${where}`, plan.apply);
+  edit(`${where} pasted`, plan.apply);
   setSession({
     selection: { storey: plan.high - 1, column, anchorStorey: plan.low - 1, anchorColumn: column },
     storey: plan.high - 1,

@@ -1,8 +1,11 @@
 import { useEffect, useState } from 'react';
 import { verdictOf } from '../../core/checks/verdict.ts';
+import type { Fault } from '../../core/fault.ts';
+import type { Project } from '../../document/project.ts';
 import { edit, useDocument } from '../../state/document.ts';
-import { type ResultsState, runNow, stop, useResults } from '../../state/results.ts';
+import { runNow, stop, useResults } from '../../state/results.ts';
 import { Button } from '../controls/Button.tsx';
+import { faultSentence } from '../controls/field.ts';
 import { CautionMark, Icon } from '../controls/Icon.tsx';
 
 export interface VerdictProps {
@@ -21,25 +24,8 @@ export function Verdict({ letters }: VerdictProps) {
 
   if (status === 'running' && slow) return <Running />;
   if (status === 'empty' || answers === null) {
-    const missing = [
-      project.frame.storeys.length === 0 ? 'a storey' : '',
-      project.motions.some((motion) => motion.used) ? '' : 'a record',
-    ]
-      .filter((word) => word !== '')
-      .join(' and ');
-    const many = faults.length > 1 ? `; ${faults.length} things to settle` : '';
     return (
-      <Line
-        kind="quiet-verdict"
-        headline="Nothing to check yet"
-        detail={
-          missing !== ''
-            ? `${missing} ${missing.includes(' and ') ? 'are' : 'is'} missing`
-            : faults[0] === undefined
-              ? ''
-              : `${faults[0].message}${many}`
-        }
-      />
+      <Line kind="quiet-verdict" headline="Nothing to check yet" detail={missing(project) ?? why(project, faults)} />
     );
   }
   if (status === 'stale') {
@@ -47,7 +33,7 @@ export function Verdict({ letters }: VerdictProps) {
       <Line
         kind="old"
         headline={`Out of date${changed === null ? '' : `: ${inSentence(changed)}`}`}
-        detail={waits ? '' : why(faults)}
+        detail={waits ? '' : why(project, faults)}
       >
         {waits && (
           <Button kind="primary" size="medium" onClick={runNow}>
@@ -89,15 +75,24 @@ export function Verdict({ letters }: VerdictProps) {
   );
 }
 
+/** What an answer still needs before anything can be wrong with it; null: nothing. */
+function missing({ frame, motions }: Project): string | null {
+  const storey = frame.storeys.length === 0;
+  const record = !motions.some((motion) => motion.used);
+  if (storey && record) return 'a storey and a record are missing';
+  if (storey) return 'a storey is missing';
+  return record ? 'a record is missing' : null;
+}
+
 /** A label as it stands inside a sentence. */
 function inSentence(label: string): string {
   return label.charAt(0).toLowerCase() + label.slice(1);
 }
 
-function why(faults: ResultsState['faults']): string {
+function why(project: Project, faults: readonly Fault[]): string {
   const first = faults[0];
   if (first === undefined) return 'the answers are those of the last run';
-  return `${first.message}${faults.length > 1 ? `; ${faults.length} things to settle` : ''}`;
+  return `${faultSentence(project, first)}${faults.length > 1 ? `; ${faults.length} things to settle` : ''}`;
 }
 
 interface LineProps {
@@ -161,7 +156,7 @@ function Running() {
 }
 
 function leaveOut(name: string): void {
-  edit(`leave out ${name}`, (project) => ({
+  edit(`${name} left out`, (project) => ({
     ...project,
     motions: project.motions.map((motion) =>
       motion.name === name ? { ...motion, used: false, reason: motion.reason ?? 'did not run to its end' } : motion,
@@ -170,7 +165,7 @@ function leaveOut(name: string): void {
 }
 
 function bringBack(name: string): void {
-  edit(`bring back ${name}`, (project) => ({
+  edit(`${name} brought back`, (project) => ({
     ...project,
     motions: project.motions.map((motion) => {
       if (motion.name !== name) return motion;

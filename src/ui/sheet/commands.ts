@@ -29,14 +29,14 @@ export function add(storey: number, where: 'above' | 'below'): void {
     return;
   }
   const at = before === 0 ? 0 : where === 'above' ? storey + 1 : storey;
-  edit(`add storey ${at + 1}`, (project) => addStorey(project, at, before === 0 ? undefined : storey));
+  edit(`storey ${at + 1} added`, (project) => addStorey(project, at, before === 0 ? undefined : storey));
   choose(at, column());
 }
 
 export function remove(storey: number): void {
   commitOpenDraft();
   if (storey >= count()) return;
-  edit(`remove storey ${storey + 1}`, (project) => removeStorey(project, storey));
+  edit(`storey ${storey + 1} removed`, (project) => removeStorey(project, storey));
   const left = count();
   if (left > 0) choose(Math.min(storey, left - 1), column());
   else setSession({ selection: null, storey: null });
@@ -47,7 +47,7 @@ export function move(storey: number, up: boolean): void {
   commitOpenDraft();
   const to = storey + (up ? 1 : -1);
   if (to < 0 || to >= count()) return;
-  edit(`move storey ${storey + 1} ${up ? 'up' : 'down'}`, (project) => moveStorey(project, storey, to));
+  edit(`storey ${storey + 1} moved ${up ? 'up' : 'down'}`, (project) => moveStorey(project, storey, to));
   choose(to, column());
 }
 
@@ -69,7 +69,7 @@ export function chosenBlock(
 export function clear(columns: readonly string[]): void {
   const block = chosenBlock(columns);
   if (block === null) return;
-  edit(blockLabel('clear', block), (project) => {
+  edit(blockLabel(block, 'cleared'), (project) => {
     let next = project;
     for (const storey of block.storeys) {
       for (const key of block.columns) {
@@ -98,7 +98,7 @@ export function fillDown(columns: readonly string[]): void {
 export function fill(columns: readonly string[], from: number, to: readonly number[]): void {
   if (to.length === 0) return;
   const storeys = [...to].sort((a, b) => b - a);
-  edit(blockLabel('fill', { storeys, columns }), (project) => copied(project, columns, from, storeys));
+  edit(blockLabel({ storeys }, 'filled'), (project) => copied(project, columns, from, storeys));
 }
 
 function copied(project: Project, columns: readonly string[], from: number, to: readonly number[]): Project {
@@ -111,17 +111,13 @@ function copied(project: Project, columns: readonly string[], from: number, to: 
   return next;
 }
 
-function blockLabel(
-  verb: string,
-  block: { readonly storeys: readonly number[]; readonly columns: readonly string[] },
-): string {
-  const high = (block.storeys[0] ?? 0) + 1;
-  const low = (block.storeys.at(-1) ?? 0) + 1;
-  const where = high === low ? `storey ${high}` : `storeys ${low} to ${high}`;
-  return `${verb} ${where}`;
+function blockLabel({ storeys }: { readonly storeys: readonly number[] }, done: string): string {
+  const high = (storeys[0] ?? 0) + 1;
+  const low = (storeys.at(-1) ?? 0) + 1;
+  return high === low ? `storey ${high} ${done}` : `storeys ${low} to ${high} ${done}`;
 }
 
 /** The first storey of an empty sheet, with nothing typed yet. */
 export function ensureStorey(): void {
-  if (count() === 0) edit('add storey 1', (project) => addStorey(project, 0));
+  if (count() === 0) edit('storey 1 added', (project) => addStorey(project, 0));
 }

@@ -8,7 +8,7 @@ export function TitleBlock() {
   const fault = useDocument((state) => state.saveFault);
   const [typed, setTyped] = useState<string | null>(null);
   const commit = () => {
-    if (typed !== null && typed !== title) edit('title', (project) => ({ ...project, title: typed }));
+    if (typed !== null && typed !== title) edit('title changed', (project) => ({ ...project, title: typed }));
     setTyped(null);
   };
   return (

@@ -26,14 +26,14 @@ export function TopBar({ onOpen, onSave }: TopBarProps) {
       <div className="tools">
         <IconButton
           icon="undo"
-          label={undoes === null ? 'Undo' : `Undo ${undoes}`}
+          label={undoes === null ? 'Undo' : `Undo: ${undoes}`}
           keys="Ctrl+Z"
           disabled={undoes === null}
           onClick={undo}
         />
         <IconButton
           icon="redo"
-          label={redoes === null ? 'Redo' : `Redo ${redoes}`}
+          label={redoes === null ? 'Redo' : `Redo: ${redoes}`}
           keys="Ctrl+Y"
           disabled={redoes === null}
           onClick={redo}

@@ -6,5 +6,5 @@ import { putSamples } from '../../state/samples.ts';
 export function openExample(): void {
   const { project, samples } = demoProject();
   for (const [digest, values] of samples) putSamples(digest, values);
-  replace('open the example clinic', project);
+  replace('example clinic opened', project);
 }
