@@ -8,9 +8,10 @@ import { responseOf } from '../core/report/response.ts';
 import type { ReportRun, ReportSource } from '../core/report/source.ts';
 import { tablesOf } from '../core/report/tables.ts';
 import { type Case, caseOf } from '../document/case.ts';
+import type { OpenedProject } from '../document/file.ts';
 import { safeFileNames } from './files.ts';
 import { type OutFolder, openFolder } from './outFolder.ts';
-import { type BatchProject, projectAt } from './project.ts';
+import { projectAt } from './project.ts';
 import { faultLines, misused, type Outcome, type Verb } from './verb.ts';
 
 /** Computes a project's suite; writes the response file and the tables in coherent SI, and prints the envelope. */
@@ -36,7 +37,7 @@ export const respond: Verb = {
 };
 
 /** Histories are written motion by motion and let go; the response file comes last, so that it stands for a whole answer. */
-function answer(file: string, read: BatchProject, asked: Case, folder: OutFolder, histories: boolean): Outcome {
+function answer(file: string, read: OpenedProject, asked: Case, folder: OutFolder, histories: boolean): Outcome {
   const names = safeFileNames(asked.motions.map(({ name }) => name));
   const messages: string[] = [];
   const runs = asked.motions.map((motion, m): ReportRun => {
@@ -85,7 +86,7 @@ function stepErrorAt(prepared: PreparedFrame, runCase: RunCase, run: Run): numbe
   return half.ending === null ? stepErrorOf(run, half) : null;
 }
 
-function sourceOf(read: BatchProject, asked: Case, runs: readonly ReportRun[]): ReportSource {
+function sourceOf(read: OpenedProject, asked: Case, runs: readonly ReportRun[]): ReportSource {
   const { project } = read;
   return {
     title: project.title,
@@ -102,7 +103,7 @@ function sourceOf(read: BatchProject, asked: Case, runs: readonly ReportRun[]): 
   };
 }
 
-function samplesOf({ samples }: BatchProject, digest: string): Float64Array {
+function samplesOf({ samples }: OpenedProject, digest: string): Float64Array {
   const found = samples.get(digest);
   if (found === undefined) throw new RangeError(`samples: none of digest ${digest}, expected those of every motion`);
   return found;
