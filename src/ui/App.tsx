@@ -27,6 +27,7 @@ export function App() {
   const theme = useSession((state) => state.theme);
   const [refused, setRefused] = useState<Refused | null>(null);
   const open = () => pickProject(setRefused);
+  const save = () => saveProject(setRefused);
 
   useEffect(() => {
     if (theme === 'system') delete document.documentElement.dataset.theme;
@@ -35,14 +36,14 @@ export function App() {
   useEffect(() => followProjectDrops(setRefused), []);
   useEffect(() => {
     const onKeyDown = (event: KeyboardEvent) =>
-      appKey(event, { open: () => pickProject(setRefused), save: saveProject });
+      appKey(event, { open: () => pickProject(setRefused), save: () => saveProject(setRefused) });
     window.addEventListener('keydown', onKeyDown);
     return () => window.removeEventListener('keydown', onKeyDown);
   }, []);
 
   return (
     <div className="app">
-      <TopBar onOpen={open} onSave={saveProject} />
+      <TopBar onOpen={open} onSave={save} />
       <main>
         {screen === 'motions' ? (
           <Suspense fallback={null}>

@@ -44,7 +44,7 @@ function valueRead(path: string, text: string, system: System): Typed {
 }
 
 /** The committed number of a field, on which changes such as +10% build; null where it holds none. */
-export function committedNumber(path: string): number | null {
+function committedNumber(path: string): number | null {
   const value = readAt(documentStore.getState().project, path);
   return typeof value === 'number' ? value : null;
 }
@@ -78,7 +78,7 @@ export function commitOpenDraft(): void {
 }
 
 /** "storey 2 stiffness 455 to 470": how undo names the step. */
-export function stepLabel(project: Project, path: string, value: Typed, system: System): string {
+function stepLabel(project: Project, path: string, value: Typed, system: System): string {
   const quantity = quantityOf(path);
   const say = (entry: Typed) => {
     if (entry === null || entry === '') return 'nothing';

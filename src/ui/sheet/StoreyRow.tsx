@@ -8,13 +8,6 @@ import { cellText } from './cellText.ts';
 import { COLUMN_NAMES, cellPath, type InputColumn } from './columns.ts';
 import { add, move, remove } from './commands.ts';
 
-export interface RowAnswers {
-  readonly drift: string;
-  readonly ratio: string;
-  readonly shear: string;
-  readonly acceleration: string;
-}
-
 export interface StoreyRowProps {
   readonly storey: number;
   readonly row: Row;

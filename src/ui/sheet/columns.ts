@@ -4,7 +4,6 @@ import type { Quantity } from '../../core/units/quantities.ts';
 export type InputColumn = 'name' | 'height' | 'mass' | 'stiffness' | 'law' | 'gravity';
 /** Columns that answer: read with the arrows, never typed into. */
 export type AnswerColumn = 'drift' | 'shear' | 'acceleration';
-export type Column = InputColumn | AnswerColumn;
 
 export const COLUMN_NAMES: Readonly<Record<InputColumn, string>> = {
   name: 'name',

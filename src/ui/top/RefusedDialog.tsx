@@ -2,12 +2,12 @@ import { Button } from '../controls/Button.tsx';
 import { Dialog } from '../controls/Dialog.tsx';
 import type { Refused } from './files.ts';
 
-/** Why a project file was not opened: all of it at once. The document stays as it was. */
+/** Everything that stands in the way of opening or saving a project. The document stays as it was. */
 export function RefusedDialog({ refused, onClose }: { readonly refused: Refused; readonly onClose: () => void }) {
-  const { file, faults } = refused;
+  const { title, faults } = refused;
   return (
     <Dialog
-      title={`${file} was not opened`}
+      title={title}
       width={640}
       onClose={onClose}
       foot={
@@ -18,7 +18,7 @@ export function RefusedDialog({ refused, onClose }: { readonly refused: Refused;
     >
       <p className="quiet">
         {faults.length === 1 ? 'One thing stands' : `${faults.length} things stand`} in the way. Your document is as it
-        was, and so is the file.
+        was.
       </p>
       <ul className="fault-list">
         {faults.map((fault) => (

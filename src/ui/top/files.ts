@@ -3,9 +3,10 @@ import { openProject, projectFile } from '../../state/files.ts';
 import { setSession } from '../../state/session.ts';
 import { commitOpenDraft } from '../controls/field.ts';
 
-/** A project file that could not be opened, with everything that is wrong in it. */
+/** Why a project was not opened or not saved: all of it at once. */
 export interface Refused {
-  readonly file: string;
+  /** "clinic.swaybook.json was not opened" */
+  readonly title: string;
   readonly faults: readonly Fault[];
 }
 
@@ -24,19 +25,19 @@ export function pickProject(onRefused: (refused: Refused) => void): void {
 /** Opens a file as a project, or says everything that is wrong in it. */
 export async function openFile(file: File, onRefused: (refused: Refused) => void): Promise<void> {
   const opened = openProject(file.name, await file.text());
-  if (!opened.ok) onRefused({ file: opened.file, faults: opened.faults });
+  if (!opened.ok) onRefused({ title: `${opened.file} was not opened`, faults: opened.faults });
   else setSession({ toast: `${file.name} is open; undo brings the other one back` });
 }
 
-/** Gives the project file to the browser to keep. */
-export function saveProject(): void {
+/** Gives the project file to the browser to keep, or says why there can be none. */
+export function saveProject(onRefused: (refused: Refused) => void): void {
   commitOpenDraft();
-  const file = projectFile();
-  if (!file.ok) {
-    setSession({ toast: `not saved: ${file.faults.map(faultLine).join(' ')}` });
+  const made = projectFile();
+  if (!made.ok) {
+    onRefused({ title: 'The project was not saved', faults: made.faults });
     return;
   }
-  const { name, text } = file.value;
+  const { name, text } = made.value;
   const url = URL.createObjectURL(new Blob([text], { type: 'application/json' }));
   const link = document.createElement('a');
   link.href = url;
