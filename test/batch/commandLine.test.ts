@@ -1,4 +1,5 @@
 import { describe, expect, test } from 'vitest';
+import { command } from '../../src/batch/command.ts';
 import { readCommandLine, readNumber } from '../../src/batch/commandLine.ts';
 import { safeFileNames } from '../../src/batch/files.ts';
 import { batch, folderWith } from './support.ts';
@@ -57,16 +58,26 @@ describe('[BATCH-1] a command line at fault ends with 2 and the usage, and print
     [['size', 'p.json', '--out', 'o'], 'size: not available yet'],
     [['check', 'p.json'], 'check: not available yet'],
   ])('%j', (args, message) => {
-    const { status, stdout, lines } = batch(folderWith({}), ...args);
-    expect(status).toBe(2);
-    expect(stdout).toBe('');
-    expect(lines[0]).toContain(message);
-    expect(lines.some((line) => line.startsWith('usage: '))).toBe(true);
+    const { exit, output, messages } = command(args);
+    expect(exit).toBe(2);
+    expect(output).toBeUndefined();
+    expect(messages[0]).toContain(message);
+    expect(messages.some((line) => line.startsWith('usage: '))).toBe(true);
+  });
+
+  test('as the process tells it', () => {
+    const { status, stdout, lines } = batch(folderWith({}), 'inspect', 'a.txt', '--unit', 'gal', '--interval', '0');
+    expect({ status, stdout }).toEqual({ status: 2, stdout: '' });
+    expect(lines.slice(0, 3)).toEqual([
+      '--unit: gal is none of g, m/s2, cm/s2, mm/s2',
+      '--interval: 0 is no number of seconds above 0',
+      'usage: npm run --silent batch -- VERB …',
+    ]);
   });
 });
 
 test('help is no fault', () => {
-  const { status, lines } = batch(folderWith({}), '--help');
-  expect(status).toBe(0);
-  expect(lines[0]).toMatch(/^usage: /);
+  const { exit, messages } = command(['--help']);
+  expect(exit).toBe(0);
+  expect(messages[0]).toMatch(/^usage: /);
 });
