@@ -1,4 +1,4 @@
-import { type Fault, faultLine } from '../../core/fault.ts';
+import type { Fault } from '../../core/fault.ts';
 import { openProject, projectFile } from '../../state/files.ts';
 import { setSession } from '../../state/session.ts';
 import { commitOpenDraft } from '../controls/field.ts';
