@@ -46,18 +46,22 @@ function by(above: Names, below: Names, sign: '/' | ' '): Names {
   const out: Record<string, number> = {};
   for (const [a, size] of Object.entries(above)) {
     for (const [b, part] of Object.entries(below)) {
-      if (/^[a-z]+$/i.test(b)) out[`${a}${sign}${b}`] = sign === '/' ? size / part : size * part;
+      if (!/^[a-z]+$/i.test(b)) continue;
+      out[`${a}${sign}${b}`] = sign === '/' ? size / part : size * part;
+      if (sign === ' ') out[`${a}${b}`] = size * part;
     }
   }
   return out;
 }
 
-/** SI value of one unit of that name for a quantity, or null where the quantity has no such unit. Capitals count only where they must. */
+/** SI value of one unit of that name for a quantity, or null where the quantity has no such unit. Capitals count only in mega and milli. */
 export function unitSize(name: string, quantity: Quantity): number | null {
   const names = NAMES[quantity];
   const tidy = tidied(name);
   if (Object.hasOwn(names, tidy)) return names[tidy];
-  const alike = Object.keys(names).filter((known) => known.toLowerCase() === tidy.toLowerCase());
+  const alike = Object.keys(names).filter(
+    (known) => known.toLowerCase() === tidy.toLowerCase() && samePrefix(known, tidy),
+  );
   return alike.length === 1 ? names[alike[0]] : null;
 }
 
@@ -66,12 +70,16 @@ export function isUnit(name: string): boolean {
   return (Object.keys(NAMES) as Quantity[]).some((quantity) => unitSize(name, quantity) !== null);
 }
 
+/** Mega stays a capital and milli does not become one, unless the whole name is in capitals. */
+function samePrefix(known: string, typed: string): boolean {
+  if (known[0] === 'M') return typed[0] === 'M';
+  return known[0] !== 'm' || typed[0] === 'm' || typed === typed.toUpperCase();
+}
+
 function tidied(name: string): string {
   return name
     .replace(/\s*\/\s*/g, '/')
     .replace(/[²]|\^2/g, '2')
-    .replace(/\s*[·.]\s*|\s+/g, ' ')
-    .replace(/[’′]/g, "'")
-    .replace(/[”″]/g, '"')
+    .replace(/\s*[·.-]\s*|\s+/g, ' ')
     .trim();
 }

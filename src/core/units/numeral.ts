@@ -1,58 +1,51 @@
-/** How the decimal comma of an undecided numeral such as 1,250 is taken. */
-export type CommaReading = 'decimal' | 'thousands';
+/**
+ * How the signs of a numeral are taken. `point`: the point is the decimal sign and commas part thousands; `comma`: the other way
+ * round; both are strict. `decimal` and `thousands` take either sign as it stands, and a lone comma before exactly three
+ * digits (1,250), which leaves it open, as their name says.
+ */
+export type Signs = 'point' | 'comma' | 'decimal' | 'thousands';
 
-/** A numeral as it may be typed: figures with points, commas and spaces. */
 export type Numeral =
-  | { readonly kind: 'number'; readonly value: number; readonly undecided: boolean; readonly commaIsDecimal: boolean }
+  /** `open`: a lone comma before exactly three digits, taken as the signs asked for say. */
+  | { readonly kind: 'number'; readonly value: number; readonly open: boolean }
   | { readonly kind: 'unreadable'; readonly why: string };
 
-const SPACES = /[\s\u00a0\u2009\u202f]/g;
+/** Spaces that may part thousands: plain, no-break, thin, narrow no-break. */
+const SPACE = '[ \\u00a0\\u2009\\u202f]';
 
-/**
- * Reads figures with one point or comma as the decimal sign, or with thousands in threes. A lone comma before exactly three
- * digits (1,250) is undecided; the caller says how it is taken. 0,125 is not: nothing starts its thousands with a zero.
- */
-export function readNumeral(text: string, comma: CommaReading): Numeral {
-  const bare = text.replace(SPACES, '');
-  const match = /^(\d[\d.,]*|[.,]\d+)(?:[eE]([+-]?\d{1,3}))?$/.exec(bare);
-  if (!match) return { kind: 'unreadable', why: `"${text.trim()}" is no number` };
-  const [, figures, exponent] = match;
-  if (/ /.test(text.trim()) && !spacedInThrees(text))
-    return { kind: 'unreadable', why: `"${text.trim()}" has a space that does not part thousands` };
-  const commas = figures.split(',').length - 1;
-  const points = figures.split('.').length - 1;
-  const undecided = commas === 1 && points === 0 && /^[1-9]\d{0,2},\d{3}$/.test(figures) && exponent === undefined;
-  let tidy: string | null;
-  let commaIsDecimal = false;
-  if (undecided) {
-    commaIsDecimal = comma === 'decimal';
-    tidy = commaIsDecimal ? figures.replace(',', '.') : figures.replace(',', '');
-  } else if (commas > 0 && points > 0) {
-    commaIsDecimal = figures.lastIndexOf(',') > figures.lastIndexOf('.');
-    tidy = commaIsDecimal ? parted(figures, '.', ',') : parted(figures, ',', '.');
-  } else if (commas === 1) {
-    commaIsDecimal = true;
-    tidy = figures.replace(',', '.');
-  } else if (commas > 1) tidy = parted(figures, ',', '.');
-  else if (points > 1) tidy = parted(figures, '.', ',');
-  else tidy = figures;
-  if (tidy === null)
-    return { kind: 'unreadable', why: `"${text.trim()}" mixes points and commas in a way that is no number` };
-  const value = Number(exponent === undefined ? tidy : `${tidy}e${exponent}`);
-  if (!Number.isFinite(value)) return { kind: 'unreadable', why: `"${text.trim()}" is too large` };
-  return { kind: 'number', value, undecided, commaIsDecimal };
+/** Figures with one decimal sign at most, their whole part plain or in threes (a group of threes never begins with a zero). */
+function pattern(decimal: string, thousands: string): RegExp {
+  const whole = ['\\d+', `[1-9]\\d{0,2}(?:${thousands}\\d{3})+`, `[1-9]\\d{0,2}(?:${SPACE}\\d{3})+`].join('|');
+  return new RegExp(`^(?:(${whole})(?:${decimal}(\\d*))?|${decimal}(\\d+))$`);
 }
 
-/** Takes thousands signs out where they stand in threes, and makes the decimal sign a point; null where they do not. */
-function parted(figures: string, thousands: string, decimal: string): string | null {
-  const [whole, fraction, more] = figures.split(decimal);
-  if (more !== undefined) return null;
-  const groups = whole.split(thousands);
-  if (fraction?.includes(thousands)) return null;
-  if (groups.slice(1).some((group) => group.length !== 3) || groups[0].length < 1 || groups[0].length > 3) return null;
-  return groups.join('') + (fraction === undefined ? '' : `.${fraction}`);
+const POINT = pattern('\\.', ',');
+const COMMA = pattern(',', '\\.');
+
+/** Where in a text a numeral may stand: figures, signs, single spaces before threes, an exponent. */
+export const NUMERAL = new RegExp(`^(?:\\d|[.,]\\d)[\\d.,]*(?:${SPACE}\\d{3}(?!\\d)[\\d.,]*)*(?:[eE][+-]?\\d+)?`);
+
+/** Reads one numeral that NUMERAL has found. It has no minus, and no number is made of what does not fit. */
+export function readNumeral(text: string, signs: Signs): Numeral {
+  const [, figures, exponent = ''] = /^(.*?)([eE][+-]?\d+)?$/.exec(text.trim()) ?? [];
+  const point = signs === 'comma' ? null : matched(POINT, figures ?? '', exponent);
+  const comma = signs === 'point' ? null : matched(COMMA, figures ?? '', exponent);
+  if (point === null && comma === null) {
+    return {
+      kind: 'unreadable',
+      why: `"${text.trim()}" is no number that can be told from its points, commas and spaces`,
+    };
+  }
+  // A lone point is the decimal sign; a lone comma before three digits may be either.
+  const open = point !== null && comma !== null && point !== comma && figures?.includes(',') === true;
+  const value = open && signs === 'decimal' ? comma : (point ?? comma);
+  if (value === null || !Number.isFinite(value)) return { kind: 'unreadable', why: `"${text.trim()}" is too large` };
+  return { kind: 'number', value, open };
 }
 
-function spacedInThrees(text: string): boolean {
-  return /^\s*\d{1,3}([\s\u00a0\u2009\u202f]\d{3})+([.,]\d+)?([eE][+-]?\d+)?\s*$/.test(text);
+function matched(shape: RegExp, figures: string, exponent: string): number | null {
+  const match = shape.exec(figures);
+  if (match === null) return null;
+  const [, whole = '0', fraction, fractionAlone] = match;
+  return Number(`${whole.replace(/\D/g, '')}.${fraction ?? fractionAlone ?? ''}0${exponent}`);
 }

@@ -73,7 +73,13 @@ export function toDisplay(value: number, quantity: Quantity, system: System): nu
 }
 
 export function fromDisplay(value: number, quantity: Quantity, system: System): number {
-  return value * SHOWN[quantity][system].size;
+  return times(value, SHOWN[quantity][system].size);
+}
+
+/** value x size, by dividing where size is a whole part of one: 3300 mm are then the double that 3.3 is. */
+export function times(value: number, size: number): number {
+  const parts = 1 / size;
+  return size < 1 && Number.isInteger(parts) ? value / parts : value * size;
 }
 
 /** Thousands: narrow no-break space, from four digits; minus: U+2212. */
@@ -92,8 +98,8 @@ export function printQuantity(
 }
 
 /**
- * What stands in a cell: the shortest decimal that reads back to the same SI number, with thousands. Where the conversion
- * makes no short one (a number typed in the other system), ten significant digits.
+ * What stands in a cell: the shortest decimal that reads back to the same SI number (to the last bit or the one beside it),
+ * with thousands. Where the conversion makes no short one (a number typed in the other system), fifteen significant digits.
  */
 export function printTyped(value: number, quantity: Quantity, system: System): string {
   if (!Number.isFinite(value)) return 'none';

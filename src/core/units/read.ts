@@ -1,38 +1,39 @@
-import { isUnit, unitSize } from './names.ts';
-import { type CommaReading, readNumeral } from './numeral.ts';
-import { fromDisplay, printTyped, type Quantity, type System, unitOf } from './quantities.ts';
+import { evaluate, Unreadable } from './expression.ts';
+import type { Signs } from './numeral.ts';
+import { printTyped, type Quantity, type System, unitOf } from './quantities.ts';
 
 /** What a typed text says: the one door by which a number comes in. Values are SI. */
 export type Reading =
   | { readonly kind: 'value'; readonly value: number }
   | { readonly kind: 'empty' }
-  /** A lone comma before three digits: both readings, the decimal one first. */
+  /** It can be meant in two ways, such as a lone comma before three digits: both, the decimal reading first. */
   | { readonly kind: 'ambiguous'; readonly readings: readonly { readonly value: number; readonly shown: string }[] }
   | { readonly kind: 'unreadable'; readonly why: string; readonly mend: string };
 
+/** No number and no sum that somebody types is longer. */
+const LONGEST = 200;
+
+/** Ratios of codes are written 1/N from here on (H/550, H/50); below, 1/2 in a percent field is half a percent. */
+const SHARE_FROM = 50;
+
 /**
- * Reads a cell: figures with spaces, one point or comma as the decimal sign; a unit (`250 kN`, `3600 mm`, `12 ft 6 in`); sums
- * (`455*1.1`, `(2+3)*4`); changes of the current value (`+10%`, `-5%`, `*1.1`, `/2`). A bare number is in the unit shown; a
- * share such as 1/550 in a percent field is the ratio that codes write so.
+ * Reads a cell: figures with spaces, one point or comma as the decimal sign; a unit (`250 kN`, `3600 mm`, `12 ft 6 in`, `12'-6"`);
+ * sums (`455*1.1`, `(2+3)*4`); changes of the current value: with % behind a sign (`+10%`, `-5%`) or with * or / in front
+ * (`*1.1`, `/2`). `+10` and `-5` are numbers. A bare number is in the unit shown; 1/550 in a percent field is the ratio that
+ * codes write so.
  *
  * @param current  SI value that a change refers to; null where there is none
  */
 export function readQuantity(text: string, quantity: Quantity, system: System, current: number | null = null): Reading {
   if (text.trim() === '') return { kind: 'empty' };
-  const asDecimal = readAs(text, quantity, system, current, 'decimal');
-  if (!asDecimal.undecided) return asDecimal.reading;
-  const asThousands = readAs(text, quantity, system, current, 'thousands');
-  const readings = [asDecimal.reading, asThousands.reading].flatMap((reading) =>
-    reading.kind === 'value'
-      ? [
-          {
-            value: reading.value,
-            shown: `${printTyped(reading.value, quantity, system)} ${unitOf(quantity, system)}`.trim(),
-          },
-        ]
-      : [],
-  );
-  return readings.length === 2 ? { kind: 'ambiguous', readings } : asDecimal.reading;
+  try {
+    const values = meanings(tidied(text), quantity, system, current, ['decimal', 'thousands']);
+    return values.length === 1
+      ? { kind: 'value', value: values[0] }
+      : { kind: 'ambiguous', readings: values.map((value) => ({ value, shown: shownOf(value, quantity, system) })) };
+  } catch (error) {
+    return unreadable(error);
+  }
 }
 
 /** A column read as one: values (null where a cell is empty), or what stops it. */
@@ -44,256 +45,157 @@ export type ColumnReading =
       readonly decimal: readonly (number | null)[];
       readonly thousands: readonly (number | null)[];
     }
-  | {
-      readonly kind: 'faults';
-      readonly faults: readonly {
-        readonly row: number;
-        readonly text: string;
-        readonly why: string;
-        readonly mend: string;
-      }[];
-    };
+  | { readonly kind: 'faults'; readonly faults: readonly ColumnFault[] };
 
-/** Reads a pasted column: one cell whose comma is plain (1,25 or 1,250.5) decides for all that leave it open. */
+export interface ColumnFault {
+  /** From 0, at the top of the column. */
+  readonly row: number;
+  readonly text: string;
+  readonly why: string;
+  readonly mend: string;
+}
+
+/**
+ * Reads a pasted column. Its cells decide together which sign is the decimal one: what only one convention can read (1,25 or
+ * 1,250.5 or 1.250.000) settles the others. Where both can and they differ (1,250 and no other sign), both come back. A
+ * change (+10%) has nothing to change here and is a fault.
+ */
 export function readColumn(texts: readonly string[], quantity: Quantity, system: System): ColumnReading {
-  const comma = decidedComma(texts);
-  const faults: { row: number; text: string; why: string; mend: string }[] = [];
-  let undecided = false;
-  const values = (as: CommaReading) =>
-    texts.map((text, row) => {
-      if (text.trim() === '') return null;
-      const { reading, undecided: open } = readAs(text, quantity, system, null, as);
-      undecided ||= open;
-      if (reading.kind === 'value') return reading.value;
-      if (reading.kind === 'unreadable' && !faults.some((fault) => fault.row === row))
-        faults.push({ row, text, why: reading.why, mend: reading.mend });
-      return null;
-    });
-  const first = values(comma ?? 'decimal');
-  if (faults.length > 0) return { kind: 'faults', faults };
-  if (undecided && comma === null) return { kind: 'undecided', decimal: first, thousands: values('thousands') };
-  return { kind: 'values', values: first };
-}
-
-/** What the cells of a column that are plain say of the comma; null where none does, or they disagree. */
-function decidedComma(texts: readonly string[]): CommaReading | null {
-  let found: CommaReading | null = null;
-  for (const text of texts) {
-    for (const figures of text.match(/[\d.,]*[.,][\d.,]*/g) ?? []) {
-      const numeral = readNumeral(figures, 'decimal');
-      if (numeral.kind !== 'number' || numeral.undecided) continue;
-      const says: CommaReading = numeral.commaIsDecimal ? 'decimal' : 'thousands';
-      if (found !== null && found !== says) return null;
-      found = says;
+  const as = (signs: Signs) => columnAs(texts, quantity, system, signs);
+  const [point, comma] = [as('point'), as('comma')];
+  if (point.faults.length === 0 && comma.faults.length === 0) {
+    if (sameValues(point.values, comma.values) || !texts.some((text) => text.includes(','))) {
+      return { kind: 'values', values: point.values };
     }
+    return { kind: 'undecided', decimal: comma.values, thousands: point.values };
   }
-  return found;
+  if (point.faults.length === 0) return { kind: 'values', values: point.values };
+  if (comma.faults.length === 0) return settled(texts, comma.values, as('decimal').values);
+  // No one convention fits all cells: each stands for itself.
+  const decimal = as('decimal');
+  if (decimal.faults.length > 0) return { kind: 'faults', faults: decimal.faults };
+  const thousands = as('thousands');
+  return sameValues(decimal.values, thousands.values)
+    ? { kind: 'values', values: decimal.values }
+    : { kind: 'undecided', decimal: decimal.values, thousands: thousands.values };
 }
 
-interface Attempt {
-  readonly reading: Reading;
-  readonly undecided: boolean;
+/**
+ * The values where the comma is the decimal sign. A lone point before three digits would then part thousands, though by itself it
+ * is a decimal point: unless a cell shows the point at that work (1.250,5), such a cell is refused rather than guessed.
+ */
+function settled(
+  texts: readonly string[],
+  values: readonly (number | null)[],
+  alone: readonly (number | null)[],
+): ColumnReading {
+  if (texts.some((text) => /\d\.\d{3}[.,]\d/.test(text))) return { kind: 'values', values };
+  const faults = texts.flatMap((text, row): ColumnFault[] =>
+    values[row] === alone[row]
+      ? []
+      : [
+          {
+            row,
+            text,
+            why: `in a column whose decimal sign is the comma, "${text}" can be read in two ways`,
+            mend: 'Write its decimal sign as a comma, or its thousands without a point',
+          },
+        ],
+  );
+  return faults.length > 0 ? { kind: 'faults', faults } : { kind: 'values', values };
 }
 
-function readAs(
+function columnAs(
+  texts: readonly string[],
+  quantity: Quantity,
+  system: System,
+  signs: Signs,
+): { readonly values: readonly (number | null)[]; readonly faults: readonly ColumnFault[] } {
+  const faults: ColumnFault[] = [];
+  const values = texts.map((text, row) => {
+    if (text.trim() === '') return null;
+    try {
+      const [value, other] = meanings(tidied(text), quantity, system, null, [signs]);
+      if (other === undefined) return value;
+      const why = `is ${shownOf(value, quantity, system)} or ${shownOf(other, quantity, system)}`;
+      throw new Unreadable(why, 'Write it as one plain number');
+    } catch (error) {
+      const { why, mend } = unreadable(error);
+      faults.push({ row, text, why, mend });
+      return null;
+    }
+  });
+  return { values, faults };
+}
+
+function sameValues(a: readonly (number | null)[], b: readonly (number | null)[]): boolean {
+  return a.every((value, row) => value === b[row]);
+}
+
+/** Every value that a text can mean, at least one and no two alike. @throws Unreadable */
+function meanings(
   text: string,
   quantity: Quantity,
   system: System,
   current: number | null,
-  comma: CommaReading,
-): Attempt {
-  const source = text
+  ways: readonly Signs[],
+): readonly number[] {
+  const found: number[] = [];
+  for (const signs of ways) {
+    const { value, open } = valueIn(text, quantity, system, current, signs);
+    found.push(value, ...otherMeanings(text, quantity, system, signs));
+    if (!open) break;
+  }
+  return found.filter((value, i) => found.indexOf(value) === i);
+}
+
+function valueIn(text: string, quantity: Quantity, system: System, current: number | null, signs: Signs) {
+  const change = /^([+-])([^-+*/()%]+)%$/.exec(text);
+  if (change !== null || /^[*/]/.test(text)) {
+    if (current === null) throw new Unreadable('a change needs a value to start from', 'Type the value itself');
+    if (change === null) return evaluate(text, quantity, system, signs, current);
+    const amount = evaluate(change[2], 'ratio', system, signs);
+    const share = change[1] === '-' ? -amount.value : amount.value;
+    return { value: (current * (100 + share)) / 100, open: amount.open };
+  }
+  const share = quantity === 'percent' ? /^1\s*\/\s*(\d+)$/.exec(text) : null;
+  if (share !== null && Number(share[1]) >= SHARE_FROM) return { value: 1 / Number(share[1]), open: false };
+  return evaluate(text, quantity, system, signs);
+}
+
+/** Second meanings beside that of the commas: a drift written 2/400, and feet less inches written with a dash. */
+function otherMeanings(text: string, quantity: Quantity, system: System, signs: Signs): readonly number[] {
+  const share = quantity === 'percent' ? /^(\d+)\s*\/\s*(\d+)$/.exec(text) : null;
+  if (share !== null && share[1] !== '1' && Number(share[2]) >= SHARE_FROM)
+    return [Number(share[1]) / Number(share[2])];
+  if (/ft\s*-\s*[\d.,]+\s*in$/i.test(text)) {
+    return [evaluate(text.replace(/(ft)\s*-/i, '$1 '), quantity, system, signs).value];
+  }
+  return [];
+}
+
+/** One sign each for what keyboards, spreadsheets and drawings write differently. @throws Unreadable */
+function tidied(text: string): string {
+  if (text.length > LONGEST) throw new Unreadable(`the text is ${text.length} signs long`, 'Type a number');
+  const tidy = text
     .trim()
     .replace(/[\u2212\u2013]/g, '-')
     .replace(/[×⋅]/g, '*')
-    .replace(/÷/g, '/');
-  const parser = new Parser(source, quantity, system, comma);
-  try {
-    return { reading: { kind: 'value', value: parser.whole(current) }, undecided: parser.undecided };
-  } catch (error) {
-    if (!(error instanceof Unreadable)) throw error;
-    return { reading: { kind: 'unreadable', why: error.why, mend: error.mend }, undecided: false };
+    .replace(/÷/g, '/')
+    .replace(/[’′ʼ]/g, "'")
+    .replace(/[”″]/g, '"');
+  if (/\d'\d{3}(?!\d|\s*(?:"|in))/.test(tidy)) {
+    throw new Unreadable('an apostrophe parts the thousands', 'Leave it out, or put a space there');
   }
+  // 12'-6" is how drawings write 12 feet 6 inches: no minus.
+  return tidy.replace(/'\s*-\s*(?=[\d.,]+\s*")/g, "' ");
 }
 
-class Unreadable extends Error {
-  readonly why: string;
-  readonly mend: string;
-  constructor(why: string, mend: string) {
-    super(why);
-    this.why = why;
-    this.mend = mend;
-  }
+function shownOf(value: number, quantity: Quantity, system: System): string {
+  return `${printTyped(value, quantity, system)} ${unitOf(quantity, system)}`.trim();
 }
 
-/** A value on its way: plain figures still without a unit, or SI. */
-interface Part {
-  readonly value: number;
-  readonly si: boolean;
-}
-
-/** Sums by recursive descent; nothing is ever evaluated as code. */
-class Parser {
-  undecided = false;
-  private at = 0;
-  private depth = 0;
-  private readonly source: string;
-  private readonly quantity: Quantity;
-  private readonly system: System;
-  private readonly comma: CommaReading;
-
-  constructor(source: string, quantity: Quantity, system: System, comma: CommaReading) {
-    this.source = source;
-    this.quantity = quantity;
-    this.system = system;
-    this.comma = comma;
-  }
-
-  whole(current: number | null): number {
-    const change = /^([+-])\s*(.+?)\s*%$/.exec(this.source);
-    const factor = /^([*/])\s*(.+)$/.exec(this.source);
-    if (change || factor) {
-      if (current === null) throw this.fail('a change needs a value to start from', 'Type the value itself');
-      const [, sign, rest] = (change ?? factor) as RegExpExecArray;
-      const inner = new Parser(rest, 'ratio', this.system, this.comma);
-      const amount = inner.finish();
-      this.undecided ||= inner.undecided;
-      if (amount.si) throw this.fail(`"${rest}" has a unit`, 'Type a plain factor');
-      const share = sign === '-' ? -amount.value : amount.value;
-      const changed = change
-        ? (current * (100 + share)) / 100
-        : sign === '*'
-          ? current * amount.value
-          : current / amount.value;
-      return this.finite(changed);
-    }
-    if (this.quantity === 'percent' && /^1\s*\/\s*\d+(\.\d+)?$/.test(this.source)) {
-      return this.finite(1 / Number(this.source.split('/')[1]));
-    }
-    return this.finite(this.toSi(this.finish()).value);
-  }
-
-  private finish(): Part {
-    const part = this.sum();
-    this.blank();
-    if (this.at < this.source.length)
-      throw this.fail(`"${this.source.slice(this.at)}" is not understood`, `Type a number in ${this.unit()}`);
-    return part;
-  }
-
-  private sum(): Part {
-    let left = this.term();
-    for (;;) {
-      this.blank();
-      const sign = this.source[this.at];
-      if (sign !== '+' && sign !== '-') return left;
-      this.at++;
-      const right = this.term();
-      const [a, b] = left.si === right.si ? [left, right] : [this.toSi(left), this.toSi(right)];
-      left = { value: sign === '+' ? a.value + b.value : a.value - b.value, si: a.si };
-    }
-  }
-
-  private term(): Part {
-    let left = this.factor();
-    for (;;) {
-      this.blank();
-      const sign = this.source[this.at];
-      if (sign !== '*' && sign !== '/') return left;
-      this.at++;
-      const right = this.factor();
-      if (right.si && (left.si || sign === '/'))
-        throw this.fail('two values with units cannot be multiplied or divided', 'Leave the unit off the factor');
-      left = { value: sign === '*' ? left.value * right.value : left.value / right.value, si: left.si || right.si };
-    }
-  }
-
-  private factor(): Part {
-    this.blank();
-    const sign = this.source[this.at];
-    if (++this.depth > 200) throw this.fail('the sum is nested too deeply', 'Type a simpler sum');
-    try {
-      if (sign === '-' || sign === '+') {
-        this.at++;
-        const part = this.factor();
-        return sign === '-' ? { ...part, value: -part.value } : part;
-      }
-      if (sign === '(') {
-        this.at++;
-        const part = this.sum();
-        this.blank();
-        if (this.source[this.at] !== ')') throw this.fail('a bracket is not closed', 'Close the bracket');
-        this.at++;
-        return part;
-      }
-      return this.measure();
-    } finally {
-      this.depth--;
-    }
-  }
-
-  /** A number with its unit, and further ones that follow it directly (12 ft 6 in). */
-  private measure(): Part {
-    let total = this.numberWithUnit();
-    for (;;) {
-      this.blank();
-      if (!total.si || !/[\d.,]/.test(this.source[this.at] ?? '')) return total;
-      const more = this.numberWithUnit();
-      if (!more.si)
-        throw this.fail('a number without a unit follows one that has one', 'Give both a unit, or one number only');
-      total = { value: total.value + more.value, si: true };
-    }
-  }
-
-  private numberWithUnit(): Part {
-    const figures = /^(?:\d|[.,]\d)[\d.,]*(?:[\s\u00a0\u2009\u202f]+\d{3}(?!\d)[\d.,]*)*(?:[eE][+-]?\d+)?/.exec(
-      this.source.slice(this.at),
-    );
-    if (!figures) {
-      const rest = this.source.slice(this.at);
-      throw this.fail(
-        rest === '' ? 'a number is missing' : `"${rest}" is no number`,
-        `Type a number in ${this.unit()}`,
-      );
-    }
-    this.at += figures[0].length;
-    const numeral = readNumeral(figures[0], this.comma);
-    if (numeral.kind === 'unreadable') throw this.fail(numeral.why, 'Use one point or comma as the decimal sign');
-    this.undecided ||= numeral.undecided;
-    this.blank();
-    const name =
-      /^(?:[A-Za-z]+|%|['"’”′″])(?:\s*\/\s*[A-Za-z]+(?:2|²|\^2)?|\s*[·.]\s*[A-Za-z]+|\s+(?:m|mm|cm|ft|in)(?![A-Za-z]))?/.exec(
-        this.source.slice(this.at),
-      );
-    if (!name) return { value: numeral.value, si: false };
-    const size = unitSize(name[0], this.quantity);
-    if (size === null) {
-      const why = isUnit(name[0]) ? `${name[0]} is a unit of another kind` : `"${name[0]}" is no unit known here`;
-      throw this.fail(why, `Type the value in ${this.unit()}`);
-    }
-    this.at += name[0].length;
-    return { value: numeral.value * size, si: true };
-  }
-
-  private toSi(part: Part): Part {
-    return part.si ? part : { value: fromDisplay(part.value, this.quantity, this.system), si: true };
-  }
-
-  private finite(value: number): number {
-    if (!Number.isFinite(value))
-      throw this.fail('the result is not a finite number', `Type a number in ${this.unit()}`);
-    return value;
-  }
-
-  private unit(): string {
-    return unitOf(this.quantity, this.system) || 'plain figures';
-  }
-
-  private blank(): void {
-    while (/[\s\u00a0\u2009\u202f]/.test(this.source[this.at] ?? '')) this.at++;
-  }
-
-  private fail(why: string, mend: string): Unreadable {
-    return new Unreadable(why, mend);
-  }
+function unreadable(error: unknown): Extract<Reading, { kind: 'unreadable' }> {
+  if (!(error instanceof Unreadable)) throw error;
+  return { kind: 'unreadable', why: error.why, mend: error.mend };
 }

@@ -56,6 +56,20 @@ describe('[UNI-1] a typed text', () => {
     ['.5', 'ratio', 'si', 0.5],
     ['455*1.1', 'ratio', 'si', 500.50000000000006],
     ['(2+3)*4 - 1', 'ratio', 'si', 19],
+    ['1.250.000', 'ratio', 'si', 1250000],
+    ['1 250,300', 'ratio', 'si', 1250.3],
+    ['1250,300', 'ratio', 'si', 1250.3],
+    ['+10', 'ratio', 'si', 10],
+    ['-5', 'ratio', 'si', -5],
+    ['12\'-6"', 'length', 'si', 12.5 * 0.3048],
+    ['12’–6”', 'length', 'si', 12.5 * 0.3048],
+    ['2*12\'-6"', 'length', 'si', 25 * 0.3048],
+    ['20 kip-ft', 'moment', 'si', 20 * 4448.2216152605 * 0.3048],
+    ['20 kNm', 'moment', 'si', 20e3],
+    ['3600 MM', 'length', 'si', 3.6],
+    ['2 MN', 'force', 'si', 2e6],
+    ['0.7', 'percent', 'si', 0.007],
+    ['1/2', 'percent', 'si', 0.005],
     ['−3', 'ratio', 'si', -3],
     ['3 m + 600 mm', 'length', 'si', 3.6],
     ['3 + 600 mm', 'length', 'si', 3.6],
@@ -73,6 +87,9 @@ describe('[UNI-1] a typed text', () => {
     ['-5 %', 95],
     ['*1.1', 110.00000000000001],
     ['/2', 50],
+    ['*1.1+5', 115.00000000000001],
+    ['/2 - 10', 40],
+    ['*(1+1)', 200],
   ])('%s changes the current value', (text, expected) => expect(value(text, 'ratio', 'si', 100)).toBe(expected));
 
   test('a change without a value, a unit of another kind, words and traps are unreadable, each with a mend', () => {
@@ -93,6 +110,17 @@ describe('[UNI-1] a typed text', () => {
       ['0x10', 'ratio'],
       ['2 m * 3 m', 'length'],
       ['alert(1)', 'ratio'],
+      ['()', 'ratio'],
+      ['1,2,3', 'ratio'],
+      ['1.5 250', 'ratio'],
+      ['1250 000', 'ratio'],
+      ['1\u202f25', 'ratio'],
+      ['1\t250', 'ratio'],
+      ['0 125', 'ratio'],
+      ['2 mN', 'force'],
+      ['455+10%', 'ratio'],
+      ["12'600", 'length'],
+      ['1'.repeat(201), 'ratio'],
     ] as const) {
       const reading = readQuantity(text, quantity, 'si');
       expect(reading.kind, text).toBe('unreadable');
@@ -114,6 +142,31 @@ describe('[UNI-1] a typed text', () => {
     });
     expect(readQuantity('1,250 kN', 'force', 'si').kind).toBe('ambiguous');
     expect(readQuantity('1,2500', 'length', 'si').kind).toBe('value');
+  });
+
+  test('a change is one percentage behind a sign, or a factor in front; nothing else is taken for one', () => {
+    expect(value('-5+10%', 'ratio', 'si', 100)).toBe('unreadable');
+    expect(value('+(5)%', 'ratio', 'si', 100)).toBe('unreadable');
+    expect(value('*1.1', 'ratio', 'si', null)).toBe('unreadable');
+    expect(readQuantity('+1,250%', 'ratio', 'si', 100).kind).toBe('ambiguous');
+  });
+
+  test('thousands parted by an apostrophe are refused with the mend', () => {
+    const reading = readQuantity('7’250', 'weight', 'si');
+    expect(reading).toEqual({
+      kind: 'unreadable',
+      why: 'an apostrophe parts the thousands',
+      mend: 'Leave it out, or put a space there',
+    });
+  });
+
+  test('feet and inches with a dash, and a drift written as a share, may mean two things', () => {
+    const shown = (text: string, quantity: Quantity) => {
+      const reading = readQuantity(text, quantity, 'us');
+      return reading.kind === 'ambiguous' ? reading.readings.map((entry) => entry.shown) : reading.kind;
+    };
+    expect(shown('12 ft - 6 in', 'length')).toEqual(['11.5 ft', '12.5 ft']);
+    expect(shown('2/400', 'percent')).toEqual(['0.005 %', '0.5 %']);
   });
 
   test('reading never throws and never gives a number that is not finite', () => {
@@ -141,6 +194,41 @@ describe('[UNI-2] a pasted column', () => {
     expect(readColumn(['1,250', '3,5'], 'length', 'si')).toEqual({ kind: 'values', values: [1.25, 3.5] });
     expect(readColumn(['1,250', '2,000.5'], 'length', 'si')).toEqual({ kind: 'values', values: [1250, 2000.5] });
   });
+  test.each<[string, readonly string[], readonly number[]]>([
+    ['a point that is the decimal sign', ['1.5', '1,250'], [1.5, 1250]],
+    ['two points', ['1.250.000', '1,250'], [1250000, 1.25]],
+    ['a point before the comma', ['1.250,5', '3.600'], [1250.5, 3600]],
+    ['points alone are decimal signs', ['3.600', '4.200'], [3.6, 4.2]],
+    ['each plain cell for itself', ['1,25', '1.5'], [1.25, 1.5]],
+  ])('%s', (_, texts, values) => expect(readColumn(texts, 'ratio', 'si')).toEqual({ kind: 'values', values }));
+  test('a cell that the rest leaves open is never guessed', () => {
+    const reading = readColumn(['3,60', '1.250'], 'ratio', 'si');
+    expect(reading.kind === 'faults' && reading.faults.map(({ row, text }) => [row, text])).toEqual([[1, '1.250']]);
+    expect(readColumn(['1,25', '1.5', '1,250'], 'ratio', 'si')).toEqual({
+      kind: 'undecided',
+      decimal: [1.25, 1.5, 1.25],
+      thousands: [1.25, 1.5, 1250],
+    });
+    expect(readColumn(['10 ft - 6 in', '12'], 'length', 'us').kind).toBe('faults');
+    expect(readColumn(['+10%'], 'length', 'us').kind).toBe('faults');
+  });
+  test('whatever is pasted: as many values as cells, all finite, or faults', () => {
+    fc.assert(
+      fc.property(
+        fc.array(fc.oneof(fc.string(), fc.stringMatching(/^\d{1,4}[.,]?\d{0,4}[.,]?\d{0,3}$/)), { maxLength: 8 }),
+        fc.constantFrom(...QUANTITIES),
+        (texts, quantity) => {
+          const reading = readColumn(texts, quantity, 'si');
+          if (reading.kind === 'faults') return reading.faults.length > 0;
+          const columns = reading.kind === 'values' ? [reading.values] : [reading.decimal, reading.thousands];
+          return columns.every(
+            (values) => values.length === texts.length && values.every((v) => v === null || Number.isFinite(v)),
+          );
+        },
+      ),
+      { numRuns: 1000 },
+    );
+  });
   test('an undecided column gives both readings', () => {
     expect(readColumn(['1,250', '', '2'], 'length', 'si')).toEqual({
       kind: 'undecided',
@@ -152,6 +240,22 @@ describe('[UNI-2] a pasted column', () => {
     const reading = readColumn(['1', 'x', '3', '4 kip'], 'length', 'si');
     expect(reading.kind === 'faults' && reading.faults.map((fault) => fault.row)).toEqual([1, 3]);
   });
+});
+
+describe('[UNI-4] the units of the second system', () => {
+  // NIST Special Publication 811 (2008), appendix B.8, to the seven digits printed there
+  test.each<[Quantity, number]>([
+    ['length', 0.3048],
+    ['displacement', 0.0254],
+    ['force', 4448.222],
+    ['stiffness', 175126.8],
+    ['moment', 1355.818],
+    ['energy', 112.9848],
+    ['velocity', 0.0254],
+    ['weight', 453.5924],
+  ])('one unit of %s is %d in SI', (quantity, si) =>
+    expect(Math.abs(fromDisplay(1, quantity, 'us') / si - 1)).toBeLessThan(2e-7),
+  );
 });
 
 describe('[UNI-3] a printed number', () => {
@@ -174,6 +278,29 @@ describe('[UNI-3] a printed number', () => {
       { numRuns: 1000 },
     );
     expect(cases).toBe(1000);
+  });
+  test('an answer reads back to what it shows, in every quantity and system', () => {
+    fc.assert(
+      fc.property(
+        fc.double({ min: -1e9, max: 1e9, noNaN: true }),
+        fc.constantFrom(...QUANTITIES),
+        fc.constantFrom<System>('si', 'us'),
+        fc.nat({ max: 6 }),
+        (shown, quantity, system, decimals) => {
+          const text = printQuantity(fromDisplay(shown, quantity, system), quantity, system, decimals);
+          const back = value(text, quantity, system);
+          expect(typeof back, text).toBe('number');
+          expect(printQuantity(back as number, quantity, system, decimals)).toBe(text);
+        },
+      ),
+      { numRuns: 1000 },
+    );
+  });
+  test('whole percentages and millimetres are the doubles that the plain decimals are', () => {
+    for (let i = 1; i < 1000; i++) {
+      expect(value(`${i}`, 'percent')).toBe(Number(`${i}e-2`));
+      expect(value(`${i} mm`, 'length')).toBe(Number(`${i}e-3`));
+    }
   });
   test('what was typed is shown as typed', () => {
     for (const text of ['455', '3.6', '0.005', '7\u202f250', '31.54', '1.1']) {
