@@ -45,7 +45,7 @@ interface Slot {
 }
 
 export interface PoolOptions {
-  /** Number of workers, at least 1; each is made when it is first needed. */
+  /** Number of workers, at least 1; all are made at once, so that they are there when the first document is. */
   readonly size: number;
   readonly make: () => Endpoint;
   /** Made in the place of a worker that never said anything. */
@@ -243,6 +243,8 @@ export function createPool({ size, make, fallback, silent = SILENT }: PoolOption
       if (slot.looks * (silent / LOOKS) >= patience) died(slot, `it was silent for ${(patience / 1000).toFixed(1)} s`);
     }
   }
+
+  while (slots.length < size) addSlot(make());
 
   return {
     putMotion(digest, values) {
