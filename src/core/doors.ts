@@ -8,6 +8,8 @@ import { type PreparedFrame, prepareFrame } from './frame/prepare.ts';
 
 export { stepErrorOf } from './dynamics/evidence.ts';
 export { type PreparedFrame, prepareFrame } from './frame/prepare.ts';
+export { measuresOf } from './motion/measures.ts';
+export { spectrumOf } from './spectrum/spectrum.ts';
 export type RunUnderWay = March;
 
 /** A run to be marched in slices. @throws RangeError on a case that `caseOf` would have refused */
