@@ -51,12 +51,13 @@ export function Grid(props: GridProps) {
     const root = grid.current;
     if (root === null || edited !== null) return;
     const focused = document.activeElement;
-    if (!wanted.current && focused !== document.body && !root.contains(focused)) return;
+    const walks = wanted.current || root.contains(focused);
+    if (!walks && focused !== document.body) return;
     wanted.current = false;
     const target = root.querySelector<HTMLElement>(`[data-storey="${cell.storey}"] [data-cell="${cell.column}"]`);
     if (target === focused) return;
     target?.focus({ preventScroll: true });
-    target?.scrollIntoView({ block: 'nearest', inline: 'nearest' });
+    if (walks) target?.scrollIntoView({ block: 'nearest', inline: 'nearest' });
   }, [cell.storey, cell.column, edited]);
 
   const onKeyDown = (event: KeyboardEvent) => {

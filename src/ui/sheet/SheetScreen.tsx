@@ -22,11 +22,16 @@ import { LimitCell } from './LimitCell.tsx';
 import { PasteDialog } from './PasteDialog.tsx';
 import { rowsOf } from './rows.ts';
 import { AccelerationPlot, ShearPlot } from './SidePlots.tsx';
+import { SpokenVerdict } from './SpokenVerdict.tsx';
 import { useAxes } from './useAxes.ts';
 import { useCursorAtPeak } from './useCursorAtPeak.ts';
 import { useLayout } from './useLayout.ts';
 import { Verdict } from './Verdict.tsx';
-import './sheet.css';
+import './page.css';
+import './line.css';
+import './heads.css';
+import './grid.css';
+import './drawing.css';
 
 const GroundStack = lazy(() => import('../strip/GroundStack.tsx').then((module) => ({ default: module.GroundStack })));
 const SquarePanels = lazy(() =>
@@ -141,7 +146,6 @@ export function SheetScreen({ onOpen, onExample }: SheetScreenProps) {
             <CellTools storey={shownCell.storey} empty={empty} gravity={gravity} onGravity={setGravityShown} />
           </div>
           <div
-            aria-live="polite"
             className="verdict-place"
             style={
               layout.narrow
@@ -150,6 +154,7 @@ export function SheetScreen({ onOpen, onExample }: SheetScreenProps) {
             }
           >
             <Verdict letters={letters} />
+            <SpokenVerdict />
           </div>
           <Heads
             layout={layout}
