@@ -28,7 +28,7 @@ export interface Pace {
   readonly evidence: number;
 }
 
-export const PACE: Pace = { quick: 50, pause: 120, long: 3000, shown: 400, evidence: 200 };
+const PACE: Pace = { quick: 50, pause: 120, long: 3000, shown: 400, evidence: 200 };
 
 const EVIDENCE_PRIORITY = 10;
 

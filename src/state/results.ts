@@ -2,7 +2,7 @@ import type { Engine } from '../engine/protocol.ts';
 import { type Follower, follow } from './follow.ts';
 import { samplesOf } from './samples.ts';
 
-export { type Answers, type MotionRun, type ResultsState, resultsStore, useResults } from './answers.ts';
+export { type Answers, type MotionRun, resultsStore, useResults } from './answers.ts';
 
 let follower: Follower | null = null;
 

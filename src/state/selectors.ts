@@ -1,7 +1,6 @@
-import type { Project } from '../document/project.ts';
 import { resultsStore, useResults } from './answers.ts';
 import { chosenMotionOf, chosenStoreyOf } from './chosen.ts';
-import { documentStore, effectiveProject, useDocument } from './document.ts';
+import { documentStore, useDocument } from './document.ts';
 import { sessionStore, useSession } from './session.ts';
 
 /** Storey whose histories are shown, from 0; -1 with no storey. */
@@ -26,9 +25,4 @@ export function useChosenMotion(): string | null {
   const motion = useSession((s) => s.motion);
   const answers = useResults((s) => s.answers);
   return chosenMotionOf({ project }, { motion }, { answers });
-}
-
-/** The project with the draft in its place, for what answers while a cell is edited (the frame drawing, derived facts). */
-export function useEffectiveProject(): Project {
-  return useDocument(effectiveProject);
 }

@@ -26,7 +26,7 @@ export interface History {
 export const NO_HISTORY: History = { past: [], future: [], folding: null };
 
 /** Steps kept: far more than anyone takes back, few enough that samples of removed motions do not stay for ever. */
-export const UNDO_STEPS = 400;
+const UNDO_STEPS = 400;
 
 /** History after the project `before` was changed. A silent change is made to every snapshot, so that no undo takes it back. */
 export function record(
