@@ -89,12 +89,12 @@ test.each([0.5, 0.9, 1.3, 2])('K5 steady state at frequency ratio %d', (b) => {
   const [z, w] = [0.05, 2 * Math.PI];
   const interval = 0.002;
   const cycles = 120;
-  const ramped = Float64Array.from(
-    { length: Math.round(cycles / b / interval) },
-    (_, i) =>
-      Math.sin(w * b * i * interval) *
-      Math.min(1, (i * interval * b) / 30, cycles - i * interval * b > 0 ? (cycles - i * interval * b) / 30 : 0),
-  );
+  // Comes and goes over 40 cycles, without a kink, so that no transient is added to the steady state.
+  const smooth = (cycle: number) => (1 - Math.cos(Math.PI * Math.min(1, Math.max(0, cycle / 40)))) / 2;
+  const ramped = Float64Array.from({ length: Math.round(cycles / b / interval) + 1 }, (_, i) => {
+    const cycle = i * interval * b;
+    return Math.sin(2 * Math.PI * cycle) * smooth(cycle) * smooth(cycles - cycle);
+  });
   const { displacement } = spectrumOf({ interval, acceleration: ramped }, z, [1]);
   const closed = 1 / Math.sqrt((1 - b * b) ** 2 + (2 * z * b) ** 2) / w ** 2;
   expect(Math.abs(displacement[0] / closed - 1)).toBeLessThan(5e-3);
@@ -168,7 +168,7 @@ describe.runIf(existsSync(RECORD))('the 1940 record', () => {
     expect(got - printed).toBeLessThan(0.0085 + 0.012);
   });
   // Peak displacements in cm, computed by independent code (matrix exponential, largest value on a grid of 1.25 ms): they fall
-  // short of the true peak by up to 0.035 % (checked on a grid a hundred times finer), hence 0.04 % and the last figure.
+  // short of the true peak by up to 0.05 % (checked on a grid a hundred times finer), hence 0.06 % and the last figure.
   test.each<[number, number[]]>([
     [0, [0.0405, 0.402, 1.7897, 3.6886, 8.1986, 13.5216, 18.8639, 19.041, 25.1849, 58.1962, 30.7524, 39.9565]],
     [0.02, [0.0274, 0.1578, 1.0595, 1.8993, 6.8241, 8.8542, 15.1588, 11.9978, 18.9698, 39.4707, 28.5758, 28.7151]],
@@ -179,7 +179,7 @@ describe.runIf(existsSync(RECORD))('the 1940 record', () => {
     const periods = [0.05, 0.1, 0.2, 0.3, 0.5, 0.75, 1, 1.5, 2, 3, 4, 5];
     const { displacement } = spectrumOf(record(9.80665), z, periods);
     expected.forEach((cm, i) => {
-      expect(Math.abs(displacement[i] * 100 - cm), `T ${periods[i]}`).toBeLessThan(6e-5 + 4e-4 * cm);
+      expect(Math.abs(displacement[i] * 100 - cm), `T ${periods[i]}`).toBeLessThan(6e-5 + 6e-4 * cm);
     });
   });
 
