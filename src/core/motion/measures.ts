@@ -29,6 +29,7 @@ export function measuresOf(motion: { readonly interval: number; readonly acceler
       peakDisplacement = Math.max(peakDisplacement, displacementBetween(a[i - 1], a[i], v[i - 1], d[i - 1], h));
   }
   const total = square[n - 1];
+  const start5to95 = timeAt(square, 0.05 * total, h);
   return {
     peakAcceleration,
     peakAccelerationTime: peakAt * h,
@@ -36,7 +37,8 @@ export function measuresOf(motion: { readonly interval: number; readonly acceler
     peakDisplacement,
     endVelocity: v[n - 1],
     ariasIntensity: (Math.PI / (2 * STANDARD_GRAVITY)) * total,
-    duration5to95: timeAt(square, 0.95 * total, h) - timeAt(square, 0.05 * total, h),
+    start5to95,
+    duration5to95: timeAt(square, 0.95 * total, h) - start5to95,
   };
 }
 

@@ -76,5 +76,7 @@ export interface MotionMeasures {
   readonly peakDisplacement: number;
   readonly endVelocity: number;
   readonly ariasIntensity: number;
+  /** When 5 % of the Arias intensity have come [s], and how long it takes from there to 95 % [s]. */
+  readonly start5to95: number;
   readonly duration5to95: number;
 }

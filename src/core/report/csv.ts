@@ -3,8 +3,8 @@ import { headOf, type TableSystem } from './head.ts';
 import type { Cell, Table } from './table.ts';
 
 export interface CsvOptions {
-  /** Semicolon where the decimal sign is a comma. */
-  readonly separator: ',' | ';';
+  /** Semicolon where the decimal sign is a comma; a tab for the clipboard. */
+  readonly separator: ',' | ';' | '\t';
   readonly decimal: '.' | ',';
   /** Units of heads and cells: the user's, or coherent SI as in the project file. */
   readonly system: TableSystem;

@@ -1,4 +1,23 @@
-/** The dialog that is open, if any: made by the panels room. */
+import { lazy, Suspense } from 'react';
+import { setSession, useSession } from '../../state/session.ts';
+import './dialogs.css';
+
+const AnalysisDialog = lazy(() =>
+  import('./AnalysisDialog.tsx').then((module) => ({ default: module.AnalysisDialog })),
+);
+const TablesDialog = lazy(() => import('./TablesDialog.tsx').then((module) => ({ default: module.TablesDialog })));
+const KeysDialog = lazy(() => import('./KeysDialog.tsx').then((module) => ({ default: module.KeysDialog })));
+
+const close = () => setSession({ dialog: 'none' });
+
+/** The dialog that is open, if any. Each comes with its own part of the script when it is first opened. */
 export function Dialogs() {
-  return null;
+  const dialog = useSession((state) => state.dialog);
+  return (
+    <Suspense fallback={null}>
+      {dialog === 'analysis' && <AnalysisDialog onClose={close} />}
+      {dialog === 'tables' && <TablesDialog onClose={close} />}
+      {dialog === 'keys' && <KeysDialog onClose={close} />}
+    </Suspense>
+  );
 }

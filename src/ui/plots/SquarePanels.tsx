@@ -1,4 +1,51 @@
-/** The two square panels under the answers: drawn by the panels room. */
+import { useRef } from 'react';
+import { never } from '../../core/fault.ts';
+import { useSession } from '../../state/session.ts';
+import { type SquareKind, usePanelChoice } from './choice.ts';
+import { DriftProfile } from './DriftProfile.tsx';
+import { ForceDrift } from './ForceDrift.tsx';
+import { ModeShapes } from './ModeShapes.tsx';
+import type { SquareLayout } from './SquareFrame.tsx';
+import { useTokens } from './tokens.ts';
+import { useNarrow } from './useNarrow.ts';
+import { useShownRun } from './useShownRun.ts';
+import { useSize } from './useSize.ts';
+import './plots.css';
+
+const GAP = 30;
+const FIRST_SIZE = { width: 660, height: 384 };
+
+/** The two square panels under the answers: what each shows is chosen in its head. */
 export function SquarePanels() {
-  return <section data-part="plots" aria-label="Plots" />;
+  const section = useRef<HTMLElement>(null);
+  const narrow = useNarrow();
+  const { width, height } = useSize(section) ?? FIRST_SIZE;
+  const kinds = usePanelChoice((choice) => choice.square);
+  const half = Math.floor((width - GAP) / 2);
+  return (
+    <section ref={section} className="square-panels" data-part="plots" aria-label="Plots">
+      {kinds.map((kind, slot) => {
+        const left = slot === 0 ? 0 : width - half;
+        const layout = { slot, left, width: half, height, narrow };
+        return <Square key={left} kind={kind} layout={layout} />;
+      })}
+    </section>
+  );
+}
+
+function Square({ kind, layout }: { readonly kind: SquareKind; readonly layout: SquareLayout }) {
+  const tokens = useTokens();
+  const system = useSession((state) => state.system);
+  const { shown, old } = useShownRun();
+  const common = { layout, tokens, system, old };
+  switch (kind) {
+    case 'force':
+      return <ForceDrift {...common} shown={shown} />;
+    case 'modes':
+      return <ModeShapes {...common} />;
+    case 'profile':
+      return <DriftProfile {...common} />;
+    default:
+      return never(kind);
+  }
 }

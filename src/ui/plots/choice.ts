@@ -5,6 +5,12 @@ import type { TimePanelKind } from '../strip/panelContent.ts';
 /** What a square panel can show. */
 export type SquareKind = 'force' | 'modes' | 'profile';
 
+export const SQUARES: readonly { readonly kind: SquareKind; readonly name: string }[] = [
+  { kind: 'force', name: 'Force and drift' },
+  { kind: 'modes', name: 'Mode shapes' },
+  { kind: 'profile', name: 'Drift profile' },
+];
+
 interface Choice {
   /** From the top of the time stack down. */
   readonly time: readonly TimePanelKind[];

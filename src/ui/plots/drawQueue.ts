@@ -1,3 +1,5 @@
+import { resultsStore } from '../../state/results.ts';
+
 type Draw = () => Promise<void>;
 
 /** What waits to be drawn: one entry a plot, a newer one takes the place of the older. */
@@ -9,11 +11,28 @@ export function queueDraw(plot: object, draw: Draw): () => void {
   waiting.set(plot, draw);
   if (!under) {
     under = true;
-    requestAnimationFrame(next);
+    void afterAnswers().then(next);
   }
   return () => {
     if (waiting.get(plot) === draw) waiting.delete(plot);
   };
+}
+
+let answersShown: Promise<void> | null = null;
+
+/** Resolves once the first answers stand on the screen (or there are none to come) and the page has a moment to spare. */
+function afterAnswers(): Promise<void> {
+  answersShown ??= new Promise<void>((resolve) => {
+    const spare = () => requestIdleCallback(() => resolve(), { timeout: 500 });
+    const painted = () => requestAnimationFrame(() => setTimeout(spare, 0));
+    if (resultsStore.getState().status !== 'running') return painted();
+    const stop = resultsStore.subscribe(({ status }) => {
+      if (status === 'running') return;
+      stop();
+      painted();
+    });
+  });
+  return answersShown.then(() => new Promise((resolve) => requestAnimationFrame(() => resolve())));
 }
 
 function next(): void {

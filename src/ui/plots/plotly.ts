@@ -14,7 +14,11 @@ let loading: Promise<PlotLibrary> | null = null;
 
 /** The plot library, fetched when it is first asked for; a failed fetch is tried again at the next call. */
 export function plotLibrary(): Promise<PlotLibrary> {
-  loading ??= import('plotly.js-basic-dist-min').then((module) => module.default as PlotLibrary);
+  loading ??= import('plotly.js-basic-dist-min').then(async (module) => {
+    // Reading the library in is a task of its own: the first plot waits for the next one.
+    await new Promise((resolve) => setTimeout(resolve, 0));
+    return module.default as PlotLibrary;
+  });
   loading.catch(() => {
     loading = null;
   });

@@ -1,9 +1,12 @@
-import type { Layout, LayoutAxis } from 'plotly.js-basic-dist-min';
+import type { Dash, Layout, LayoutAxis } from 'plotly.js-basic-dist-min';
 import type { Ticks } from './ticks.ts';
 import type { Tokens } from './tokens.ts';
 
 /** Room around the axes of every plot [px]. */
 export const MARGIN = { l: 44, r: 8, t: 6, b: 24 } as const;
+
+/** The dashes of a limit: the library takes lengths as well, which its types do not say. */
+export const LIMIT_DASHES = '6px,3px' as Dash;
 
 export interface Size {
   readonly width: number;
@@ -50,6 +53,7 @@ export function axis(
     tickvals: [...ticks.at],
     ...(print === null ? { showticklabels: false } : { ticktext: ticks.at.map(print) }),
     ticks: '',
+    ticklabeloverflow: 'allow',
     showline: false,
     gridcolor: tokens.hair,
     gridwidth: 1,

@@ -1,10 +1,11 @@
 import { memo } from 'react';
+import type { MotionMeasures } from '../../core/motion/reading.ts';
 import { axisUnitOf } from '../../core/units/axisUnit.ts';
 import { printQuantity, type System } from '../../core/units/quantities.ts';
+import { useMeasures } from '../motions/measures.ts';
 import { thinned } from '../plots/thin.ts';
 import { evenAxis } from '../plots/ticks.ts';
 import type { Band } from './geometry.ts';
-import { type MotionFacts, useMotionFacts } from './motionFacts.ts';
 import type { TimeScale } from './scale.ts';
 import type { TimeAxisFacts } from './useTimeAxis.ts';
 
@@ -24,9 +25,14 @@ export const MotionStrip = memo(function MotionStrip({ axis, band, scale, system
   const { samples, entry } = axis;
   const { width, ticks, x, range } = scale;
   const factor = axis.scale ?? 1;
-  const facts = useMotionFacts(samples, entry?.interval ?? 1);
-  const unit = axisUnitOf('acceleration', system, facts?.peak ?? 0);
-  const even = evenAxis(unit.onAxis(Math.abs(factor) * Math.abs(facts?.peak ?? 0)));
+  const facts = useMeasures(samples, entry?.interval ?? 1);
+  const unit = axisUnitOf('acceleration', system, 0);
+  const even = evenAxis(unit.onAxis(Math.abs(factor) * (facts?.peakAcceleration ?? 0)));
+  // The measure is a magnitude: the mark stands where the sample is.
+  const peak =
+    facts === null || samples === null || entry === null
+      ? 0
+      : factor * samples[Math.round(facts.peakAccelerationTime / entry.interval)];
   const middle = band.height / 2;
   const y = (value: number) => middle - (unit.onAxis(value) / even.end) * middle;
   const line = samples === null || entry === null ? '' : tracePath(samples, entry.interval, factor, scale, y);
@@ -57,18 +63,16 @@ export const MotionStrip = memo(function MotionStrip({ axis, band, scale, system
       <svg width={width} height={band.height} overflow="hidden" aria-hidden="true">
         {litLine !== '' && <path d={litLine} className="s-suite" strokeWidth="0.8" strokeLinejoin="round" />}
         <path d={line} className="s-ink" strokeWidth="0.9" strokeLinejoin="round" />
-        {facts !== null && <StrongMotion facts={facts} x={x} y={band.height - 4} />}
+        {facts !== null && <StrongMotion facts={facts} scale={scale} y={band.height - 4} />}
       </svg>
-      {facts !== null && (
-        <StrongWords facts={facts} x={x} range={range} y={band.height} width={width} system={system} />
-      )}
-      {facts !== null && inside(facts.peakTime) && (
+      {facts !== null && <StrongWords facts={facts} scale={scale} y={band.height} />}
+      {facts !== null && inside(facts.peakAccelerationTime) && (
         <PeakMark
-          x={x(facts.peakTime)}
-          y={y(factor * facts.peak)}
+          x={x(facts.peakAccelerationTime)}
+          y={y(peak)}
           width={width}
           height={band.height}
-          text={`peak ${printQuantity(factor * facts.peak, 'acceleration', system)} ${unit.unit}`}
+          text={`peak ${printQuantity(peak, 'acceleration', system)} ${unit.unit}`}
         />
       )}
       {free < width - 76 && (
@@ -111,40 +115,26 @@ function tracePath(
   return `M${points.join('L')}`;
 }
 
-function StrongMotion({
-  facts: { strong },
-  x,
-  y,
-}: {
-  readonly facts: MotionFacts;
-  readonly x: (time: number) => number;
+interface StrongProps {
+  readonly facts: MotionMeasures;
+  readonly scale: TimeScale;
+  /** Base line [px]. */
   readonly y: number;
-}) {
-  if (strong === null) return null;
-  return (
-    <rect x={x(strong.from)} y={y} width={Math.max(1, x(strong.to) - x(strong.from))} height="4" fill="var(--suite)" />
-  );
 }
 
-function StrongWords({
-  facts: { strong },
-  x,
-  range,
-  y,
-  width,
-  system,
-}: {
-  readonly facts: MotionFacts;
-  readonly x: (time: number) => number;
-  readonly range: readonly [number, number];
-  readonly y: number;
-  readonly width: number;
-  readonly system: System;
-}) {
-  if (strong === null || strong.to < range[0] || strong.to > range[1] || x(strong.to) > width - 96) return null;
+/** The stretch in which 5 to 95 % of the Arias intensity come. */
+function StrongMotion({ facts: { start5to95, duration5to95 }, scale: { x }, y }: StrongProps) {
+  if (duration5to95 <= 0) return null;
+  const from = x(start5to95);
+  return <rect x={from} y={y} width={x(start5to95 + duration5to95) - from} height="4" fill="var(--suite)" />;
+}
+
+function StrongWords({ facts: { start5to95, duration5to95 }, scale: { x, width }, y }: StrongProps) {
+  const end = x(start5to95 + duration5to95);
+  if (duration5to95 <= 0 || end < 0 || end > width - 96) return null;
   return (
-    <text x={x(strong.to) + 5} y={y} className="halo">
-      5 to 95 %: {printQuantity(strong.to - strong.from, 'time', system, 1)} s
+    <text x={end + 5} y={y} className="halo">
+      5 to 95 %: {printQuantity(duration5to95, 'time', 'si', 1)} s
     </text>
   );
 }
@@ -177,8 +167,8 @@ function PeakMark({
   );
 }
 
-function sentence({ entry, scale, end }: TimeAxisFacts, facts: MotionFacts | null, system: System): string {
+function sentence({ entry, scale, end }: TimeAxisFacts, facts: MotionMeasures | null, system: System): string {
   if (entry === null || facts === null) return 'Ground acceleration: no motion';
-  const peak = printQuantity((scale ?? 1) * facts.peak, 'acceleration', system);
-  return `Ground acceleration of ${entry.name}, ${printQuantity(end, 'time', system)} s: peak ${peak} g at ${printQuantity(facts.peakTime, 'time', system)} s`;
+  const peak = printQuantity(Math.abs(scale ?? 1) * facts.peakAcceleration, 'acceleration', system);
+  return `Ground acceleration of ${entry.name}, ${printQuantity(end, 'time', system)} s: peak ${peak} g at ${printQuantity(facts.peakAccelerationTime, 'time', system)} s`;
 }

@@ -113,7 +113,7 @@ function EnergyWords({
   return (
     <>
       <p className="quiet small">input against the sum,</p>
-      <p className="quiet small">apart by {printShare(imbalance, plot.system)} % at most</p>
+      <p className="quiet small">apart by {apartWords(imbalance, plot.system)}</p>
       {beside.length > 0 && (
         <p className="layer-key">
           {[...beside].reverse().map(({ part }) => (
@@ -128,9 +128,11 @@ function EnergyWords({
   );
 }
 
-/** A small share in percent with as many decimals as it takes to be seen. */
-function printShare(share: number, system: System): string {
-  return printQuantity(share, 'percent', system, share >= 1e-4 || share === 0 ? 2 : 4);
+/** The imbalance in percent with as many decimals as it takes to be seen. */
+function apartWords(share: number, system: System): string {
+  const least = 1e-5;
+  if (share > 0 && share < least / 2) return `under ${printQuantity(least, 'percent', system, 3)} %`;
+  return `${printQuantity(share, 'percent', system, share > 0 && share < 1e-4 ? 3 : 2)} % at most`;
 }
 
 function historyTable({ kind, name, place, quantity, values, interval, stack }: PanelContent, motion: string): Table {

@@ -1,8 +1,8 @@
-import type { Annotations, Dash, PlotData, Shape } from 'plotly.js-basic-dist-min';
+import type { Annotations, PlotData, Shape } from 'plotly.js-basic-dist-min';
 import { type AxisUnit, axisUnitOf } from '../../core/units/axisUnit.ts';
 import type { System } from '../../core/units/quantities.ts';
 import type { PlotSpec } from '../plots/plotly.ts';
-import { axis, baseLayout } from '../plots/template.ts';
+import { axis, baseLayout, LIMIT_DASHES } from '../plots/template.ts';
 import { thinned } from '../plots/thin.ts';
 import { evenAxis, risingAxis, type Ticks } from '../plots/ticks.ts';
 import type { Tokens } from '../plots/tokens.ts';
@@ -164,9 +164,6 @@ function inputWord({ content, scale, tokens }: TimePlotProps, unit: AxisUnit): P
   };
 }
 
-/** The library takes lengths as well, which its types do not say. */
-const DASHES = '6px,3px' as Dash;
-
 function limitLine(at: number, tokens: Tokens): Partial<Shape> {
   return {
     type: 'line',
@@ -175,7 +172,7 @@ function limitLine(at: number, tokens: Tokens): Partial<Shape> {
     x1: 1,
     y0: at,
     y1: at,
-    line: { color: tokens.signal, width: 1, dash: DASHES },
+    line: { color: tokens.signal, width: 1, dash: LIMIT_DASHES },
   };
 }
 

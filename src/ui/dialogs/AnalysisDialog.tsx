@@ -1,0 +1,44 @@
+import { effectiveProject, useDocument } from '../../state/document.ts';
+import { useResults } from '../../state/results.ts';
+import { Button } from '../controls/Button.tsx';
+import { Dialog } from '../controls/Dialog.tsx';
+import { commitOpenDraft } from '../controls/field.ts';
+import { DampingSection } from './DampingSection.tsx';
+import { LimitSection } from './LimitSection.tsx';
+import { MethodSection } from './MethodSection.tsx';
+import { PDeltaSection } from './PDeltaSection.tsx';
+import { StepSection } from './StepSection.tsx';
+
+/** How the response is computed and what it is held against. Each change counts at once, as one undo step. */
+export function AnalysisDialog({ onClose }: { readonly onClose: () => void }) {
+  const project = useDocument(effectiveProject);
+  const modes = useResults((state) => state.modes);
+  const faults = useResults((state) => state.faults);
+  const close = () => {
+    commitOpenDraft();
+    onClose();
+  };
+  return (
+    <Dialog
+      title="Analysis"
+      onClose={close}
+      width={780}
+      foot={
+        <>
+          <span className="quiet small foot-words">
+            Changes count at once, and the answers follow; undo takes each back.
+          </span>
+          <Button kind="primary" onClick={close}>
+            Close
+          </Button>
+        </>
+      }
+    >
+      <MethodSection analysis={project.analysis} modes={modes} faults={faults} />
+      <StepSection project={project} modes={modes} faults={faults} />
+      <DampingSection frame={project.frame} modes={modes} faults={faults} />
+      <PDeltaSection pDelta={project.frame.pDelta} faults={faults} />
+      <LimitSection limits={project.limits} motions={project.motions} faults={faults} />
+    </Dialog>
+  );
+}
