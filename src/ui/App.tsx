@@ -1,7 +1,8 @@
-import { lazy, Suspense, useEffect, useState } from 'react';
+import { lazy, useEffect, useState } from 'react';
 
 import { useSession } from '../state/session.ts';
 import { appKey } from './appKeys.ts';
+import { Boundary } from './controls/Boundary.tsx';
 import { Cautions } from './foot/Cautions.tsx';
 import { Evidence } from './foot/Evidence.tsx';
 import { Toast } from './foot/Toast.tsx';
@@ -46,11 +47,13 @@ export function App() {
       <TopBar onOpen={open} onSave={save} />
       <main>
         {screen === 'motions' ? (
-          <Suspense fallback={null}>
+          <Boundary part="The motions">
             <MotionsScreen />
-          </Suspense>
+          </Boundary>
         ) : (
-          <SheetScreen onOpen={open} onExample={openExample} />
+          <Boundary part="The sheet">
+            <SheetScreen onOpen={open} onExample={openExample} />
+          </Boundary>
         )}
       </main>
       <footer className="feet" data-part="foot">
@@ -58,9 +61,9 @@ export function App() {
         <Cautions />
       </footer>
       <Toast />
-      <Suspense fallback={null}>
+      <Boundary part="The dialogs">
         <Dialogs />
-      </Suspense>
+      </Boundary>
       {refused !== null && <RefusedDialog refused={refused} onClose={() => setRefused(null)} />}
     </div>
   );

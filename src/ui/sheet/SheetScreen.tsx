@@ -1,9 +1,10 @@
-import { lazy, Suspense, useLayoutEffect, useMemo, useRef, useState } from 'react';
+import { lazy, useLayoutEffect, useMemo, useRef, useState } from 'react';
 import { toDisplay } from '../../core/units/quantities.ts';
 import { effectiveProject, useDocument } from '../../state/document.ts';
 import { useResults } from '../../state/results.ts';
 import { useChosenMotion, useChosenStorey } from '../../state/selectors.ts';
 import { useSession } from '../../state/session.ts';
+import { Boundary } from '../controls/Boundary.tsx';
 import { letterOf } from '../controls/letters.ts';
 import { answerRowsOf, motionDrifts } from './answerRows.ts';
 import { CellLine } from './CellLine.tsx';
@@ -253,12 +254,12 @@ export function SheetScreen({ onOpen, onExample }: SheetScreenProps) {
         <div className="under">
           <Ground margin={layout.margin} />
           <div className="under-panels" style={{ margin: `0 ${layout.margin}px` }}>
-            <Suspense fallback={<div />}>
+            <Boundary part="The ground motion">
               <GroundStack />
-            </Suspense>
-            <Suspense fallback={<div />}>
+            </Boundary>
+            <Boundary part="The panels">
               <SquarePanels />
-            </Suspense>
+            </Boundary>
           </div>
         </div>
       </div>
