@@ -1,14 +1,11 @@
-import { z } from 'zod';
 import type { Limits } from '../core/checks/limits.ts';
 import { type PreparedFrame, prepareFrame } from '../core/doors.ts';
 import type { Analysis } from '../core/dynamics/run.ts';
 import { stabilityFault, stepOf } from '../core/dynamics/steps.ts';
 import type { Fault, Result } from '../core/fault.ts';
 import type { Frame } from '../core/frame/frame.ts';
-import { crossChecks } from './crossChecks.ts';
-import { faultsOf } from './faults.ts';
+import { cellFaults } from './cells.ts';
 import type { MotionEntry, Project } from './project.ts';
-import { analysisSchema, frameSchema, limitsSchema, motionUse } from './schema.ts';
 
 /** The document as plain numbers: what the calculation needs and nothing else. */
 export interface Case {
@@ -29,36 +26,20 @@ export interface Case {
   readonly leftOut: readonly string[];
 }
 
-/** What of the document is checked; samples, counts and origins are the program's own. */
-const caseSchema = z.object({
-  frame: frameSchema,
-  analysis: analysisSchema,
-  limits: limitsSchema,
-  motions: z.array(z.object(motionUse)),
-});
-
 /**
  * The case of a document, or every reason why there is none: a cell not typed, not readable or out of range; a reference to a
  * mode that is not there; no storey; a step that is no whole part of an interval or beyond the stability limit; a frame
  * unstable under gravity. A frame without motions is a case (modes are still shown).
  */
 export function caseOf(project: Project): Result<Case> {
-  if (project.frame.storeys.length === 0) {
-    const fault: Fault = {
-      code: 'no-storey',
-      where: 'frame.storeys',
-      message: 'there is no storey yet',
-      mend: 'Type the first storey',
-    };
-    return { ok: false, faults: [fault] };
-  }
-  const parsed = caseSchema.safeParse(project);
-  const faults = [...(parsed.success ? [] : faultsOf(parsed.error, project)), ...crossChecks(project)];
-  if (!parsed.success || faults.length > 0) return { ok: false, faults };
-  const { frame, analysis, limits } = parsed.data;
+  const used = project.motions.filter((motion) => motion.used);
+  const faults = cellFaults(project);
+  if (faults.length > 0) return { ok: false, faults };
+  // Without a fault every cell holds its number.
+  const frame = project.frame as Frame;
+  const analysis = project.analysis as Analysis;
   const prepared = prepareFrame(frame);
   if (!prepared.ok) return prepared;
-  const used = project.motions.filter((motion) => motion.used);
   const wrong = stepFaults(used, analysis, prepared.value);
   if (wrong.length > 0) return { ok: false, faults: wrong };
   return {
@@ -67,7 +48,7 @@ export function caseOf(project: Project): Result<Case> {
       frame,
       prepared: prepared.value,
       analysis,
-      limits,
+      limits: project.limits as Limits,
       motions: used.map(({ name, interval, samples, count, scale }) => ({
         name,
         interval,

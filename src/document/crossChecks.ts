@@ -1,4 +1,5 @@
 import type { Fault } from '../core/fault.ts';
+import { listOf, objectOf } from './raw.ts';
 
 /**
  * What no key can tell alone, on whatever stands there (parts that are of the wrong shape have faults of their own and are
@@ -101,14 +102,4 @@ function motionFaults(motions: readonly unknown[]): Fault[] {
     }
   }
   return faults;
-}
-
-function objectOf(value: unknown): Record<string, unknown> | null {
-  return typeof value === 'object' && value !== null && !Array.isArray(value)
-    ? (value as Record<string, unknown>)
-    : null;
-}
-
-function listOf(value: unknown): readonly unknown[] {
-  return Array.isArray(value) ? value : [];
 }

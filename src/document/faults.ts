@@ -20,9 +20,10 @@ function faultsOfIssue(issue: Issue, from: unknown, at: string): Fault[] {
     }));
   }
   if (value === undefined) return [fault('missing', where, 'is missing', `Add ${wanted(issue)}`)];
-  if (value === null) return [fault('not-typed', where, 'is not typed yet', `Type ${wanted(issue)}`)];
-  if (issue.code === 'invalid_type' && typeof value === 'string' && issue.expected !== 'object') {
-    return [fault('unreadable', where, `${shown(value)} cannot be read`, `Type ${wanted(issue)}`)];
+  if (issue.code === 'invalid_type' && (issue.expected === 'number' || issue.expected === 'int')) {
+    if (value === null) return [fault('not-typed', where, 'is not typed yet', `Type ${wanted(issue)}`)];
+    if (typeof value === 'string')
+      return [fault('unreadable', where, `${shown(value)} is no number that can stand here`, `Type ${wanted(issue)}`)];
   }
   switch (issue.code) {
     case 'invalid_type':
@@ -52,16 +53,20 @@ function outOfRange(issue: Extract<Issue, { code: 'too_small' | 'too_big' }>, wh
       ? [Number(issue.minimum), issue.inclusive ? 'at least' : 'above', !issue.inclusive]
       : [Number(issue.maximum), issue.inclusive ? 'at most' : 'below', !issue.inclusive];
   if (issue.origin === 'array' || issue.origin === 'string') {
-    const what = issue.origin === 'array' ? 'entries' : 'characters';
+    if (where === 'frame.storeys' && bound === 1) {
+      return fault('no-storey', where, 'there is no storey yet', 'Type the first storey');
+    }
+    const what = where === 'frame.storeys' ? 'storeys' : issue.origin === 'array' ? 'entries' : 'characters';
     const count = (value as { length: number }).length;
-    return fault('wrong-count', where, `has ${count} ${what}, must have ${side} ${bound}`, `Make it ${side} ${bound}`);
+    const mend = `Make it ${side} ${bound} ${what}`;
+    return fault('wrong-count', where, `has ${count} ${what}, must have ${side} ${bound}`, mend);
   }
   const code = bound === 0 && open ? 'not-positive' : 'out-of-range';
   return fault(
     code,
     where,
     `is ${shown(value)}, must be ${side} ${short(bound)}`,
-    `Type a number ${side} ${short(bound)}`,
+    `Type a number ${side === 'above' || side === 'below' ? side : `of ${side}`} ${short(bound)}`,
   );
 }
 
@@ -72,7 +77,6 @@ function wanted(issue: Issue): string {
     case 'invalid_value':
       return issue.values.map((value) => JSON.stringify(value)).join(', ');
     case 'invalid_union':
-      if (issue.path.at(-1) === 'step') return 'seconds above 0, or { "parts": n }';
       return (
         KINDS[String(issue.path.at(-1))] ?? KINDS[String(issue.path.at(-2))] ?? 'one of the kinds of the project file'
       );
@@ -90,7 +94,7 @@ const KINDS: Readonly<Record<string, string>> = {
 
 function kindWord(expected: string): string {
   const words: Readonly<Record<string, string>> = {
-    number: 'a number',
+    number: 'a finite number',
     int: 'a whole number',
     string: 'a text',
     boolean: 'true or false',
@@ -125,6 +129,8 @@ function valueAt(from: unknown, path: readonly PropertyKey[]): unknown {
 
 function shown(value: unknown): string {
   if (typeof value === 'number') return short(value);
+  if (Array.isArray(value)) return 'a list';
+  if (typeof value === 'object' && value !== null) return 'an object';
   const text = JSON.stringify(value) ?? String(value);
   return text.length > 60 ? `${text.slice(0, 57)}...` : text;
 }

@@ -1,11 +1,13 @@
 import { z } from 'zod';
+import type { StepChoice } from '../core/dynamics/run.ts';
 import { ACCELERATION_UNITS } from '../core/motion/motion.ts';
 import { MAX_STOREYS, PROJECT_FORMAT } from './project.ts';
+import { objectOf } from './raw.ts';
 
 /**
- * The shape of the project file, all of the project-file page: what a key may hold. Unknown keys are faults. What one key
- * alone cannot tell (a mode that is not there, two motions of one name) stands in crossChecks.ts; what a later version
- * brings is in shape here and refused by notYet.ts.
+ * The shape of the project file, all of the project-file page: what a key may hold, its defaults written out. Unknown keys are
+ * faults. What one key alone cannot tell (a mode that is not there, two motions of one name) stands in crossChecks.ts; what a
+ * later version brings is in shape here and refused by notYet.ts.
  */
 const above0 = z.number().gt(0);
 const from0 = z.number().gte(0);
@@ -70,17 +72,26 @@ const method = z.discriminatedUnion('kind', [
   z.strictObject({ kind: z.literal('central-difference') }),
 ]);
 
+const parts = z.strictObject({ parts: z.int().gte(1) });
+
+/** By hand and not as a union, so that the fault names the part at fault. */
+const step = z.custom<StepChoice>().superRefine((value: unknown, context) => {
+  if (value === 'auto') return;
+  const { error } = (objectOf(value) === null ? above0 : parts).safeParse(value);
+  for (const issue of error?.issues ?? []) context.addIssue({ ...issue });
+});
+
 export const analysisSchema = z.strictObject({
   method,
-  step: z.union([above0, z.strictObject({ parts: z.int().gte(1) }), z.literal('auto')]),
-  tail: from0.default(0),
-  stopDrift: above0.default(0.1),
+  step,
+  tail: from0,
+  stopDrift: above0,
 });
 
 export const limitsSchema = z.strictObject({
   drift: above0,
   measure: z.enum(['mean', 'median', 'max']).optional(),
-  factor: above0.default(1),
+  factor: above0,
   source: z.string(),
 });
 
@@ -103,15 +114,16 @@ const notZero = z.number().refine((value) => value !== 0, { error: 'is 0, must b
 /** What the file and the document hold alike of a motion. */
 export const motionUse = {
   name: z.string().min(1),
-  scale: notZero.default(1),
-  used: z.boolean().default(true),
+  scale: notZero,
+  used: z.boolean(),
   reason: z.string().optional(),
 };
 
 const motion = z.strictObject({
   ...motionUse,
   interval: above0.optional(),
-  acceleration: z.array(z.number()).min(2).optional(),
+  /** Checked by motionSource.ts: a million samples have one fault and not a million. */
+  acceleration: z.custom<readonly number[]>(() => true).optional(),
   file: z.string().min(1).optional(),
   unit: z.enum(ACCELERATION_UNITS).optional(),
   origin: originSchema.optional(),

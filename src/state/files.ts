@@ -1,6 +1,5 @@
 import type { Fault, Result } from '../core/fault.ts';
-import { writeProject } from '../document/file.ts';
-import { readProjectOnItsWay } from '../document/onItsWay.ts';
+import { readProjectOnItsWay, writeProject } from '../document/file.ts';
 import { documentStore, replace } from './document.ts';
 import { putSamples, samplesOf } from './samples.ts';
 

@@ -123,7 +123,7 @@ describe('[DOC-1] a project file', () => {
       (f) => f.frame.storeys.push(...Array.from({ length: 59 }, () => f.frame.storeys[1])),
       'frame.storeys wrong-count',
     ],
-    ['no storey', (f) => f.frame.storeys.splice(0), 'frame.storeys wrong-count'],
+    ['no storey', (f) => f.frame.storeys.splice(0), 'frame.storeys no-storey'],
     ['samples and a file', (f) => Object.assign(f.motions[0], { file: 'a.txt' }), 'motions[0] both-samples-and-file'],
     ['neither', (f) => delete (f.motions[0] as Partial<Good['motions'][0]>).acceleration, 'motions[0] no-samples'],
     ['left out without a reason', (f) => Object.assign(f.motions[0], { used: false }), 'motions[0].reason no-reason'],
