@@ -9,6 +9,7 @@ import { type PreparedFrame, prepareFrame } from './frame/prepare.ts';
 export { stepErrorOf } from './dynamics/evidence.ts';
 export { type PreparedFrame, prepareFrame } from './frame/prepare.ts';
 export { measuresOf } from './motion/measures.ts';
+export { readRecord } from './motion/read.ts';
 export { spectrumOf } from './spectrum/spectrum.ts';
 export type RunUnderWay = March;
 
