@@ -1,10 +1,13 @@
 import { digestOfSamples } from '../core/digest.ts';
 import { demoMotions } from '../core/motion/demoMotions.ts';
-import { STANDARD_GRAVITY } from '../core/units/constants.ts';
+import { fromDisplay } from '../core/units/quantities.ts';
 import type { OpenedProject } from './file.ts';
 import type { MotionEntry, StoreyRow } from './project.ts';
 
-/** The frame of an invented clinic, from the ground up: name, height [m], weight [kN], stiffness [kN/mm]. */
+/**
+ * The frame of an invented clinic, from the ground up: name, height [m], weight [kN], stiffness [kN/mm]. Imaging wanted its walls
+ * out of the way, and its storey shows it.
+ */
 const CLINIC: readonly (readonly [string, number, number, number])[] = [
   ['Entrance', 4.8, 6900, 640],
   ['Imaging', 4.2, 7250, 380],
@@ -18,6 +21,9 @@ const CLINIC: readonly (readonly [string, number, number, number])[] = [
 
 /** Factors by which the seven synthetic motions are used; chosen so that one storey is a little over the invented limit. */
 const FACTORS: readonly number[] = [1.85, 1.6, 2.9, 3.1, 2.7, 1.45, 1.75];
+
+/** Five first periods of the clinic, to the half second [s]. */
+const TAIL = 6.5;
 
 /**
  * The example that a first visit opens: a frame, a brief and motions of our own, all invented. Nothing in it describes a real
@@ -34,8 +40,8 @@ export function demoProject(): OpenedProject {
     ([name, height, weight, stiffness]): StoreyRow => ({
       name,
       height,
-      mass: (weight * 1e3) / STANDARD_GRAVITY,
-      stiffness: stiffness * 1e6,
+      mass: fromDisplay(weight, 'weight', 'si'),
+      stiffness: fromDisplay(stiffness, 'stiffness', 'si'),
       law: { kind: 'elastic' },
     }),
   );
@@ -44,7 +50,7 @@ export function demoProject(): OpenedProject {
       title: 'Riverside clinic, transverse frame',
       frame: { storeys, damping: { kind: 'rayleigh', modes: [1, 3], ratios: [0.05, 0.05] }, pDelta: true },
       motions,
-      analysis: { method: { kind: 'newmark', beta: 0.25, gamma: 0.5 }, step: 0.005, tail: 5, stopDrift: 0.1 },
+      analysis: { method: { kind: 'newmark', beta: 0.25, gamma: 0.5 }, step: 0.005, tail: TAIL, stopDrift: 0.1 },
       limits: {
         drift: 0.015,
         factor: 1,

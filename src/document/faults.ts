@@ -56,7 +56,8 @@ function outOfRange(issue: Extract<Issue, { code: 'too_small' | 'too_big' }>, wh
     if (where === 'frame.storeys' && bound === 1) {
       return fault('no-storey', where, 'there is no storey yet', 'Type the first storey');
     }
-    const what = where === 'frame.storeys' ? 'storeys' : issue.origin === 'array' ? 'entries' : 'characters';
+    if (issue.origin === 'string') return fault('wrong-count', where, 'is empty', 'Type a name');
+    const what = where === 'frame.storeys' ? 'storeys' : 'entries';
     const count = (value as { length: number }).length;
     const mend = `Make it ${side} ${bound} ${what}`;
     return fault('wrong-count', where, `has ${count} ${what}, must have ${side} ${bound}`, mend);
