@@ -4,6 +4,11 @@ import type { MotionMeasures } from '../../core/motion/reading.ts';
 
 const known = new WeakMap<Float64Array, MotionMeasures>();
 
+/** Those that were worked out already. */
+export function knownMeasures(samples: Float64Array): MotionMeasures | undefined {
+  return known.get(samples);
+}
+
 /** Measures of a motion as stored, worked out once: samples are never changed in place. */
 export function measuresOfSamples(samples: Float64Array, interval: number): MotionMeasures {
   const found = known.get(samples);

@@ -159,7 +159,8 @@ function PeakMark({
       <text
         x={left ? x - 8 : x + 8}
         y={Math.min(height - 6, Math.max(10, y + 3))}
-        className={`ink halo ${left ? 'end' : ''}`}
+        className={`halo ${left ? 'end' : ''}`}
+        style={{ fill: 'var(--ink)' }}
       >
         {text}
       </text>
