@@ -1,6 +1,7 @@
 import { digestOfSamples } from '../core/digest.ts';
+import { readRecord } from '../core/doors.ts';
+import { velocityOf } from '../core/motion/integrals.ts';
 import type { RecordAnswers } from '../core/motion/reading.ts';
-import { readRecord, velocityOf } from './borrowed.ts';
 import { excerptOf } from './excerpt.ts';
 import type { ReadAnswer } from './protocol.ts';
 import { thin, thinTimes } from './thin.ts';
@@ -23,7 +24,7 @@ export function readFile(file: string, bytes: Uint8Array, answers: RecordAnswers
       ? {
           time: thinTimes(motion.acceleration.length, motion.interval),
           acceleration: thin(motion.acceleration),
-          velocity: thin(velocityOf(motion)),
+          velocity: thin(velocityOf(motion.acceleration, motion.interval)),
         }
       : null,
   };
