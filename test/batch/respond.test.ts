@@ -1,6 +1,6 @@
 import { spawnSync } from 'node:child_process';
 import { existsSync, readdirSync, readFileSync } from 'node:fs';
-import { join } from 'node:path';
+import { join, resolve } from 'node:path';
 import { describe, expect, test } from 'vitest';
 import { BARE_RECORD, batch, folderWith, projectOf, TIMED_RECORD } from './support.ts';
 
@@ -151,5 +151,38 @@ describe('[BATCH-5] a project at fault ends with 1, all its faults listed, and w
     const { status, lines } = respond(folder);
     expect(status).toBe(1);
     expect(lines).toEqual(['out: file: is a file, where a folder is wanted. Name a folder that can be written to.']);
+  });
+});
+
+const RECORD = resolve('../shared/records/imperial-valley-1940-ns.txt');
+
+describe.runIf(existsSync(RECORD))('the five-storey frame under the 1940 record', () => {
+  // Chopra, Dynamics of Structures, section 13.2.6: five floors of 100 kip, five storeys of 31.54 kip/in and 12 ft, 5 % in all
+  // modes. Printed 6.847 in, 73.278 and 35.217 kip, 2593.2 kip ft; tolerance 0.4 %: published checks, B5.
+  test('gives the published peaks', () => {
+    const [inch, kip] = [0.0254, 4448.2216152605];
+    const storeys = Array.from({ length: 5 }, (_, i) => ({
+      name: `Storey ${i + 1}`,
+      height: 144 * inch,
+      mass: (100 * kip) / 9.80665,
+      stiffness: (31.54 * kip) / inch,
+      law: { kind: 'elastic' },
+    }));
+    const project = projectOf({
+      frame: { storeys, damping: { kind: 'modal', ratios: [0.05] }, pDelta: false },
+      motions: [{ name: '1940', file: '1940.txt' }],
+      analysis: { method: { kind: 'newmark', beta: 0.25, gamma: 0.5 }, step: { parts: 8 } },
+    });
+    const folder = folderWith({ 'p.swaybook.json': project, '1940.txt': readFileSync(RECORD, 'utf8') });
+    expect(respond(folder).status).toBe(0);
+    const [run] = JSON.parse(read(folder, 'response.json')).runs;
+    const peaks = {
+      roof: run.floors[4].peakDisplacement / inch / 6.847,
+      base: run.base.peakShear / kip / 73.278,
+      top: run.storeys[4].peakShear / kip / 35.217,
+      overturning: run.base.peakOverturning / (12 * inch * kip) / 2593.2,
+    };
+    for (const share of Object.values(peaks)) expect(Math.abs(share - 1)).toBeLessThan(0.004);
+    expect(run.stepError).toBeLessThan(0.01);
   });
 });

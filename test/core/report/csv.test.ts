@@ -56,14 +56,17 @@ describe('[CSV-1] the text is that of RFC 4180', () => {
     expect(csvOf(table, COMMA)).toBe('"Name, first"\r\nplain\r\n"a ""b"""\r\n"two\r\nlines"\r\n\r\n');
   });
 
-  test('any words come back as they were, save the apostrophe before a formula', () => {
+  test('any words come back as they were, with an apostrophe before what would be run', () => {
     const words = fc.array(fc.tuple(fc.string({ unit: 'binary' }), fc.string()), { minLength: 1 });
+    const harmless = (text: string) =>
+      [...'=+-@\t\r\n＝＋－＠'].some((start) => text.startsWith(start)) ? `'${text}` : text;
     fc.assert(
       fc.property(words, fc.constantFrom(COMMA, SEMICOLON), (rows, options) => {
         const table = tableOf({ values: rows.map(([a]) => a) }, { key: 'b', values: rows.map(([, b]) => b) });
         const read = readCsv(csvOf(table, options), options.separator).slice(1);
-        expect(read.map((row) => row.map((cell) => cell.replace(/^'(?=[=+\-@\t\r\n＝＋－＠])/u, '')))).toEqual(rows);
+        expect(read).toEqual(rows.map((row) => row.map(harmless)));
       }),
+      { examples: [[[['', "'="]], COMMA]] },
     );
   });
 });
