@@ -15,7 +15,7 @@ test('opens with the demo computed, says nothing on the console and asks no othe
     if (protocol.startsWith('http') && origin !== baseURL) elsewhere.push(request.url());
   });
   await page.goto('/');
-  await expect(page.getByText(/^Storey \d+ governs: \d\.\d\d/)).toBeVisible();
+  await expect(page.getByText(/^Storey \d+ governs: \d\.\d\d of the limit$/)).toBeVisible();
   expect(said).toEqual([]);
   expect(elsewhere).toEqual([]);
 });

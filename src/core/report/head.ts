@@ -24,13 +24,13 @@ const BASE_UNITS: Readonly<Record<Quantity, string>> = {
 };
 
 /** Unit of a column's values as they are printed; empty for words and counts, `-` where there is none. */
-export function unitOfColumn({ quantity }: Column, system: TableSystem): string {
+function unitOfColumn({ quantity }: Column, system: TableSystem): string {
   if (quantity === 'text' || quantity === 'count') return '';
   return (system === 'base' ? BASE_UNITS[quantity] : unitOf(quantity, system)) || '-';
 }
 
 /** Name of a column's values: a weight is printed for the user and stands as a mass in coherent SI. */
-export function nameOfColumn({ name, quantity }: Column, system: TableSystem): string {
+function nameOfColumn({ name, quantity }: Column, system: TableSystem): string {
   return system === 'base' && quantity === 'weight' ? name.replace('Weight', 'Mass').replace('weight', 'mass') : name;
 }
 

@@ -4,15 +4,13 @@ import type { Storey } from '../frame/frame.ts';
 import { endingReason } from './ending.ts';
 import type { ReportRun, ReportSource } from './source.ts';
 
+const RESPONSE_FORMAT = 'swaybook-response';
+const RESPONSE_VERSION = 1;
+
 /**
  * The response file: plain SI numbers, ground up, under the keys of the project-file page. Null wherever the suite is not
  * complete; `ductility` arrives with storeys that yield and is absent for elastic ones.
  */
-export type ResponseFile = ReturnType<typeof responseOf>;
-
-const RESPONSE_FORMAT = 'swaybook-response';
-const RESPONSE_VERSION = 1;
-
 export function responseOf({ prepared, runs, envelope }: Pick<ReportSource, 'prepared' | 'runs' | 'envelope'>) {
   const { frame, modes } = prepared;
   const at = (statistic: Statistic | null, i: number) => spread(statistic, i, envelope.motions);
