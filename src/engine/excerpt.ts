@@ -8,7 +8,7 @@ export interface ExcerptLine {
 }
 
 const FIRST = 40;
-const AROUND = 3;
+const AROUND = 12;
 const MOST = 400;
 /** A file without line ends would otherwise be one line of megabytes. */
 const LONGEST = 400;

@@ -1,6 +1,6 @@
 import type { Analysis, Run, Want } from '../core/dynamics/run.ts';
 import type { Frame } from '../core/frame/frame.ts';
-import type { RecordAnswers, RecordReading } from '../core/motion/reading.ts';
+import type { MotionMeasures, RecordAnswers, RecordReading } from '../core/motion/reading.ts';
 
 /**
  * What crosses between the page and a worker: types only, plain data and transferred buffers. A job is one motion or one
@@ -51,8 +51,17 @@ export interface ReadAnswer {
   /** The raw text as lines for the dialog: the first lines and those around each fault, with their numbers. */
   readonly excerpt: readonly { readonly line: number; readonly text: string }[];
   readonly lines: number;
-  /** Acceleration [m/s2] and velocity [m/s] thinned for drawing, pairs of smallest and largest; null without interval or unit. */
+  /** Measures of `reading.motion`; null while there is none. */
+  readonly measures: MotionMeasures | null;
+  /**
+   * Acceleration [m/s2] and velocity [m/s] thinned for drawing, pairs of smallest and largest, as far as they were read; null
+   * without interval or unit.
+   */
   readonly preview: {
+    /** Time of the last sample of the whole record [s]. */
+    readonly end: number;
+    /** Time of the first sample that could not be read [s]; null where all were. */
+    readonly stopsAt: number | null;
     readonly time: Float64Array;
     readonly acceleration: Float64Array;
     readonly velocity: Float64Array;

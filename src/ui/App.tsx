@@ -1,4 +1,4 @@
-import { lazy, useEffect, useState } from 'react';
+import { lazy, useCallback, useEffect, useState } from 'react';
 
 import { useSession } from '../state/session.ts';
 import { appKey } from './appKeys.ts';
@@ -6,10 +6,10 @@ import { Boundary } from './controls/Boundary.tsx';
 import { Cautions } from './foot/Cautions.tsx';
 import { Evidence } from './foot/Evidence.tsx';
 import { Toast } from './foot/Toast.tsx';
+import { FileDrop } from './motions/import/FileDrop.tsx';
 import { SheetScreen } from './sheet/SheetScreen.tsx';
-import { followProjectDrops } from './top/dropProject.ts';
 import { openExample } from './top/example.ts';
-import { pickProject, type Refused, saveProject } from './top/files.ts';
+import { openFile, pickProject, type Refused, saveProject } from './top/files.ts';
 import { RefusedDialog } from './top/RefusedDialog.tsx';
 import { TopBar } from './top/TopBar.tsx';
 import './tokens.css';
@@ -28,13 +28,13 @@ export function App() {
   const theme = useSession((state) => state.theme);
   const [refused, setRefused] = useState<Refused | null>(null);
   const open = () => pickProject(setRefused);
+  const openDropped = useCallback((file: File) => void openFile(file, setRefused), []);
   const save = () => saveProject(setRefused);
 
   useEffect(() => {
     if (theme === 'system') delete document.documentElement.dataset.theme;
     else document.documentElement.dataset.theme = theme;
   }, [theme]);
-  useEffect(() => followProjectDrops(setRefused), []);
   useEffect(() => {
     const onKeyDown = (event: KeyboardEvent) =>
       appKey(event, { open: () => pickProject(setRefused), save: () => saveProject(setRefused) });
@@ -61,6 +61,7 @@ export function App() {
         <Cautions />
       </footer>
       <Toast />
+      <FileDrop openProject={openDropped} />
       <Boundary part="The dialogs">
         <Dialogs />
       </Boundary>

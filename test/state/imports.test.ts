@@ -28,7 +28,7 @@ function answerOf(name: string, acceleration: Float64Array | null): ReadAnswer {
     motion: acceleration ? { name, interval: 0.02, acceleration, origin: { file: `${name}.txt` } } : null,
   };
   const samples = acceleration ? digestOfSamples(acceleration) : null;
-  return { reading, samples, excerpt: [], lines: 0, preview: null };
+  return { reading, samples, excerpt: [], lines: 0, measures: null, preview: null };
 }
 
 beforeEach(() => restore(start));

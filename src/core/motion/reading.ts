@@ -23,6 +23,10 @@ export interface RecordFault extends Fault {
   /** Stable within one file, e.g. `line-418-value-3` or `count`. */
   readonly id: string;
   readonly line: number | null;
+  /** Columns of that line [from, to) that are at fault; absent where it is the whole line. */
+  readonly span?: readonly [number, number];
+  /** What helps to judge it, beside the mend: which sample, at what time. */
+  readonly detail?: string;
   readonly choices: readonly {
     readonly id: string;
     readonly label: string;

@@ -6,6 +6,9 @@ const AnalysisDialog = lazy(() =>
   import('./AnalysisDialog.tsx').then((module) => ({ default: module.AnalysisDialog })),
 );
 const TablesDialog = lazy(() => import('./TablesDialog.tsx').then((module) => ({ default: module.TablesDialog })));
+const ImportDialog = lazy(() =>
+  import('../motions/ImportDialog.tsx').then((module) => ({ default: module.ImportDialog })),
+);
 const KeysDialog = lazy(() => import('./KeysDialog.tsx').then((module) => ({ default: module.KeysDialog })));
 
 const close = () => setSession({ dialog: 'none' });
@@ -16,6 +19,7 @@ export function Dialogs() {
   return (
     <Suspense fallback={null}>
       {dialog === 'analysis' && <AnalysisDialog onClose={close} />}
+      {dialog === 'import' && <ImportDialog onClose={close} />}
       {dialog === 'tables' && <TablesDialog onClose={close} />}
       {dialog === 'keys' && <KeysDialog onClose={close} />}
     </Suspense>
