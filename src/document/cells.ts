@@ -1,4 +1,4 @@
-import { z } from 'zod';
+import * as z from 'zod/mini';
 import type { Fault } from '../core/fault.ts';
 import { crossChecks } from './crossChecks.ts';
 import { faultsOf } from './faults.ts';

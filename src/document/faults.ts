@@ -1,8 +1,8 @@
-import type { z } from 'zod';
+import type * as z from 'zod/mini';
 import type { Fault } from '../core/fault.ts';
 
 /** All that a schema found wrong, as faults with place and mend. `from` is the object that was checked, `at` where it stands. */
-export function faultsOf(error: z.ZodError, from: unknown, at = ''): Fault[] {
+export function faultsOf(error: z.core.$ZodError, from: unknown, at = ''): Fault[] {
   return error.issues.flatMap((issue) => faultsOfIssue(issue, from, at));
 }
 

@@ -1,4 +1,4 @@
-import { z } from 'zod';
+import * as z from 'zod/mini';
 import type { StepChoice } from '../core/dynamics/run.ts';
 import { ACCELERATION_UNITS } from '../core/motion/motion.ts';
 import { MAX_STOREYS, PROJECT_FORMAT } from './project.ts';
@@ -9,11 +9,11 @@ import { objectOf } from './raw.ts';
  * faults. What one key alone cannot tell (a mode that is not there, two motions of one name) stands in crossChecks.ts; what a
  * later version brings is in shape here and refused by notYet.ts.
  */
-const above0 = z.number().gt(0);
-const from0 = z.number().gte(0);
-const ratio = z.number().gte(0).lt(1);
-const hardening = z.number().gte(0).lt(1);
-const modeNumber = z.int().gte(1);
+const above0 = z.number().check(z.gt(0));
+const from0 = z.number().check(z.gte(0));
+const ratio = z.number().check(z.gte(0), z.lt(1));
+const hardening = z.number().check(z.gte(0), z.lt(1));
+const modeNumber = z.int().check(z.gte(1));
 
 const law = z.discriminatedUnion('kind', [
   z.strictObject({ kind: z.literal('elastic') }),
@@ -23,11 +23,11 @@ const law = z.discriminatedUnion('kind', [
     kind: z.literal('bouc-wen'),
     strength: above0,
     hardening,
-    exponent: z.number().gte(1),
-    beta: z.number().gte(0.5),
+    exponent: z.number().check(z.gte(1)),
+    beta: z.number().check(z.gte(0.5)),
     gamma: z.number(),
   }),
-  z.strictObject({ kind: z.literal('flag'), strength: above0, hardening, ratio: z.number().gte(0).lte(1) }),
+  z.strictObject({ kind: z.literal('flag'), strength: above0, hardening, ratio: z.number().check(z.gte(0), z.lte(1)) }),
 ]);
 
 const storey = z.strictObject({
@@ -36,9 +36,9 @@ const storey = z.strictObject({
   mass: above0,
   stiffness: above0,
   law,
-  gravity: from0.optional(),
-  damper: z.strictObject({ coefficient: from0, exponent: z.number().gt(0) }).optional(),
-  role: z.enum(['storey', 'isolator']).optional(),
+  gravity: z.optional(from0),
+  damper: z.optional(z.strictObject({ coefficient: from0, exponent: above0 })),
+  role: z.optional(z.enum(['storey', 'isolator'])),
 });
 
 const damping = z.discriminatedUnion('kind', [
@@ -47,39 +47,38 @@ const damping = z.discriminatedUnion('kind', [
     kind: z.literal('rayleigh'),
     modes: z.tuple([modeNumber, modeNumber]),
     ratios: z.tuple([ratio, ratio]),
-    stiffness: z.enum(['initial', 'tangent']).optional(),
+    stiffness: z.optional(z.enum(['initial', 'tangent'])),
   }),
-  z.strictObject({ kind: z.literal('modal'), ratios: z.array(ratio).min(1) }),
+  z.strictObject({ kind: z.literal('modal'), ratios: z.array(ratio).check(z.minLength(1)) }),
   z.strictObject({ kind: z.literal('stiffness-proportional'), mode: modeNumber, ratio }),
 ]);
 
 export const frameSchema = z.strictObject({
-  storeys: z.array(storey).min(1).max(MAX_STOREYS),
+  storeys: z.array(storey).check(z.minLength(1), z.maxLength(MAX_STOREYS)),
   damping,
   pDelta: z.boolean(),
 });
 
 const method = z.discriminatedUnion('kind', [
-  z.strictObject({ kind: z.literal('newmark'), beta: from0, gamma: z.number().gte(0.5) }),
-  z.strictObject({ kind: z.literal('generalized-alpha'), spectralRadius: z.number().gte(0).lte(1) }),
+  z.strictObject({ kind: z.literal('newmark'), beta: from0, gamma: z.number().check(z.gte(0.5)) }),
+  z.strictObject({ kind: z.literal('generalized-alpha'), spectralRadius: z.number().check(z.gte(0), z.lte(1)) }),
   z.strictObject({
     kind: z.literal('hht'),
-    alpha: z
-      .number()
-      .gte(-1 / 3)
-      .lte(0),
+    alpha: z.number().check(z.gte(-1 / 3), z.lte(0)),
   }),
   z.strictObject({ kind: z.literal('central-difference') }),
 ]);
 
-const parts = z.strictObject({ parts: z.int().gte(1) });
+const parts = z.strictObject({ parts: z.int().check(z.gte(1)) });
 
 /** By hand and not as a union, so that the fault names the part at fault. */
-const step = z.custom<StepChoice>().superRefine((value: unknown, context) => {
-  if (value === 'auto') return;
-  const { error } = (objectOf(value) === null ? above0 : parts).safeParse(value);
-  for (const issue of error?.issues ?? []) context.addIssue({ ...issue });
-});
+const step = z.custom<StepChoice>().check(
+  z.superRefine((value: unknown, context) => {
+    if (value === 'auto') return;
+    const { error } = (objectOf(value) === null ? above0 : parts).safeParse(value);
+    for (const issue of error?.issues ?? []) context.addIssue({ ...issue });
+  }),
+);
 
 export const analysisSchema = z.strictObject({
   method,
@@ -90,43 +89,43 @@ export const analysisSchema = z.strictObject({
 
 export const limitsSchema = z.strictObject({
   drift: above0,
-  measure: z.enum(['mean', 'median', 'max']).optional(),
+  measure: z.optional(z.enum(['mean', 'median', 'max'])),
   factor: above0,
   source: z.string(),
 });
 
 const originSchema = z.strictObject({
-  file: z.string().optional(),
-  digest: z.string().optional(),
-  layout: z.string().optional(),
-  unit: z.enum(ACCELERATION_UNITS).optional(),
-  unitFrom: z.enum(['file', 'answer']).optional(),
-  interval: above0.optional(),
-  intervalFrom: z.enum(['file', 'answer']).optional(),
-  event: z.string().optional(),
-  station: z.string().optional(),
-  component: z.string().optional(),
-  mends: z.array(z.strictObject({ line: z.int(), was: z.string(), is: z.string(), why: z.string() })).optional(),
+  file: z.optional(z.string()),
+  digest: z.optional(z.string()),
+  layout: z.optional(z.string()),
+  unit: z.optional(z.enum(ACCELERATION_UNITS)),
+  unitFrom: z.optional(z.enum(['file', 'answer'])),
+  interval: z.optional(above0),
+  intervalFrom: z.optional(z.enum(['file', 'answer'])),
+  event: z.optional(z.string()),
+  station: z.optional(z.string()),
+  component: z.optional(z.string()),
+  mends: z.optional(z.array(z.strictObject({ line: z.int(), was: z.string(), is: z.string(), why: z.string() }))),
 });
 
-const notZero = z.number().refine((value) => value !== 0, { error: 'is 0, must be another number' });
+const notZero = z.number().check(z.refine((value) => value !== 0, { error: 'is 0, must be another number' }));
 
 /** What the file and the document hold alike of a motion. */
 export const motionUse = {
-  name: z.string().min(1),
+  name: z.string().check(z.minLength(1)),
   scale: notZero,
   used: z.boolean(),
-  reason: z.string().optional(),
+  reason: z.optional(z.string()),
 };
 
 const motion = z.strictObject({
   ...motionUse,
-  interval: above0.optional(),
+  interval: z.optional(above0),
   /** Checked by motionSource.ts: a million samples have one fault and not a million. */
-  acceleration: z.custom<readonly number[]>(() => true).optional(),
-  file: z.string().min(1).optional(),
-  unit: z.enum(ACCELERATION_UNITS).optional(),
-  origin: originSchema.optional(),
+  acceleration: z.optional(z.custom<readonly number[]>(() => true)),
+  file: z.optional(z.string().check(z.minLength(1))),
+  unit: z.optional(z.enum(ACCELERATION_UNITS)),
+  origin: z.optional(originSchema),
 });
 
 export const projectSchema = z.strictObject({
