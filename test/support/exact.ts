@@ -36,7 +36,7 @@ export function exactDisplacements(
 }
 
 /** Rows for q and v of exp(A h), A of the state (q, v, p, s) with q'' + 2 z w q' + w^2 q = p + s t, by scaling and squaring of a series. */
-function exponential(w: number, z: number, h: number): number[] {
+export function exponential(w: number, z: number, h: number): number[] {
   const a = [0, 1, 0, 0, -w * w, -2 * z * w, 1, 0, 0, 0, 0, 1, 0, 0, 0, 0];
   const squarings = Math.max(0, Math.ceil(Math.log2(Math.max(w * h, 1e-3))) + 6);
   const scaled = a.map((x) => (x * h) / 2 ** squarings);
