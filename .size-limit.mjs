@@ -27,9 +27,9 @@ if (first.size === 0) throw new Error('dist/.vite/manifest.json names no entry')
 
 export default [
   {
-    name: 'first view, scripts (gzip)',
+    name: 'first view, scripts (brotli)',
     path: scripts.map((name) => `dist/${name}`),
     limit: '180 kB',
-    gzip: true,
+    brotli: true,
   },
 ];
