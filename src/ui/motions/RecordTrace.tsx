@@ -61,7 +61,7 @@ export const RecordTrace = memo(function RecordTrace(props: RecordTraceProps) {
           <g key={tick}>
             <path d={`M0 ${y(tick)}H${across}`} stroke={tick === 0 ? 'var(--rule)' : 'var(--hair)'} />
             <text x="-6" y={y(tick) + 4} className="end">
-              {unit.printTick(tick, tick === 0 ? 0 : ticks.decimals)}
+              {tick === 0 ? '0' : unit.printTick(tick, ticks.decimals)}
             </text>
           </g>
         ))}

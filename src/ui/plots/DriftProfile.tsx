@@ -10,7 +10,7 @@ import { Plot } from './Plot.tsx';
 import type { PlotSpec } from './plotly.ts';
 import { KeyLine, plotSize, SquareFrame, type SquareLayout } from './SquareFrame.tsx';
 import { axis, baseLayout, LIMIT_DASHES, type Size } from './template.ts';
-import { ticksBetween } from './ticks.ts';
+import { ticksBetween, tickWords } from './ticks.ts';
 import type { Tokens } from './tokens.ts';
 
 export interface DriftProfileProps {
@@ -122,10 +122,8 @@ function profilePlot(
     data,
     layout: {
       ...baseLayout(tokens, size),
-      xaxis: axis(tokens, [0, end], along, (tick) => ratio.printTick(tick, along.decimals)),
-      yaxis: axis(tokens, [0, 1.01 * upward[upward.length - 1]], ticks, (tick) =>
-        length.printTick(tick, ticks.decimals),
-      ),
+      xaxis: axis(tokens, [0, end], along, tickWords(ratio, along)),
+      yaxis: axis(tokens, [0, 1.01 * upward[upward.length - 1]], ticks, tickWords(length, ticks)),
       shapes: [
         {
           type: 'line',

@@ -12,7 +12,7 @@ import type { PlotSpec } from './plotly.ts';
 import { KeyLine, plotSize, SquareFrame, type SquareLayout } from './SquareFrame.tsx';
 import { axis, baseLayout, LIMIT_DASHES, MARGIN, type Size } from './template.ts';
 import { thinnedPath } from './thin.ts';
-import { ticksBetween } from './ticks.ts';
+import { ticksBetween, tickWords } from './ticks.ts';
 import type { Tokens } from './tokens.ts';
 import type { ShownRun } from './useShownRun.ts';
 
@@ -130,8 +130,8 @@ function forcePlot(loop: Loop, axes: Axes, tokens: Tokens): PlotSpec {
     ],
     layout: {
       ...baseLayout(tokens, size),
-      xaxis: axis(tokens, [-endX, endX], along, (tick) => drift.printTick(tick, along.decimals)),
-      yaxis: axis(tokens, [-endY, endY], upward, (tick) => force.printTick(tick, upward.decimals)),
+      xaxis: axis(tokens, [-endX, endX], along, tickWords(drift, along)),
+      yaxis: axis(tokens, [-endY, endY], upward, tickWords(force, upward)),
       shapes:
         limit < endX
           ? [limit, -limit].map((at) => ({
@@ -181,9 +181,11 @@ function LoopCursor({ loop, axes }: { readonly loop: Loop; readonly axes: Axes }
         dot.current?.setAttribute('transform', `translate(${x.toFixed(1)} ${y.toFixed(1)})`);
         const text = words.current;
         if (text === null) return;
+        // A storey's line rises to the right: free room is above it at its right end, and below it elsewhere.
         const left = x > axes.size.width - 150;
+        const below = Math.min(axes.size.height - MARGIN.b - 4, y + 16);
         text.setAttribute('x', (left ? x - 8 : x + 8).toFixed(1));
-        text.setAttribute('y', Math.min(axes.size.height - MARGIN.b - 4, y + 16).toFixed(1));
+        text.setAttribute('y', (left && y > MARGIN.t + 20 ? y - 8 : below).toFixed(1));
         text.setAttribute('text-anchor', left ? 'end' : 'start');
         const force = axes.force.decimals === 0 ? 0 : 1;
         text.textContent = `${axes.drift.print(drift, axes.drift.decimals)} ${axes.drift.unit}, ${axes.force.print(shear, force)} ${axes.force.unit}`;

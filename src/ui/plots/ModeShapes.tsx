@@ -10,7 +10,7 @@ import { Plot } from './Plot.tsx';
 import type { PlotSpec } from './plotly.ts';
 import { plotSize, SquareFrame, type SquareLayout } from './SquareFrame.tsx';
 import { axis, baseLayout, type Size } from './template.ts';
-import { ticksBetween } from './ticks.ts';
+import { ticksBetween, tickWords } from './ticks.ts';
 import type { Tokens } from './tokens.ts';
 
 export interface ModeShapesProps {
@@ -67,6 +67,7 @@ function modesPlot(
   const base = baseLayout(tokens, size, { b: 38 });
   // Each shape swings by 1 about a place of its own, 2.4 from the next.
   const place = (i: number) => 2.4 * i;
+  const aside = shown.length === 1 ? 2.45 : 1.25;
   const ticks = ticksBetween(0, top, 5);
   const dot = y.length > 30 ? 2.5 : 5;
   return {
@@ -92,7 +93,7 @@ function modesPlot(
       xaxis: {
         ...axis(
           tokens,
-          [-1.25, place(shown.length - 1) + 1.25],
+          [-aside, place(shown.length - 1) + aside],
           { at: shown.map((_, i) => place(i)), decimals: 0 },
           null,
         ),
@@ -107,7 +108,7 @@ function modesPlot(
         ),
       },
       yaxis: {
-        ...axis(tokens, [0, 1.02 * top], ticks, (tick) => unit.printTick(tick, ticks.decimals)),
+        ...axis(tokens, [0, 1.02 * top], ticks, tickWords(unit, ticks)),
         zerolinecolor: tokens.ink3,
       },
     },

@@ -1,8 +1,15 @@
+import type { AxisUnit } from '../../core/units/axisUnit.ts';
+
 /** Where the lines and numbers of an axis stand, in the units of the axis. */
 export interface Ticks {
   readonly at: readonly number[];
   /** Decimals that all of them need. */
   readonly decimals: number;
+}
+
+/** The words of a number of an axis: zero is 0. */
+export function tickWords(unit: AxisUnit, { decimals }: Ticks): (tick: number) => string {
+  return (tick) => unit.printTick(tick, tick === 0 ? 0 : decimals);
 }
 
 const NICE = [1, 2, 5, 10];

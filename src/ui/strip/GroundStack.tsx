@@ -12,7 +12,7 @@ import { useTokens } from '../plots/tokens.ts';
 import { useNarrow } from '../plots/useNarrow.ts';
 import { useShownRun } from '../plots/useShownRun.ts';
 import { useSize } from '../plots/useSize.ts';
-import { stackGeometry } from './geometry.ts';
+import { type Band, stackGeometry } from './geometry.ts';
 import { MotionStrip } from './MotionStrip.tsx';
 import { Playing } from './Playing.tsx';
 import { contentOf, valueAt } from './panelContent.ts';
@@ -127,7 +127,11 @@ export function GroundStack() {
       style={{ height: narrow ? geometry.height : undefined }}
     >
       {axis.lastSample < scale.range[1] && axis.entry !== null && (
-        <FreeVibration geometry={geometry} x={Math.max(0, scale.x(axis.lastSample))} />
+        <FreeVibration
+          geometry={geometry}
+          panels={shown === null ? [] : panels}
+          x={Math.max(0, scale.x(axis.lastSample))}
+        />
       )}
       <TimeCursor axisX={axisX} scale={scale} height={bottom} keys={keys} />
       <div className="time-label" style={{ top: strip.label }}>
@@ -188,10 +192,13 @@ function factorWords(scale: unknown): string {
 
 /** What comes after the last sample, shaded through all panels. */
 function FreeVibration({
-  geometry: { axisX, axisWidth, strip, panels },
+  geometry: { axisX, axisWidth, strip },
+  panels,
   x,
 }: {
   readonly geometry: ReturnType<typeof stackGeometry>;
+  /** Those that show a history. */
+  readonly panels: readonly Band[];
   readonly x: number;
 }) {
   if (x >= axisWidth) return null;

@@ -4,7 +4,7 @@ import { axisUnitOf } from '../../core/units/axisUnit.ts';
 import { printQuantity, type System } from '../../core/units/quantities.ts';
 import { useMeasures } from '../motions/measures.ts';
 import { thinned } from '../plots/thin.ts';
-import { evenAxis } from '../plots/ticks.ts';
+import { evenAxis, tickWords } from '../plots/ticks.ts';
 import type { Band } from './geometry.ts';
 import type { TimeScale } from './scale.ts';
 import type { TimeAxisFacts } from './useTimeAxis.ts';
@@ -33,6 +33,7 @@ export const MotionStrip = memo(function MotionStrip({ axis, band, scale, system
     facts === null || samples === null || entry === null
       ? 0
       : factor * samples[Math.round(facts.peakAccelerationTime / entry.interval)];
+  const words = tickWords(unit, even.ticks);
   const middle = band.height / 2;
   const y = (value: number) => middle - (unit.onAxis(value) / even.end) * middle;
   const line = samples === null || entry === null ? '' : tracePath(samples, entry.interval, factor, scale, y);
@@ -54,13 +55,15 @@ export const MotionStrip = memo(function MotionStrip({ axis, band, scale, system
         return (
           <g key={tick}>
             <path d={`M0 ${Math.round(at) + 0.5}H${width}`} className={tick === 0 ? 's-rule' : 's-hair'} />
-            <text x="-6" y={at + 4} className="end">
-              {unit.printTick(tick, tick === 0 ? 0 : even.ticks.decimals)}
-            </text>
+            {facts !== null && (
+              <text x="-6" y={at + 4} className="end">
+                {words(tick)}
+              </text>
+            )}
           </g>
         );
       })}
-      <svg width={width} height={band.height} overflow="hidden" aria-hidden="true">
+      <svg width={width} height={band.height} style={{ overflow: 'hidden' }} aria-hidden="true">
         {litLine !== '' && <path d={litLine} className="s-suite" strokeWidth="0.8" strokeLinejoin="round" />}
         <path d={line} className="s-ink" strokeWidth="0.9" strokeLinejoin="round" />
         {facts !== null && <StrongMotion facts={facts} scale={scale} y={band.height - 4} />}
@@ -75,7 +78,7 @@ export const MotionStrip = memo(function MotionStrip({ axis, band, scale, system
           text={`peak ${printQuantity(peak, 'acceleration', system)} ${unit.unit}`}
         />
       )}
-      {free < width - 76 && (
+      {entry !== null && free < width - 76 && (
         <text x={free + 6} y="12">
           free vibration
         </text>

@@ -1,6 +1,6 @@
 import { memo, useLayoutEffect, useMemo, useRef } from 'react';
 import type { Table } from '../../core/report/table.ts';
-import { printQuantity, type System } from '../../core/units/quantities.ts';
+import { printQuantity, type Quantity, type System } from '../../core/units/quantities.ts';
 import { chooseTimePanel } from '../plots/choice.ts';
 import { PanelMenu } from '../plots/PanelMenu.tsx';
 import { Plot } from '../plots/Plot.tsx';
@@ -135,9 +135,19 @@ function apartWords(share: number, system: System): string {
   return `${printQuantity(share, 'percent', system, share > 0 && share < 1e-4 ? 3 : 2)} % at most`;
 }
 
+/** A history shows more figures than a peak: its small values would all read 0. */
+const TABLE_DECIMALS: Readonly<Partial<Record<Quantity, number>>> = {
+  percent: 4,
+  acceleration: 4,
+  displacement: 2,
+  force: 1,
+  energy: 2,
+};
+
 function historyTable({ kind, name, place, quantity, values, interval, stack }: PanelContent, motion: string): Table {
   const energy = kind === 'energy';
-  const own = { key: 'value', name: energy ? 'Input' : name, quantity, values: Array.from(values) };
+  const decimals = TABLE_DECIMALS[quantity];
+  const own = { key: 'value', name: energy ? 'Input' : name, quantity, decimals, values: Array.from(values) };
   const below = (i: number, j: number) => (i === 0 ? 0 : stack[i - 1].sum[j]);
   return {
     id: `${kind}-history`,
@@ -155,6 +165,7 @@ function historyTable({ kind, name, place, quantity, values, interval, stack }: 
         key: part,
         name: `${ENERGY_NAMES[part].slice(0, 1).toUpperCase()}${ENERGY_NAMES[part].slice(1)}`,
         quantity,
+        decimals,
         values: Array.from(sum, (value, j) => value - below(i, j)),
       })),
     ],

@@ -20,6 +20,9 @@ export interface StackGeometry {
 export const LABELS = 168;
 const AXIS_X = 196;
 
+/** Room under the play button that a second row of letters may take [px]. */
+const SPARE = 4;
+
 /** Measured at 1600 x 1000 and 1024 x 1000 px; what a window is taller by is shared out. */
 const WIDE = { total: 384, strip: 88, panels: [78, 64, 78], gaps: [10, 14, 12, 12], shares: [0.28, 0.28, 0.2, 0.24] };
 const NARROW = { total: 214, strip: 84, panels: [78], gaps: [11, 14], shares: [0.5, 0.5] };
@@ -39,11 +42,11 @@ export function stackGeometry(width: number, height: number, narrow: boolean, ch
   // A second row of letters needs room that the strip's band does not have.
   const rows = Math.max(0, chipRows - 1) * 24;
   let y = form.gaps[0];
-  const strip: Band = { label: y - 4, top: y, height: form.strip + share(0) + Math.max(0, rows - share(0) - 12) };
+  const strip: Band = { label: y - 4, top: y, height: form.strip + share(0) + Math.max(0, rows - share(0) - SPARE) };
   y += strip.height;
   const panels = form.panels.map((own, i): Band => {
     const top = y + form.gaps[i + 1];
-    const shrink = i === 0 ? Math.max(0, rows - share(0) - 12) : 0;
+    const shrink = i === 0 ? Math.max(0, rows - share(0) - SPARE) : 0;
     const band = { label: top - 2, top, height: own + share(i + 1) - shrink };
     y = top + band.height;
     return band;

@@ -4,7 +4,7 @@ import type { System } from '../../core/units/quantities.ts';
 import type { PlotSpec } from '../plots/plotly.ts';
 import { axis, baseLayout, LIMIT_DASHES } from '../plots/template.ts';
 import { thinned } from '../plots/thin.ts';
-import { evenAxis, risingAxis, type Ticks } from '../plots/ticks.ts';
+import { evenAxis, risingAxis, tickWords } from '../plots/ticks.ts';
 import type { Tokens } from '../plots/tokens.ts';
 import { type EnergyPart, type PanelContent, valueAt } from './panelContent.ts';
 import type { TimeScale } from './scale.ts';
@@ -59,7 +59,7 @@ export function timePlot(props: TimePlotProps): PlotSpec {
     const tops = [content.values, ...content.stack.slice(-1).map(({ sum }) => sum)];
     const largest = Math.max(...tops.map((values) => values.reduce((most, value) => Math.max(most, value), 0)));
     const { end, ticks } = risingAxis(unit.onAxis(largest), 3);
-    const yaxis = axis(tokens, [0, end], ticks, printer(unit, ticks));
+    const yaxis = axis(tokens, [0, end], ticks, tickWords(unit, ticks));
     const { data, named } = layers(props, unit, height / end);
     return { still: true, data, layout: { ...layout, xaxis, yaxis, annotations: [...named, inputWord(props, unit)] } };
   }
@@ -67,7 +67,7 @@ export function timePlot(props: TimePlotProps): PlotSpec {
   const limit = props.limit === null ? null : unit.onAxis(props.limit);
   const drawn = limit !== null && limit <= FAR * peak ? limit : null;
   const { end, ticks } = evenAxis(Math.max(peak, drawn ?? 0));
-  const yaxis = axis(tokens, [-end, end], ticks, printer(unit, ticks));
+  const yaxis = axis(tokens, [-end, end], ticks, tickWords(unit, ticks));
   const line = trace(content.values, content.interval, scale, unit, {
     line: { color: tokens.ink, width: 1.2, simplify: false },
   });
@@ -146,11 +146,6 @@ export function namedLayers(props: TimePlotProps): ReadonlySet<EnergyPart> {
 
 function word(text: string, x: number, y: number, color: string, tokens: Tokens): Partial<Annotations> {
   return { x, y, text, showarrow: false, font: { family: tokens.sans, size: 11, color, weight: 600 } };
-}
-
-/** The numbers of an axis; zero is 0. */
-function printer(unit: AxisUnit, { decimals }: Ticks): (tick: number) => string {
-  return (tick) => unit.printTick(tick, tick === 0 ? 0 : decimals);
 }
 
 /** The input is named where its line ends. */
