@@ -84,12 +84,14 @@ function march(
   return Math.max(largest, largestFree(w, z, u, v));
 }
 
-/** Largest |u| in one period of free vibration from u, v: where the velocity is zero for the first time, or at once. */
+/** Largest |u| in one period of free vibration from u, v: where the velocity is first zero, or at the period's end if that is later. */
 function largestFree(w: number, z: number, u: number, v: number): number {
-  const wd = w * Math.sqrt(1 - z * z);
+  const root = Math.sqrt(1 - z * z);
+  const wd = w * root;
   // u(t) = e^(-z w t) (u cos wd t + b sin wd t), without slope where tan wd t = v / ((w^2 u + z w v) / wd).
   const b = (v + z * w * u) / wd;
   let phase = Math.atan2(v, (w * w * u + z * w * v) / wd);
   if (phase < 0) phase += Math.PI;
-  return Math.abs(Math.exp((-z * w * phase) / wd) * (u * Math.cos(phase) + b * Math.sin(phase)));
+  phase = Math.min(phase, 2 * Math.PI * root);
+  return Math.abs(Math.exp((-z / root) * phase) * (u * Math.cos(phase) + b * Math.sin(phase)));
 }

@@ -5,12 +5,12 @@ import { exponential } from '../../support/exact.ts';
 import { noise } from '../../support/frames.ts';
 
 /**
- * Largest |u| on a grid of at least 400 instants a period by the matrix exponential, to one period after the motion: falls short
- * of the true one by at most (pi / 400)^2 / 2 = 3.1e-5. Independent of the recursion under test.
+ * Largest |u| on a grid of at least 400 instants a period and 100 an interval by the matrix exponential, to one period after the
+ * motion: falls short of the true one by (pi / 400)^2 / 2 = 3.1e-5 or less. Independent of the recursion under test.
  */
 function onDenseGrid(acceleration: Float64Array, interval: number, z: number, period: number): number {
   const w = (2 * Math.PI) / period;
-  const parts = Math.max(1, Math.ceil((400 * interval) / period));
+  const parts = Math.max(100, Math.ceil((400 * interval) / period));
   const h = interval / parts;
   const e = exponential(w, z, h);
   const after = Math.ceil(period / interval);
@@ -53,7 +53,15 @@ describe('[SPC-1] the true largest value, between samples too, within 1e-4', () 
           expect(got / dense - 1).toBeLessThan(1e-4 + 3.2e-5);
         },
       ),
-      { numRuns: 600, endOnFailure: true },
+      {
+        numRuns: 600,
+        endOnFailure: true,
+        // Failed once: a damped cycle of seven periods; a first extreme later than one period after the motion.
+        examples: [
+          [[-0.13, 0, 0], -388, 0.99],
+          [[0, 0, -5, 0, 0, 5, 0, 0], 520, 0.99],
+        ],
+      },
     );
     for (const count of Object.values(seen)) expect(count).toBeGreaterThan(50);
   });
