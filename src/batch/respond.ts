@@ -1,8 +1,8 @@
 import { envelopeOf } from '../core/checks/envelope.ts';
+import { endingWords } from '../core/checks/verdict.ts';
 import { measuresOf, type PreparedFrame, startRun, stepErrorOf } from '../core/doors.ts';
 import type { Run, RunCase } from '../core/dynamics/run.ts';
 import { csvOf, PLAIN_CSV } from '../core/report/csv.ts';
-import { endingReason } from '../core/report/ending.ts';
 import { historiesTable } from '../core/report/histories.ts';
 import { responseOf } from '../core/report/response.ts';
 import type { ReportRun, ReportSource } from '../core/report/source.ts';
@@ -57,10 +57,7 @@ function answer(file: string, read: OpenedProject, asked: Case, folder: OutFolde
         );
       }
     }
-    if (run.ending !== null) {
-      const { time } = run.ending;
-      messages.push(`${file}: motion ${name}: ${endingReason(run.ending, frame.storeys)} at ${time.toFixed(3)} s`);
-    }
+    if (run.ending !== null) messages.push(`${file}: motion ${name}: did not finish: ${endingWords(run)}`);
     return { motion: name, run: { ...run, histories: null }, stepError: stepErrorAt(asked.prepared, runCase, run) };
   });
   const source = sourceOf(read, asked, runs);

@@ -1,7 +1,7 @@
 import type { Statistic } from '../checks/statistic.ts';
-import type { Run } from '../dynamics/run.ts';
+import { endingWords } from '../checks/verdict.ts';
+import type { Ending, Run } from '../dynamics/run.ts';
 import type { Storey } from '../frame/frame.ts';
-import { endingReason } from './ending.ts';
 import type { ReportRun, ReportSource } from './source.ts';
 
 const RESPONSE_FORMAT = 'swaybook-response';
@@ -61,7 +61,7 @@ function runOf({ motion, run, stepError }: ReportRun, storeys: readonly Storey[]
     step,
     steps,
     completed: ending === null,
-    ...(ending === null ? {} : { reason: reasonOf(ending, storeys) }),
+    ...(ending === null ? {} : { reason: reasonOf(run, ending) }),
     storeys: storeys.map((_, i) => ({
       peakDrift: answers.peakDrift[i],
       peakDriftRatio: answers.peakDriftRatio[i],
@@ -83,11 +83,11 @@ function runOf({ motion, run, stepError }: ReportRun, storeys: readonly Storey[]
 }
 
 /** Storeys are counted from 1 at the ground; null where no single one is to blame. */
-function reasonOf(ending: NonNullable<Run['ending']>, storeys: readonly Storey[]) {
+function reasonOf(run: Run, ending: Ending) {
   return {
     storey: ending.storey < 0 ? null : ending.storey + 1,
     time: ending.time,
-    why: endingReason(ending, storeys),
+    why: endingWords(run),
   };
 }
 

@@ -1,10 +1,9 @@
-import { endingReason } from '../ending.ts';
+import { endingWords } from '../../checks/verdict.ts';
 import type { ReportRun, ReportSource } from '../source.ts';
 import type { Cell, Column, Table } from '../table.ts';
 
 /** Energies at the end of each run, of relative motion, with the evidence that the step was small enough. */
-export function energyBalance({ prepared, runs }: ReportSource): Table {
-  const { storeys } = prepared.frame;
+export function energyBalance({ runs }: ReportSource): Table {
   const column = (key: string, name: string, quantity: Column['quantity'], of: (run: ReportRun) => Cell): Column => ({
     key,
     name,
@@ -26,9 +25,7 @@ export function energyBalance({ prepared, runs }: ReportSource): Table {
       column('step', 'Step', 'time', ({ run }) => run.step),
       column('steps', 'Steps', 'count', ({ run }) => run.steps),
       column('stepError', 'Step error', 'percent', ({ stepError }) => stepError),
-      column('ending', 'Ending', 'text', ({ run }) =>
-        run.ending === null ? 'completed' : endingReason(run.ending, storeys),
-      ),
+      column('ending', 'Ending', 'text', ({ run }) => (run.ending === null ? 'completed' : endingWords(run))),
     ],
   };
 }
