@@ -1,11 +1,11 @@
 import type { Limits } from '../core/checks/limits.ts';
 import { type PreparedFrame, prepareFrame } from '../core/doors.ts';
 import type { Analysis } from '../core/dynamics/run.ts';
-import { stabilityFault, stepOf } from '../core/dynamics/steps.ts';
-import type { Fault, Result } from '../core/fault.ts';
+import type { Result } from '../core/fault.ts';
 import type { Frame } from '../core/frame/frame.ts';
 import { cellFaults } from './cells.ts';
-import type { MotionEntry, Project } from './project.ts';
+import type { Project } from './project.ts';
+import { partFaults, stabilityFaults } from './stepFaults.ts';
 
 /** The document as plain numbers: what the calculation needs and nothing else. */
 export interface Case {
@@ -34,13 +34,14 @@ export interface Case {
 export function caseOf(project: Project): Result<Case> {
   const used = project.motions.filter((motion) => motion.used);
   const faults = cellFaults(project);
+  const analysis = project.analysis as Analysis;
+  if (!faults.some(({ where }) => where.startsWith('analysis'))) faults.push(...partFaults(used, analysis));
   if (faults.length > 0) return { ok: false, faults };
   // Without a fault every cell holds its number.
   const frame = project.frame as Frame;
-  const analysis = project.analysis as Analysis;
   const prepared = prepareFrame(frame);
   if (!prepared.ok) return prepared;
-  const wrong = stepFaults(used, analysis, prepared.value);
+  const wrong = stabilityFaults(used, analysis, prepared.value);
   if (wrong.length > 0) return { ok: false, faults: wrong };
   return {
     ok: true,
@@ -59,27 +60,4 @@ export function caseOf(project: Project): Result<Case> {
       leftOut: project.motions.filter((motion) => !motion.used).map(({ name }) => name),
     },
   };
-}
-
-/** Each fault of the step once, with the motions it comes from. */
-function stepFaults(motions: readonly MotionEntry[], analysis: Analysis, { modes }: PreparedFrame): Fault[] {
-  const faults = new Map<string, { fault: Fault; names: string[] }>();
-  const keep = (fault: Fault, name: string) => {
-    const known = faults.get(fault.message);
-    if (known) known.names.push(name);
-    else faults.set(fault.message, { fault, names: [name] });
-  };
-  for (const { name, interval } of motions) {
-    const step = stepOf(analysis.step, interval);
-    if (!step.ok) {
-      for (const fault of step.faults) keep(fault, name);
-      continue;
-    }
-    const unstable = stabilityFault(modes, analysis.method, step.value.size);
-    if (unstable) keep(unstable, name);
-  }
-  return Array.from(faults.values(), ({ fault, names }) => ({
-    ...fault,
-    message: names.length > 0 && motions.length > 1 ? `${fault.message} (${names.join(', ')})` : fault.message,
-  }));
 }

@@ -1,4 +1,5 @@
 import type { Fault } from '../core/fault.ts';
+import { proportionFaults } from './proportions.ts';
 import { listOf, objectOf } from './raw.ts';
 
 /**
@@ -14,6 +15,7 @@ export function crossChecks(raw: unknown): Fault[] {
     ...dampingFaults(objectOf(frame?.damping), storeys.length),
     ...storeys.flatMap((entry, i) => lawFaults(objectOf(objectOf(entry)?.law), `frame.storeys[${i}].law`)),
     ...storeys.flatMap((entry, i) => roleFaults(objectOf(entry), i)),
+    ...proportionFaults(storeys),
     ...motionFaults(listOf(project?.motions)),
   ];
 }
@@ -22,7 +24,7 @@ function dampingFaults(damping: Record<string, unknown> | null, storeys: number)
   if (damping === null || storeys === 0) return [];
   const faults: Fault[] = [];
   const exists = (mode: unknown, where: string) => {
-    if (typeof mode !== 'number' || !Number.isInteger(mode) || mode < 1 || mode <= storeys) return;
+    if (typeof mode !== 'number' || !Number.isSafeInteger(mode) || mode < 1 || mode <= storeys) return;
     faults.push({
       code: 'no-such-mode',
       where,

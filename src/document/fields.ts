@@ -1,4 +1,4 @@
-import type { Quantity } from '../core/units/quantities.ts';
+import { printQuantity, type Quantity, type System, unitOf } from '../core/units/quantities.ts';
 import type { Project, Typed } from './project.ts';
 
 /** What is known of one field that a user types into, by its path in the project file. */
@@ -6,165 +6,186 @@ export interface Field {
   readonly quantity: Quantity | 'text';
   /** "Storey 2, stiffness" */
   label(project: Project): string;
-  /** What it is and its usual range, in a few words. */
-  readonly hint: string;
+  /** What it is and its usual range, in a few words and in the units shown. */
+  hint(system: System): string;
 }
 
 interface Known {
   readonly pattern: RegExp;
   readonly quantity: Field['quantity'];
   readonly label: (project: Project, index: number) => string;
-  readonly hint: string;
+  readonly what: string;
+  /** Usual range [SI], and the decimals it is said with. Common practice for regular buildings, from memory. */
+  readonly usual?: readonly [from: number, to: number, decimals: number];
 }
 
 const storey = (what: string) => (_: Project, index: number) => `Storey ${index + 1}, ${what}`;
 const plain = (what: string) => () => what;
+const DAMPING = [0.02, 0.05, 0] as const;
 
-/** Every field that can be typed into. Usual ranges are common practice for regular buildings, from memory. */
+/** Every field that can be typed into. */
 const KNOWN: readonly Known[] = [
-  { pattern: /^title$/, quantity: 'text', label: plain('Title'), hint: 'job and frame' },
+  { pattern: /^title$/, quantity: 'text', label: plain('Title'), what: 'job and frame' },
   {
     pattern: /^frame\.storeys\[(\d+)\]\.name$/,
     quantity: 'text',
     label: storey('name'),
-    hint: 'what the storey is called',
+    what: 'what the storey is called',
   },
   {
     pattern: /^frame\.storeys\[(\d+)\]\.height$/,
     quantity: 'length',
     label: storey('height'),
-    hint: 'floor to floor, usually 2.5 to 6 m',
+    what: 'floor to floor',
+    usual: [2.5, 6, 1],
   },
   {
     pattern: /^frame\.storeys\[(\d+)\]\.mass$/,
     quantity: 'weight',
     label: storey('weight'),
-    hint: 'seismic weight of the floor on top of this storey',
+    what: 'seismic weight of the floor on top of this storey',
   },
   {
     pattern: /^frame\.storeys\[(\d+)\]\.stiffness$/,
     quantity: 'stiffness',
     label: storey('stiffness'),
-    hint: 'storey shear over storey drift',
+    what: 'storey shear over storey drift',
   },
   {
     pattern: /^frame\.storeys\[(\d+)\]\.gravity$/,
     quantity: 'force',
     label: storey('gravity load'),
-    hint: 'at this floor, for P-Delta; the weight where left empty',
+    what: 'at this floor, for P-Delta; the weight where left empty',
   },
   {
     pattern: /^frame\.damping\.ratios\[(\d+)\]$/,
     quantity: 'percent',
     label: (_, i) => `Damping ratio ${i + 1}`,
-    hint: 'share of critical, usually 2 to 5 %',
+    what: 'share of critical',
+    usual: DAMPING,
   },
   {
     pattern: /^frame\.damping\.modes\[(\d+)\]$/,
     quantity: 'count',
     label: (_, i) => `Damping, mode ${i + 1}`,
-    hint: 'number of a mode of this frame',
+    what: 'number of a mode of this frame',
   },
   {
     pattern: /^frame\.damping\.ratio$/,
     quantity: 'percent',
     label: plain('Damping ratio'),
-    hint: 'share of critical, usually 2 to 5 %',
+    what: 'share of critical',
+    usual: DAMPING,
   },
   {
     pattern: /^frame\.damping\.mode$/,
     quantity: 'count',
     label: plain('Damping, mode'),
-    hint: 'number of a mode of this frame',
+    what: 'number of a mode of this frame',
   },
   {
     pattern: /^motions\[(\d+)\]\.scale$/,
     quantity: 'ratio',
     label: (project, i) => `${project.motions[i]?.name ?? `Motion ${i + 1}`}, factor`,
-    hint: 'on the acceleration; any sign, not zero',
+    what: 'on the acceleration; any sign, not zero',
   },
   {
     pattern: /^motions\[(\d+)\]\.name$/,
     quantity: 'text',
     label: (_, i) => `Motion ${i + 1}, name`,
-    hint: 'unique in the project',
+    what: 'unique in the project',
   },
   {
     pattern: /^motions\[(\d+)\]\.reason$/,
     quantity: 'text',
     label: (_, i) => `Motion ${i + 1}, why it is left out`,
-    hint: 'asked for where a motion is left out',
+    what: 'asked for where a motion is left out',
   },
-  { pattern: /^analysis\.step$/, quantity: 'time', label: plain('Time step'), hint: 'a whole part of every interval' },
+  { pattern: /^analysis\.step$/, quantity: 'time', label: plain('Time step'), what: 'a whole part of every interval' },
   {
     pattern: /^analysis\.step\.parts$/,
     quantity: 'count',
     label: plain('Parts of the interval'),
-    hint: 'whole, from 1',
+    what: 'whole, from 1',
   },
   {
     pattern: /^analysis\.tail$/,
     quantity: 'time',
     label: plain('Free vibration after the record'),
-    hint: 'some periods show the residual drift',
+    what: 'some periods show the residual drift',
   },
   {
     pattern: /^analysis\.stopDrift$/,
     quantity: 'percent',
     label: plain('Drift at which a run is stopped'),
-    hint: 'yielding or P-Delta runs; usually 10 %',
+    what: 'a yielding or P-Delta run that passes it is stopped as collapsed',
+    usual: [0.1, 0.1, 0],
   },
   {
     pattern: /^analysis\.method\.beta$/,
     quantity: 'ratio',
     label: plain('Newmark beta'),
-    hint: '1/4 average, 1/6 linear acceleration',
+    what: '1/4 average, 1/6 linear acceleration',
   },
   {
     pattern: /^analysis\.method\.gamma$/,
     quantity: 'ratio',
     label: plain('Newmark gamma'),
-    hint: '1/2 keeps second order; more adds damping',
+    what: '1/2 keeps second order; more adds damping',
   },
   {
     pattern: /^analysis\.method\.spectralRadius$/,
     quantity: 'ratio',
     label: plain('Spectral radius'),
-    hint: '1 keeps high modes, 0 removes them',
+    what: '1 keeps high modes, 0 removes them',
   },
   {
     pattern: /^analysis\.method\.alpha$/,
     quantity: 'ratio',
     label: plain('HHT alpha'),
-    hint: '-1/3 to 0; more negative damps more',
+    what: '-1/3 to 0; more negative damps more',
   },
   {
     pattern: /^limits\.drift$/,
     quantity: 'percent',
     label: plain('Allowable storey drift'),
-    hint: 'from the code or the brief, usually 0.5 to 2.5 %',
+    what: 'from the code or the brief',
+    usual: [0.005, 0.025, 1],
   },
   {
     pattern: /^limits\.factor$/,
     quantity: 'ratio',
     label: plain('Factor on the computed drift'),
-    hint: '1 unless a clause compares another drift',
+    what: '1 unless a clause compares another drift',
   },
   {
     pattern: /^limits\.source$/,
     quantity: 'text',
     label: plain('Source of the limit'),
-    hint: 'clause, earthquake level and which drift it limits',
+    what: 'clause, earthquake level and which drift it limits',
   },
 ];
 
 /** @throws RangeError for a path that nobody types into */
 export function fieldOf(path: string): Field {
-  for (const { pattern, quantity, label, hint } of KNOWN) {
-    const match = pattern.exec(path);
-    if (match) return { quantity, hint, label: (project) => label(project, Number(match[1] ?? 0)) };
+  for (const known of KNOWN) {
+    const match = known.pattern.exec(path);
+    if (match === null) continue;
+    return {
+      quantity: known.quantity,
+      label: (project) => known.label(project, Number(match[1] ?? 0)),
+      hint: (system) => hintOf(known, system),
+    };
   }
   throw new RangeError(`fieldOf: ${path}, expected a field of the project file`);
+}
+
+/** "floor to floor, usually 2.5 to 6.0 m" */
+function hintOf({ what, usual, quantity }: Known, system: System): string {
+  if (usual === undefined || quantity === 'text') return what;
+  const [from, to, decimals] = usual;
+  const say = (value: number) => printQuantity(value, quantity, system, decimals);
+  return `${what}, usually ${from === to ? say(from) : `${say(from)} to ${say(to)}`} ${unitOf(quantity, system)}`;
 }
 
 /** The value at a path; null where there is none (an optional field left out). */

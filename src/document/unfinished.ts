@@ -41,7 +41,8 @@ export function refusedAsTyped(project: Project, faults: readonly Fault[]): Proj
     const value = readAt(project, where);
     const { quantity } = fieldOf(where);
     if (typeof value !== 'number' || quantity === 'text') continue;
-    const unit = quantity === 'ratio' ? '' : unitOf(quantity, 'si');
+    // A percentage behind a sign would be read as a change.
+    const unit = quantity === 'ratio' || quantity === 'percent' ? '' : unitOf(quantity, 'si');
     typed = writeAt(typed, where, `${printTyped(value, quantity, 'si')} ${unit}`.trim());
   }
   return typed;

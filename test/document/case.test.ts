@@ -1,3 +1,4 @@
+import fc from 'fast-check';
 import { describe, expect, test } from 'vitest';
 import { caseOf } from '../../src/document/case.ts';
 import {
@@ -103,6 +104,55 @@ describe('[DOC-4] the case of a document', () => {
     expect(faults(writeAt(project, 'frame.storeys[0].stiffness', 1e6))).toEqual([
       'frame.storeys[0].stiffness unstable-under-gravity',
     ]);
+  });
+});
+
+describe('[DOC-9] numbers that no building has', () => {
+  test('whatever numbers stand in the cells, there is a case or there are faults, never a crash', () => {
+    let [whole, refused] = [0, 0];
+    const power = fc.double({ min: -10, max: 22, noNaN: true }).map((exponent) => 10 ** exponent);
+    const plausible = fc.double({ min: 3, max: 9, noNaN: true }).map((exponent) => 10 ** exponent);
+    const row = fc.record({
+      height: fc.oneof({ weight: 9, arbitrary: fc.double({ min: 2, max: 9, noNaN: true }) }, power),
+      mass: fc.oneof({ weight: 9, arbitrary: plausible }, power),
+      stiffness: fc.oneof({ weight: 9, arbitrary: plausible }, power),
+    });
+    fc.assert(
+      fc.property(fc.array(row, { minLength: 2, maxLength: 12 }), fc.boolean(), (rows, pDelta) => {
+        const { frame } = three();
+        const storeys = rows.map((numbers) => ({ ...frame.storeys[0], ...numbers }));
+        const damping = { kind: 'rayleigh', modes: [1, 2], ratios: [0.05, 0.05] } as const;
+        const made = caseOf({ ...three(), frame: { storeys, damping, pDelta } });
+        if (!made.ok) {
+          refused++;
+          return;
+        }
+        whole++;
+        for (const mode of made.value.prepared.modes) expect(mode.period).toBeGreaterThan(0);
+      }),
+      { numRuns: 500 },
+    );
+    expect(whole).toBeGreaterThan(50);
+    expect(refused).toBeGreaterThan(50);
+  });
+  test('a storey that is stiff beyond reckoning is named; a thousand times the next is fine', () => {
+    expect(faults(writeAt(three(), 'frame.storeys[1].stiffness', 1e24))).toEqual([
+      'frame.storeys[1].stiffness out-of-range',
+    ]);
+    expect(faults(writeAt(three(), 'frame.storeys[1].stiffness', 1e21))).toEqual([
+      'frame.storeys[1].stiffness out-of-proportion',
+    ]);
+    expect(faults(writeAt(three(), 'frame.storeys[1].stiffness', 1e11))).toEqual([]);
+  });
+  test('a run of more steps than can be held is refused where it comes from, beside what else is wrong', () => {
+    const project = addMotions(three(), [entry]);
+    expect(faults(writeAt(project, 'analysis.step', 0.02 / 1e6))).toEqual(['analysis.step too-many-steps']);
+    const long = writeAt(project, 'analysis.tail', 1e9);
+    expect(faults(writeAt(long, 'limits.drift', 0))).toEqual([
+      'limits.drift not-positive',
+      'analysis.tail too-many-steps',
+    ]);
+    expect(faults(writeAt(project, 'analysis.step.parts', 1000))).toEqual([]);
   });
 });
 

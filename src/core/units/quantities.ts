@@ -118,11 +118,11 @@ export function printRatio(value: number): string {
   return grouped(value.toFixed(2));
 }
 
-/** Decimal digits without an exponent. */
+/** Decimal digits without an exponent, as far as anybody would read them so. */
 function plain(value: number): string {
   const text = String(value);
-  if (!text.includes('e')) return text;
-  const decimals = Math.min(100, Math.max(0, 16 - Math.floor(Math.log10(Math.abs(value)))));
+  if (!text.includes('e-') || Math.abs(value) < 1e-12) return text;
+  const decimals = 16 - Math.floor(Math.log10(Math.abs(value)));
   return value.toFixed(decimals).replace(/\.?0+$/, '');
 }
 

@@ -90,7 +90,7 @@ function unitOfColumn(column: string, system: System): string | null {
 /** One fact that follows from a cell; where the text is no plain number, first the value as it is read. */
 function factOf(project: Project, storey: number, column: string, system: System, typed: string | null): string {
   const path = cellPath(storey, column);
-  if (storey >= project.frame.storeys.length) return fieldOf(path).hint;
+  if (storey >= project.frame.storeys.length) return fieldOf(path).hint(system);
   const value = readAt(project, path);
   const facts: string[] = [];
   const quantity = quantityOf(path);
@@ -98,7 +98,7 @@ function factOf(project: Project, storey: number, column: string, system: System
     facts.push(`read as ${printQuantity(value, quantity, system)} ${unitOf(quantity, system)}`);
   }
   if (typeof value === 'number' && column !== 'name') facts.push(comparison(project, storey, column, value, system));
-  if (value === null) facts.push(fieldOf(path).hint);
+  if (value === null) facts.push(fieldOf(path).hint(system));
   return facts.filter((fact) => fact !== '').join('; ');
 }
 
