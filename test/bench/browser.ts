@@ -2,6 +2,7 @@ import { readFileSync } from 'node:fs';
 import { createServer } from 'node:http';
 import type { AddressInfo } from 'node:net';
 import { chromium, type Page } from '@playwright/test';
+import { findChromium } from '../../.ci/browser.mjs';
 import type * as Kernel from './kernelCases.ts';
 
 declare global {
@@ -32,7 +33,7 @@ export async function inBrowser(module: string, use: (page: Page) => Promise<voi
     }
   }).listen(0);
   const browser = await chromium.launch({
-    executablePath: process.env.SWAYBOOK_CHROMIUM ?? '/usr/bin/chromium',
+    executablePath: (await findChromium()) ?? undefined,
     args: CHROMIUM_ARGS,
   });
   try {
