@@ -27,7 +27,8 @@ export function readProject(text: string, readFile?: ReadFile): Result<OpenedPro
   const read = checked(text, readFile !== undefined);
   if (!read.ok) return read;
   const { file, faults } = read.value;
-  return faults.length > 0 ? { ok: false, faults } : withSources(file, readFile);
+  if (faults.length === 0) return withSources(file, readFile);
+  return { ok: false, faults: [...faults, ...recordFaults(file, faults, readFile)] };
 }
 
 /**
@@ -78,6 +79,16 @@ function withSources(file: FileProject, readFile: ReadFile | undefined): Result<
   return faults.length > 0
     ? { ok: false, faults }
     : { ok: true, value: { project: projectOf(file, entries), samples } };
+}
+
+/** Faults of the records that a file with faults elsewhere names, so that they come with the others. */
+function recordFaults({ motions }: FileProject, faults: readonly Fault[], readFile: ReadFile | undefined): Fault[] {
+  return listOf(motions).flatMap((motion, i) => {
+    const where = `motions[${i}]`;
+    if (faults.some((fault) => fault.where.startsWith(where))) return [];
+    const source = sourceOf(motion as FileMotion, where, readFile);
+    return source.ok ? [] : source.faults;
+  });
 }
 
 function entryOf({ name, scale, used, reason }: FileMotion, source: Source): MotionEntry {

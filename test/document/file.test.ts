@@ -192,6 +192,44 @@ describe('[DOC-2] motions by file', () => {
   test('are refused in the browser, where no file can be reached', () => {
     expect(places(byFile({}))).toEqual(['motions[0].file file-in-browser']);
   });
+  // 5 values at 0.02 s in g, with its count and interval in the heading; and the same without unit and interval
+  const RECORD = 'NPTS= 5, DT= .02 SEC, UNITS G\n0.01 -0.02 0.03 -0.04 0.05\n';
+  const BARE = '0.01\n-0.02\n0.03\n-0.04\n0.05\n';
+  const beside = (text: string) => () => ({ ok: true, value: new TextEncoder().encode(text) }) as const;
+  test('are read by their file, under the name of the project, in m/s2', () => {
+    const file = good() as Good & Record<string, unknown>;
+    byFile({})(file);
+    const read = readProject(JSON.stringify(file), beside(RECORD));
+    if (!read.ok) throw new Error(JSON.stringify(read.faults));
+    const [motion] = read.value.project.motions;
+    expect(motion).toMatchObject({ name: 'R', interval: 0.02, count: 5, scale: 1, used: true });
+    expect(motion.origin).toMatchObject({ file: 'r.txt', unit: 'g', unitFrom: 'file' });
+    expect(read.value.samples.get(motion.samples)?.[4]).toBeCloseTo(0.05 * 9.80665, 14);
+    const text = writeProject(read.value.project, (digest) => read.value.samples.get(digest) ?? new Float64Array());
+    expect(readProject(text)).toEqual(read);
+  });
+  test('unit and interval are asked for where the file does not say, and refused where they contradict it', () => {
+    expect(faultsOfChanged(byFile({}), beside(BARE)).map(({ where }) => where)).toEqual([
+      'motions[0].interval',
+      'motions[0].unit',
+    ]);
+    expect(faultsOfChanged(byFile({ unit: 'g', interval: 0.02 }), beside(BARE))).toEqual([]);
+    for (const contradiction of [{ unit: 'm/s2' }, { interval: 0.01 }]) {
+      const faults = faultsOfChanged(byFile(contradiction), beside(RECORD));
+      expect(faults.length).toBe(1);
+      expect(faults[0].where).toMatch(/^motions\[0\]/);
+    }
+  });
+  test('a broken record is told of together with what else is wrong', () => {
+    const faults = faultsOfChanged(
+      (file) => {
+        byFile({})(file);
+        file.frame.storeys[0].mass = 0;
+      },
+      beside(RECORD.replace('0.03', '0.0x')),
+    );
+    expect(faults.map(({ where }) => where.replace(/ .*/, ''))).toEqual(['frame.storeys[0].mass', 'motions[0].file']);
+  });
   test('a file that cannot be read is a fault at its motion', () => {
     const faults = faultsOfChanged(byFile({}), () => ({
       ok: false,
