@@ -22,8 +22,9 @@ export interface SyntheticOptions {
 }
 
 /**
- * White noise through the ground filter of Kanai and Tajimi and the low-cut filter of Clough and Penzien, under an envelope of
- * the kind of Jennings, Housner and Tsai, with velocity and displacement brought to zero at the end and scaled to the peak.
+ * White noise under an envelope of the kind of Jennings, Housner and Tsai, through the ground filter of Kanai and Tajimi and the
+ * low-cut filter of Clough and Penzien, with what is left of velocity and displacement at the end brought to zero, scaled to
+ * the peak. The envelope stands before the filters: behind them it would put back the slow motion that the low cut took out.
  * Only sums, products and quotients, so that every machine makes the same bits.
  *
  * Source: Kanai (1957) and Tajimi (1960); Clough and Penzien, Dynamics of Structures, section 23-3 (number from memory);
@@ -45,7 +46,7 @@ export function syntheticMotion(options: SyntheticOptions): Float64Array {
     // The sum of twelve uniforms less six: mean 0, variance 1.
     let noise = -6;
     for (let k = 0; k < 12; k++) noise += uniform();
-    out[i] = envelope * lowCut(ground(noise));
+    out[i] = lowCut(ground(envelope * noise));
   }
   settle(out, h);
   let largest = 0;
