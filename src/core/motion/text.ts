@@ -1,95 +1,128 @@
 /**
- * A record file as lines of bytes: marks of order taken off, UTF-16 turned into one byte a sign (records are plain figures; a
- * sign beyond Latin-1 becomes "?"), any line end understood. Never throws.
+ * A record file as lines of characters, whatever wrote it: UTF-8 or UTF-16 with or without its mark, else Latin-1; any line
+ * end. A typographic minus counts as a minus, a typographic space as a blank. Never throws.
  */
 export interface Lines {
-  readonly bytes: Uint8Array;
-  /** Line i is bytes[start[i]] up to, not including, bytes[end[i]]. */
+  /** One code a character (UTF-16 units). */
+  readonly codes: Uint8Array | Uint16Array;
+  /** Line i is codes[start[i]] up to, not including, codes[end[i]]. */
   readonly start: Int32Array;
   readonly end: Int32Array;
   readonly count: number;
-  /** The bytes hold control signs that no text has. */
+  /** The file holds control characters that no text has. */
   readonly binary: boolean;
 }
 
+const LF = 10;
+const CR = 13;
+const TAB = 9;
+const FORM_FEED = 12;
+/** Ends a text in some old archives. */
+const END_OF_TEXT = 26;
+/** Share of control characters from which a file is no text. Own figure. */
+const BINARY = 1e-3;
+
 export function linesOf(raw: Uint8Array): Lines {
-  const bytes = oneByteASign(raw);
-  const { length } = bytes;
-  let capacity = 1;
-  for (let i = 0; i < length; i++) if (bytes[i] === 10 || bytes[i] === 13) capacity++;
-  const start = new Int32Array(capacity);
-  const end = new Int32Array(capacity);
-  let count = 0;
-  let from = 0;
-  let odd = 0;
+  const codes = codesOf(raw);
+  const { length } = codes;
+  let most = 1;
+  for (let i = 0; i < length; i++) if (codes[i] === LF || codes[i] === CR) most++;
+  const start = new Int32Array(most);
+  const end = new Int32Array(most);
+  let [count, from, controls] = [0, 0, 0];
   for (let i = 0; i < length; i++) {
-    const b = bytes[i];
-    if (b === 10 || b === 13) {
+    const c = codes[i];
+    if (c > CR && c !== END_OF_TEXT && c >= 32) continue;
+    if (c === LF || c === CR) {
       start[count] = from;
       end[count++] = i;
-      if (b === 13 && bytes[i + 1] === 10) i++;
+      if (c === CR && codes[i + 1] === LF) i++;
       from = i + 1;
-    } else if (b < 32 && b !== 9 && b !== 12 && b !== 26) odd++;
+    } else if (c !== TAB && c !== FORM_FEED && c !== END_OF_TEXT) controls++;
   }
   if (from < length) {
     start[count] = from;
     end[count++] = length;
   }
-  return { bytes, start, end, count, binary: odd > 0 && odd > length / 1000 };
+  return { codes, start, end, count, binary: controls > BINARY * length };
 }
 
-/** Line i as text: UTF-8 where it is that, else Latin-1. */
-export function lineText({ bytes, start, end }: Lines, i: number): string {
-  return decoded(bytes.subarray(start[i], end[i]));
+/** Line i, from 0, as text. */
+export function lineText({ codes, start, end }: Lines, i: number): string {
+  return textBetween(codes, start[i], end[i]);
 }
 
-function oneByteASign(raw: Uint8Array): Uint8Array {
-  if (raw[0] === 0xef && raw[1] === 0xbb && raw[2] === 0xbf) return raw.subarray(3);
-  const marked = (raw[0] === 0xff && raw[1] === 0xfe) || (raw[0] === 0xfe && raw[1] === 0xff);
-  const little = marked ? raw[0] === 0xff : zeros(raw, 1);
-  if (!marked && !little && !zeros(raw, 0)) return raw;
-  const body = marked ? raw.subarray(2) : raw;
-  const out = new Uint8Array(body.length >> 1);
-  for (let i = 0; i < out.length; i++) {
-    const code = little ? body[2 * i] | (body[2 * i + 1] << 8) : (body[2 * i] << 8) | body[2 * i + 1];
-    out[i] = code < 256 ? code : 63;
-  }
+export function textBetween(codes: Lines['codes'], from: number, to: number): string {
+  let out = '';
+  for (let i = from; i < to; i += 4096) out += String.fromCharCode(...codes.subarray(i, Math.min(to, i + 4096)));
   return out;
+}
+
+/** The bytes themselves where each is a character; a copy only where the file has more than plain letters. */
+function codesOf(raw: Uint8Array): Uint8Array | Uint16Array {
+  if (raw[0] === 0xff && raw[1] === 0xfe) return plain(fromUtf16(raw.subarray(2), true));
+  if (raw[0] === 0xfe && raw[1] === 0xff) return plain(fromUtf16(raw.subarray(2), false));
+  if (zerosFrom(raw, 1)) return plain(fromUtf16(raw, true));
+  if (zerosFrom(raw, 0)) return plain(fromUtf16(raw, false));
+  const bytes = raw[0] === 0xef && raw[1] === 0xbb && raw[2] === 0xbf ? raw.subarray(3) : raw;
+  if (bytes.every((byte) => byte < 0x80)) return bytes;
+  const decoded = fromUtf8(bytes);
+  return decoded ? plain(decoded) : bytes;
 }
 
 /** Whether nearly every second byte, from an offset on, is zero: UTF-16 without its mark. */
-function zeros(raw: Uint8Array, offset: number): boolean {
-  const sample = Math.min(raw.length, 4096);
-  let found = 0;
-  for (let i = offset; i < sample; i += 2) if (raw[i] === 0) found++;
-  return sample >= 4 && found > 0.45 * sample;
+function zerosFrom(raw: Uint8Array, offset: number): boolean {
+  const probe = Math.min(raw.length, 4096);
+  let [zeros, others] = [0, 0];
+  for (let i = 0; i < probe; i++) if (raw[i] === 0) i % 2 === offset ? zeros++ : others++;
+  return probe >= 4 && zeros > 0.45 * probe && others === 0;
 }
 
-function decoded(bytes: Uint8Array): string {
-  let out = '';
+function fromUtf16(raw: Uint8Array, little: boolean): Uint16Array {
+  const out = new Uint16Array(raw.length >> 1);
+  const [low, high] = little ? [0, 1] : [1, 0];
+  for (let i = 0; i < out.length; i++) out[i] = raw[2 * i + low] | (raw[2 * i + high] << 8);
+  return out;
+}
+
+/** Null where the bytes are no UTF-8. Source: RFC 3629. */
+function fromUtf8(bytes: Uint8Array): Uint16Array | null {
+  const out = new Uint16Array(bytes.length);
+  let count = 0;
   for (let i = 0; i < bytes.length; ) {
-    const b = bytes[i];
-    const length = b < 0x80 ? 1 : b >= 0xf0 && b < 0xf5 ? 4 : b >= 0xe0 ? 3 : b >= 0xc2 ? 2 : 0;
-    if (length === 1) {
-      out += String.fromCharCode(b);
-      i++;
+    const lead = bytes[i++];
+    if (lead < 0x80) {
+      out[count++] = lead;
       continue;
     }
-    let code = length === 2 ? b & 0x1f : length === 3 ? b & 0x0f : b & 0x07;
-    let fine = length > 0 && i + length <= bytes.length;
-    for (let k = 1; fine && k < length; k++) {
-      if ((bytes[i + k] & 0xc0) !== 0x80) fine = false;
-      code = (code << 6) | (bytes[i + k] & 0x3f);
+    const more =
+      lead >= 0xf0 && lead < 0xf5 ? 3 : lead >= 0xe0 && lead < 0xf0 ? 2 : lead >= 0xc2 && lead < 0xe0 ? 1 : 0;
+    if (more === 0) return null;
+    let code = lead & (0x3f >> more);
+    for (let k = 0; k < more; k++) {
+      const next = bytes[i++];
+      if ((next & 0xc0) !== 0x80) return null;
+      code = (code << 6) | (next & 0x3f);
     }
-    if (!fine || code > 0x10ffff || (code >= 0xd800 && code < 0xe000)) return latin1(bytes);
-    out += String.fromCodePoint(code);
-    i += length;
+    if (code > 0xffff) {
+      out[count++] = 0xd800 + ((code - 0x10000) >> 10);
+      out[count++] = 0xdc00 + ((code - 0x10000) & 0x3ff);
+    } else out[count++] = code;
   }
-  return out;
+  return out.subarray(0, count);
 }
 
-function latin1(bytes: Uint8Array): string {
-  let out = '';
-  for (const b of bytes) out += String.fromCharCode(b);
-  return out;
+const MINUS_SIGN = 0x2212;
+const FIRST_SPACE = 0x2000;
+const LAST_SPACE = 0x200b;
+const NARROW_SPACE = 0x202f;
+
+/** Typographic minus and spaces as the plain ones, in place. */
+function plain(codes: Uint16Array): Uint16Array {
+  for (let i = 0; i < codes.length; i++) {
+    const c = codes[i];
+    if (c === MINUS_SIGN) codes[i] = 45;
+    else if ((c >= FIRST_SPACE && c <= LAST_SPACE) || c === NARROW_SPACE || c === 0xfeff) codes[i] = 32;
+  }
+  return codes;
 }

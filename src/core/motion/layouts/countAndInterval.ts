@@ -1,37 +1,70 @@
-import type { Table } from '../table.ts';
+import type { Said } from '../heading.ts';
+import { cellOf, type Table } from '../table.ts';
+import { looseFigures, oddRows } from './faults.ts';
 import { type Layout, rowLength } from './layout.ts';
+import { acrossThenDown } from './values.ts';
 
 /**
- * A heading that gives count and interval, in words (`NPTS= 4000, DT= .0100 SEC`, `1559 points at equal spacing of 0.02 sec`) or
- * as a first line of two bare figures (`4000 .01`), then rows of values read across and then down.
+ * A heading that gives count or interval, in words (`NPTS= 4000, DT= .0100 SEC`, `1559 points at equal spacing of 0.02 sec`) or
+ * as bare figures (`4000 .01`), then rows of values read across and then down.
  */
 export const countAndInterval: Layout = {
   id: 'count-and-interval',
   name: 'count and interval, then rows of values',
-  recognise(table, heading) {
-    if (bareHeading(table)) return 0.8;
-    return heading.interval !== null && heading.count !== null ? 0.7 : 0;
+  recognise: (table, heading) => {
+    if (heading.interval !== null || heading.count !== null) return 0.5;
+    return table.rows > 0 && bareHeading(table) !== null ? 0.5 : 0;
   },
-  read(table, heading) {
-    const bare = heading.interval !== null && heading.count !== null ? null : bareHeading(table);
-    const from = bare ? table.rowStart[1] : 0;
+  read: (table, heading, answers) => {
+    const bare = heading.interval === null && heading.count === null ? bareHeading(table) : null;
+    const firstRow = bare?.rows ?? 0;
+    const from = table.rowStart[firstRow];
+    const series = acrossThenDown(table, heading);
+    const values = series.values.subarray(from);
+    const count = bare?.count ?? series.count;
+    const told = count?.value === values.length;
     return {
-      values: table.values.slice(from),
-      placeOf: (i) => i + from,
-      interval: bare ? bare.interval : heading.interval,
-      count: bare ? bare.count : heading.count,
-      firstRow: bare ? 1 : 0,
-      faults: [],
-      warnings: [],
+      ...series,
+      values,
+      cellOf: (i) => cellOf(table, i + from),
+      interval: bare?.interval ?? series.interval,
+      count,
+      firstRow,
+      faults: told ? [] : [...(bare ? [] : looseFigures(table, answers)), ...oddRows(table, firstRow, answers)],
     };
   },
 };
 
-/** A first row of exactly a whole count and an interval below 1 s, where the values that follow are about that many. */
-function bareHeading(table: Table): { readonly count: number; readonly interval: number } | null {
-  if (table.rows < 2 || rowLength(table, 0) !== 2) return null;
-  const [count, interval] = table.values;
-  const following = table.values.length - 2;
-  if (!(Number.isInteger(count) && count >= 2 && interval > 0 && interval < 1)) return null;
-  return Math.abs(following - count) <= 0.1 * count + 8 ? { count, interval } : null;
+interface BareHeading {
+  readonly count: Said<number>;
+  readonly interval: Said<number>;
+  /** Rows of the table that are this heading. */
+  readonly rows: number;
+}
+
+/**
+ * Count and interval as bare figures: a line of the two above the rows, or the table's own first row or first two values
+ * where the values that follow are exactly that many.
+ */
+function bareHeading(table: Table): BareHeading | null {
+  const { above, values, rows, rowLine } = table;
+  const last = above.at(-1);
+  if (last && last.values.length === 2) {
+    const [count, interval] = last.values;
+    if (fits(count, interval) && Math.abs(values.length - count) <= 0.1 * count + table.columns) {
+      return { count: bare(count, last.line), interval: bare(interval, last.line), rows: 0 };
+    }
+  }
+  const headRows =
+    rowLength(table, 0) === 2 ? 1 : rowLength(table, 0) === 1 && rows > 2 && rowLength(table, 1) === 1 ? 2 : 0;
+  if (headRows === 0 || !fits(values[0], values[1]) || values.length - 2 !== values[0]) return null;
+  return { count: bare(values[0], rowLine[0]), interval: bare(values[1], rowLine[headRows - 1]), rows: headRows };
+}
+
+function fits(count: number, interval: number): boolean {
+  return Number.isInteger(count) && count >= 2 && interval > 0 && interval < 1;
+}
+
+function bare(value: number, line: number): Said<number> {
+  return { value, line, span: [0, 0] };
 }

@@ -1,130 +1,153 @@
 import type { Fault } from '../../fault.ts';
-import type { RecordFault } from '../reading.ts';
-import { type Layout, rowLength } from './layout.ts';
+import type { Said } from '../heading.ts';
+import type { RecordAnswers, RecordFault } from '../reading.ts';
+import type { Table } from '../table.ts';
+import { type ColumnName, columnNames } from './columnNames.ts';
+import { oddRows } from './faults.ts';
+import { type Layout, LEAVE_OUT, rowLength } from './layout.ts';
+import { timeColumn } from './timeColumn.ts';
 
-/** How far a printed time may be from its even place, as a share of the interval: the rounding of the print. */
-const UNEVEN = 0.1;
+/** Rows that are looked at, and the share of them in which the time must rise as usual. Own figures. */
+const PROBE = 200;
+const RISES = 0.8;
 
-/** Time in one column, acceleration in another; further columns are passed over (the answers may name others). */
+const TIME_WORD = /\b(?:time|zeit|temps|tiempo|tempo|t|sec|seconds?)\b/i;
+const ACCELERATION_WORD = /\b(?:acc|accel|accelerations?|accelerogram|ag|a)\b/i;
+const OTHER_WORD = /\b(?:vel|velocity|disp|displ|displacement|index|no|nr|n|sample|point)\b/i;
+
+/** Time in one column, acceleration in another; which, the names over them, the figures or the answers tell. */
 export const timeAndAcceleration: Layout = {
   id: 'time-and-acceleration',
   name: 'time and acceleration in columns',
-  recognise(table) {
-    const { rows } = table;
-    const columns = rows > 0 ? rowLength(table, 0) : 0;
-    if (rows < 3 || columns < 2) return 0;
-    const probe = Math.min(rows, 200);
-    const steps: number[] = [];
-    for (let r = 1; r < probe; r++) {
-      if (rowLength(table, r) !== columns) return 0;
-      steps.push(table.values[table.rowStart[r]] - table.values[table.rowStart[r - 1]]);
-    }
-    const sorted = steps.filter(Number.isFinite).sort((a, b) => a - b);
-    const middle = sorted[sorted.length >> 1] ?? 0;
-    const even = steps.filter((step) => Math.abs(step - middle) <= 0.5 * middle).length;
-    return middle > 0 && even >= 0.8 * steps.length ? 0.9 : 0;
-  },
-  read(table, heading, answers) {
-    const { time, acceleration } = answers.columns ?? { time: 0, acceleration: 1 };
-    const { rows, rowStart, rowLine } = table;
-    const faults: RecordFault[] = [];
-    const values = new Float64Array(rows);
-    const times = new Float64Array(rows);
-    for (let r = 0; r < rows; r++) {
-      const columns = rowLength(table, r);
-      values[r] = acceleration < columns ? table.values[rowStart[r] + acceleration] : Number.NaN;
-      times[r] = time < columns ? table.values[rowStart[r] + time] : Number.NaN;
-      if (columns <= Math.max(time, acceleration) && faults.length < 50) {
-        faults.push({
-          id: `line-${rowLine[r]}-columns`,
-          code: 'missing-value',
-          where: `line ${rowLine[r]}`,
-          line: rowLine[r],
-          message: `holds ${columns} ${columns === 1 ? 'value' : 'values'}, the columns chosen need ${Math.max(time, acceleration) + 1}`,
-          mend: 'Take the mean of the neighbours, or leave the file out',
-          choices: [{ id: 'mean', label: 'Take the mean of its neighbours' }, LEAVE_OUT],
-        });
-      }
-    }
-    const spacing = intervalOf(times, rowLine, faults);
+  recognise: (table) => (table.columns >= 2 && timeColumnOf(table, columnNames(table)) !== null ? 0.9 : 0),
+  read: (table, heading, answers) => {
+    const names = columnNames(table);
+    const time = answers.columns?.time ?? timeColumnOf(table, names) ?? 0;
+    const candidates = accelerationColumns(names, time);
+    const acceleration = answers.columns?.acceleration ?? candidates[0] ?? (time === 0 ? 1 : 0);
+    const values = columnOf(table, acceleration);
+    const times = columnOf(table, time);
+    const scale = /\b(?:ms|msec|milliseconds?)\b/i.test(names[time]?.name ?? '') ? 1e-3 : 1;
+    if (scale !== 1) for (let i = 0; i < times.length; i++) times[i] *= scale;
+    const spacing = timeColumn(times, time, table, answers);
+    const settled = withHeading(spacing.interval, heading.interval, table, answers);
     return {
       values,
-      placeOf: (r) => rowStart[r] + acceleration,
-      interval: spacing ?? heading.interval,
+      cellOf: (row) => ({ row, column: acceleration }),
+      interval: settled.interval,
       count: heading.count,
+      unit: names[acceleration]?.unit ?? heading.unit,
       firstRow: 0,
-      faults,
-      warnings: lateStart(times, spacing, rowLine),
+      facts: [],
+      faults: [...spacing.faults, ...settled.faults, ...oddRows(table, 0, answers, 'longer')],
+      warnings: [
+        ...lateStart(times, settled.interval?.value ?? null, table.rowLine[0]),
+        ...otherColumns(names, candidates, acceleration, answers),
+      ],
+      mends: spacing.mends,
     };
   },
 };
 
-export const LEAVE_OUT = { id: 'leave-out', label: 'Leave this file out' } as const;
-
-/** The even spacing of the time column; faults where it goes back, stands still, or is uneven. */
-function intervalOf(times: Float64Array, lines: Int32Array, faults: RecordFault[]): number | null {
-  const known = Array.from(times.keys()).filter((i) => Number.isFinite(times[i]));
-  const [first, last] = [known[0], known[known.length - 1]];
-  if (known.length < 2 || last === first) return null;
-  const mean = (times[last] - times[first]) / (last - first);
-  const refuse = (i: number, code: string, message: string, mend: string, choices: RecordFault['choices']) =>
-    faults.push({
-      id: `time-line-${lines[i]}`,
-      code,
-      where: `line ${lines[i]}`,
-      line: lines[i],
-      message,
-      mend,
-      choices: [...choices, LEAVE_OUT],
-    });
-  if (!(mean > 0)) {
-    refuse(
-      last,
-      'time-goes-back',
-      `the time column runs from ${times[first]} to ${times[last]} s`,
-      'Choose another column for the time',
-      [],
-    );
-    return null;
+function columnOf(table: Table, column: number): Float64Array {
+  const { rows, rowStart, values } = table;
+  const out = new Float64Array(rows);
+  for (let r = 0; r < rows; r++) {
+    out[r] = column >= 0 && column < rowLength(table, r) ? values[rowStart[r] + column] : Number.NaN;
   }
-  for (const i of known) {
-    const off = times[i] - (times[first] + (i - first) * mean);
-    if (Math.abs(off) > UNEVEN * mean && faults.length < 50) {
-      const message = `time ${times[i]} s is ${short(Math.abs(off))} s off the even spacing of ${short(mean)} s`;
-      refuse(i, 'uneven-time', message, `Take the spacing as even, ${short(mean)} s, or leave the file out`, [
-        {
-          id: 'even',
-          label: `Take the spacing as even, ${short(mean)} s`,
-          detail: 'The values are kept in their order; the times are not used.',
-        },
-      ]);
-      break;
-    }
-  }
-  return tidy(mean, times[last] - times[first], last - first);
+  return out;
 }
 
-/** The roundest spacing that the printed times allow: 0.0099999 over 4000 rows is 0.01. */
-function tidy(mean: number, span: number, steps: number): number {
-  for (let digits = 1; digits <= 12; digits++) {
-    const round = Number(mean.toPrecision(digits));
-    if (Math.abs(round * steps - span) <= 1e-6 * span) return round;
-  }
-  return mean;
+/** The column that rises evenly: the one named time, else one whose step is not that of a mere numbering. */
+function timeColumnOf(table: Table, names: readonly ColumnName[]): number | null {
+  const rising = names.map((_, k) => k).filter((k) => rises(table, k) !== null);
+  const named = rising.find((k) => TIME_WORD.test(names[k].name));
+  if (named !== undefined) return named;
+  return rising.find((k) => rises(table, k) !== 1) ?? null;
 }
 
-function lateStart(times: Float64Array, interval: number | null, lines: Int32Array): Fault[] {
-  if (interval === null || !(Math.abs(times[0]) > 1e-9)) return [];
+/** The usual step of a column that rises in most of the rows looked at; null where it does not. */
+function rises(table: Table, column: number): number | null {
+  const { rows, columns, values, rowStart } = table;
+  if (rows < 3) return null;
+  const steps: number[] = [];
+  for (let r = 1; r < Math.min(rows, PROBE); r++) {
+    if (rowLength(table, r) !== columns || rowLength(table, r - 1) !== columns) continue;
+    const step = values[rowStart[r] + column] - values[rowStart[r - 1] + column];
+    if (!Number.isNaN(step)) steps.push(step);
+  }
+  steps.sort((a, b) => a - b);
+  const usual = steps[steps.length >> 1] ?? 0;
+  const alike = steps.filter((step) => Math.abs(step - usual) <= 0.5 * usual).length;
+  return usual > 0 && steps.length >= 2 && alike >= RISES * steps.length ? usual : null;
+}
+
+/** Columns that may be the acceleration, the likeliest first. */
+function accelerationColumns(names: readonly ColumnName[], time: number): number[] {
+  const others = names.map((_, k) => k).filter((k) => k !== time);
+  const named = others.filter((k) => names[k].unit !== null || ACCELERATION_WORD.test(names[k].name));
+  return named.length > 0 ? named : others.filter((k) => !OTHER_WORD.test(names[k].name));
+}
+
+/** The time column's spacing, unless the heading says another interval: then a choice. */
+function withHeading(
+  spacing: number | null,
+  said: Said<number> | null,
+  { rowLine }: Table,
+  answers: RecordAnswers,
+): { readonly interval: Said<number> | null; readonly faults: readonly RecordFault[] } {
+  if (spacing === null) return { interval: said, faults: [] };
+  const own: Said<number> = { value: spacing, line: rowLine[0], span: [0, 0] };
+  if (said === null || Math.abs(said.value - spacing) <= 1e-4 * spacing) return { interval: own, faults: [] };
+  const taken = answers.mends?.['two-intervals']?.choice;
+  if (taken === 'times') return { interval: own, faults: [] };
+  if (taken === 'heading') return { interval: said, faults: [] };
+  const fault: RecordFault = {
+    id: 'two-intervals',
+    code: 'two-intervals',
+    where: `line ${said.line}`,
+    line: said.line,
+    span: said.span,
+    message: `says an interval of ${said.value} s, the time column goes on by ${spacing} s`,
+    mend: 'Choose one of the two',
+    choices: [
+      { id: 'times', label: `Take ${spacing} s, as the time column goes on` },
+      { id: 'heading', label: `Take ${said.value} s, as the heading says` },
+      LEAVE_OUT,
+    ],
+  };
+  return { interval: own, faults: [fault] };
+}
+
+function lateStart(times: Float64Array, interval: number | null, line: number): Fault[] {
+  if (interval === null || Number.isNaN(times[0]) || Math.abs(times[0]) <= 1e-6 * interval) return [];
   return [
     {
       code: 'late-start',
-      where: `line ${lines[0]}`,
+      where: `line ${line}`,
       message: `the time column begins at ${times[0]} s; the first value is taken to act at t = 0`,
-      mend: 'Add the missing samples to the file if the motion shall begin earlier',
+      mend: 'Nothing to do if the motion may begin there',
     },
   ];
 }
 
-function short(value: number): string {
-  return String(Number(value.toPrecision(4)));
+function otherColumns(
+  names: readonly ColumnName[],
+  candidates: readonly number[],
+  taken: number,
+  answers: RecordAnswers,
+): Fault[] {
+  if (candidates.length < 2 || answers.columns !== undefined) return [];
+  const words = (k: number) => (names[k].name === '' ? `column ${k + 1}` : `column ${k + 1} (${names[k].name})`);
+  return [
+    {
+      code: 'several-columns',
+      where: 'columns',
+      message: `${words(taken)} was read as the acceleration; ${candidates
+        .filter((k) => k !== taken)
+        .map(words)
+        .join(', ')} may be one too`,
+      mend: 'Choose the column',
+    },
+  ];
 }

@@ -1,17 +1,33 @@
-import type { Layout } from './layout.ts';
+import type { Heading } from '../heading.ts';
+import { cellOf, type Table } from '../table.ts';
+import { looseFigures, oddRows } from './faults.ts';
+import type { Layout, Series } from './layout.ts';
 
-/** One value a line, or rows of fixed width that are read across and then down; the interval is asked for unless words tell it. */
+/** One value a line, or rows of values read across and then down; the interval is asked for unless words tell it. */
 export const values: Layout = {
   id: 'values',
   name: 'values, one a line or in rows',
-  recognise: (table) => (table.rows > 0 ? 0.2 : 0),
-  read: (table, heading) => ({
+  recognise: (table) => (table.rows > 0 ? 0.1 : 0),
+  read: (table, heading, answers) => {
+    const told = heading.count?.value === table.values.length;
+    const faults = [...looseFigures(table, answers), ...(told ? [] : oddRows(table, 0, answers))];
+    return { ...acrossThenDown(table, heading), faults };
+  },
+};
+
+/** All values of a table, row by row. */
+export function acrossThenDown(table: Table, heading: Heading): Series {
+  const { interval, count, unit } = heading;
+  return {
     values: table.values.slice(),
-    placeOf: (i) => i,
-    interval: heading.interval,
-    count: heading.count,
+    cellOf: (i) => cellOf(table, i),
+    interval,
+    count,
+    unit,
     firstRow: 0,
+    facts: [],
     faults: [],
     warnings: [],
-  }),
-};
+    mends: [],
+  };
+}

@@ -1,0 +1,140 @@
+import { LEAVE_OUT, type Series } from './layouts/layout.ts';
+import type { Mend } from './motion.ts';
+import type { RecordAnswers, RecordFault } from './reading.ts';
+import { type Place, placeOf, type Table } from './table.ts';
+
+/** Faults of spoilt values that are listed one by one. */
+const LISTED = 50;
+
+/**
+ * Entries of a series that are no numbers: those for which a mend was chosen are mended in place, the others are faults, the
+ * first fifty one by one.
+ *
+ * @param interval  [s], to say when a sample acts; null where it is not known
+ */
+export function badValues(
+  table: Table,
+  series: Series,
+  interval: number | null,
+  answers: RecordAnswers,
+): { readonly mends: readonly Mend[]; readonly faults: readonly RecordFault[] } {
+  const { values } = series;
+  const mends: Mend[] = [];
+  const faults: RecordFault[] = [];
+  let bad = 0;
+  let more = 0;
+  for (let i = 0; i < values.length; i++) {
+    if (!Number.isNaN(values[i])) continue;
+    bad++;
+    if (faults.length === LISTED) {
+      more++;
+      continue;
+    }
+    const place = placeOf(table, series.cellOf(i));
+    const mend = mendOf(place, values, i, table, answers);
+    if (mend) {
+      values[i] = mend.value;
+      mends.push({ line: place.line, was: place.text, is: String(mend.value), why: mend.why });
+    } else faults.push(faultOf(place, values, i, table, interval));
+  }
+  if (2 * bad > values.length && bad > 3) return { mends: [], faults: [mostlyBad(bad, values.length)] };
+  if (more > 0) faults.push(moreFault(more));
+  return { mends, faults };
+}
+
+function idOf({ line, value }: Place): string {
+  return `line-${line}-value-${value}`;
+}
+
+function mendOf(
+  place: Place,
+  values: Float64Array,
+  i: number,
+  table: Table,
+  { mends }: RecordAnswers,
+): { readonly value: number; readonly why: string } | null {
+  const made = mends?.[idOf(place)];
+  const [asDecimal, mean] = [commaRead(place.text, table), meanAround(values, i)];
+  switch (made?.choice) {
+    case 'as-decimal':
+      return asDecimal === null ? null : { value: asDecimal, why: 'the comma was taken as a decimal point' };
+    case 'typed':
+      return made.value !== undefined && Number.isFinite(made.value)
+        ? { value: made.value, why: 'typed in its place' }
+        : null;
+    case 'mean':
+      return mean === null ? null : { value: mean, why: 'the mean of its neighbours was taken' };
+    default:
+      return null;
+  }
+}
+
+function faultOf(place: Place, values: Float64Array, i: number, table: Table, interval: number | null): RecordFault {
+  const { line, value, text, span } = place;
+  const [asDecimal, mean] = [commaRead(text, table), meanAround(values, i)];
+  const when = interval === null ? '' : `, at ${Number((i * interval).toPrecision(12))} s`;
+  const neighbours = mean === null ? '' : `; the neighbours are ${values[i - 1]} and ${values[i + 1]}`;
+  const what = text === '' ? 'there is no value' : asDecimal === null ? `${text} is no number` : `${text} has a comma`;
+  return {
+    id: idOf(place),
+    code: 'not-a-number',
+    where: `line ${line}, value ${value}`,
+    line,
+    span,
+    message: what,
+    detail: `${asDecimal === null ? '' : 'The other values have a decimal point. '}Sample ${i + 1} of ${values.length}${when}.`,
+    mend:
+      asDecimal === null ? 'Write the number that belongs there' : `Write it as ${asDecimal}, if that is what it means`,
+    choices: [
+      ...(asDecimal === null
+        ? []
+        : [
+            {
+              id: 'as-decimal',
+              label: `Read it as ${asDecimal}`,
+              detail: `The comma taken as a decimal point${neighbours}.`,
+            },
+          ]),
+      { id: 'typed', label: 'Type the value', asksValue: true },
+      ...(mean === null ? [] : [{ id: 'mean', label: `Take the mean of its neighbours, ${mean}` }]),
+      LEAVE_OUT,
+    ],
+  };
+}
+
+/** A value with one comma among points, read with the comma as its decimal sign. */
+function commaRead(text: string, { comma }: Table): number | null {
+  if (comma === 'decimal' || !/^[+-]?\d*,\d+(?:[eE][+-]?\d{1,3})?$/.test(text)) return null;
+  const value = Number(text.replace(',', '.'));
+  return Number.isFinite(value) ? value : null;
+}
+
+/** To as many figures as its neighbours have: their sum is not worth more. */
+function meanAround(values: Float64Array, i: number): number | null {
+  const mean = Number(((values[i - 1] + values[i + 1]) / 2).toPrecision(12));
+  return Number.isFinite(mean) ? mean : null;
+}
+
+function mostlyBad(bad: number, all: number): RecordFault {
+  return {
+    id: 'mostly-bad',
+    code: 'mostly-bad',
+    where: 'values',
+    line: null,
+    message: `${bad} of ${all} values are no numbers`,
+    mend: 'Choose the columns or the heading lines anew, or another file',
+    choices: [LEAVE_OUT],
+  };
+}
+
+function moreFault(more: number): RecordFault {
+  return {
+    id: 'more',
+    code: 'not-a-number',
+    where: 'values',
+    line: null,
+    message: `${more} more ${more === 1 ? 'value is no number' : 'values are no numbers'}`,
+    mend: 'Settle those listed: the next ones are listed then',
+    choices: [LEAVE_OUT],
+  };
+}

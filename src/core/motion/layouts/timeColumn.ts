@@ -1,0 +1,162 @@
+import type { Mend } from '../motion.ts';
+import { lastPlace } from '../numerals.ts';
+import type { RecordAnswers, RecordFault } from '../reading.ts';
+import { placeOf, type Table } from '../table.ts';
+import { LEAVE_OUT } from './layout.ts';
+
+/** What a column of times says. */
+export interface TimeColumn {
+  /** Even spacing, in the column's own unit; null where there is none. */
+  readonly interval: number | null;
+  readonly faults: readonly RecordFault[];
+  readonly mends: readonly Mend[];
+}
+
+/** Lines that are named one by one in a message. */
+const NAMED = 5;
+/** Times whose print is looked at. */
+const LOOKED_AT = 50;
+/** Share of the interval by which a time may be off whatever its print: single precision prints are. Own figure. */
+const LOOSE = 0.01;
+/** Share of the steps that are alike where the print holds the interval exactly. Own figure. */
+const ALIKE = 0.95;
+
+/**
+ * The even spacing of a column of printed times: all of them within the rounding of the print of where they should be. A
+ * fault where they are not, with the lines.
+ *
+ * @param times  NaN where a time is no number; those are passed over
+ * @param column  the column of the table that they are; time i stands on row i
+ */
+export function timeColumn(times: Float64Array, column: number, table: Table, answers: RecordAnswers): TimeColumn {
+  const known = knownOf(times);
+  if (known.length < 2) return { interval: null, faults: [], mends: [] };
+  const [first, last] = [known[0], known[known.length - 1]];
+  const print = printOf(known, (row) => placeOf(table, { row, column }).text);
+  const mean = (times[last] - times[first]) / (last - first);
+  const interval = mean > 0 ? tidy(mean, Math.max(print, 1e-3 * mean) / (last - first)) : mean;
+  if (interval > 0 && spread(times, known, interval) <= Math.max(2 * LOOSE * interval, rounding(interval, print))) {
+    return { interval, faults: [], mends: [] };
+  }
+  const { usual, share } = usualStep(times, known);
+  const within = usual > 0 ? Math.max(LOOSE * usual, (share > ALIKE ? 0.5 : 1.5) * print) : 0;
+  const bad: number[] = [];
+  for (let k = 1; k < known.length; k++) {
+    const [from, to] = [known[k - 1], known[k]];
+    if (!(Math.abs(times[to] - times[from] - (to - from) * usual) <= within)) bad.push(to);
+  }
+  return uneven(times, bad.length > 0 ? bad : [last], usual, (row) => table.rowLine[row], answers);
+}
+
+function knownOf(times: Float64Array): Int32Array {
+  const known = new Int32Array(times.length);
+  let count = 0;
+  for (let i = 0; i < times.length; i++) if (!Number.isNaN(times[i])) known[count++] = i;
+  return known.subarray(0, count);
+}
+
+/** The unit of the last figure that the times are printed with: the finest of fixed prints, the coarsest with exponents. */
+function printOf(known: Int32Array, textOf: (i: number) => string): number {
+  const step = Math.max(1, Math.floor(known.length / LOOKED_AT));
+  const texts: string[] = [];
+  for (let k = 0; k < known.length; k += step) texts.push(textOf(known[k]));
+  texts.push(textOf(known[known.length - 1]));
+  const places = texts.map(lastPlace).filter((place) => place > 0);
+  if (places.length === 0) return 0;
+  return texts.some((text) => /[ed]/i.test(text)) ? Math.max(...places) : Math.min(...places);
+}
+
+/** How far apart the times may lie about their even places by rounding: not at all where the print holds the interval. */
+function rounding(interval: number, print: number): number {
+  const parts = interval / print;
+  return Math.abs(parts - Math.round(parts)) < 1e-6 * parts ? 0 : 1.02 * print;
+}
+
+/** Between the earliest and the latest time, each seen from its even place. */
+function spread(times: Float64Array, known: Int32Array, interval: number): number {
+  let [least, most] = [Number.POSITIVE_INFINITY, Number.NEGATIVE_INFINITY];
+  for (let k = 0; k < known.length; k++) {
+    const off = times[known[k]] - known[k] * interval;
+    if (off < least) least = off;
+    if (off > most) most = off;
+  }
+  return most - least;
+}
+
+function uneven(
+  times: Float64Array,
+  bad: readonly number[],
+  usual: number,
+  lineOf: (i: number) => number,
+  answers: RecordAnswers,
+): TimeColumn {
+  const line = lineOf(bad[0]);
+  const taken = answers.mends?.time;
+  const mended = (interval: number, why: string): TimeColumn => {
+    const was = `uneven times from line ${line} on`;
+    return { interval, faults: [], mends: [{ line, was, is: `${short(interval)} s throughout`, why }] };
+  };
+  if (taken?.choice === 'even' && usual > 0) return mended(usual, 'the spacing was taken as even');
+  if (taken?.choice === 'typed' && taken.value !== undefined && taken.value > 0 && Number.isFinite(taken.value)) {
+    return mended(taken.value, 'the interval was typed');
+  }
+  const rises = usual > 0;
+  const named = bad.slice(0, NAMED).map((i) => `line ${lineOf(i)} (${short(times[i] - previous(times, i))} s)`);
+  const more = bad.length > NAMED ? ` and ${bad.length - NAMED} more` : '';
+  const even = {
+    id: 'even',
+    label: `Take the spacing as even, ${short(usual)} s`,
+    detail: 'The values are kept in their order; the times are not used.',
+  };
+  const fault: RecordFault = {
+    id: 'time',
+    code: rises ? 'uneven-time' : 'time-not-rising',
+    where: `line ${line}`,
+    line,
+    message: rises
+      ? `the time does not go on by ${short(usual)} s as elsewhere: ${named.join(', ')}${more}`
+      : 'the time column does not rise',
+    mend: 'Mend the times in the file, or choose the columns anew',
+    choices: [...(rises ? [even] : []), { id: 'typed', label: 'Type the interval', asksValue: true }, LEAVE_OUT],
+  };
+  return { interval: rises ? usual : null, faults: [fault], mends: [] };
+}
+
+function previous(times: Float64Array, i: number): number {
+  let before = i - 1;
+  while (before > 0 && Number.isNaN(times[before])) before--;
+  return times[before];
+}
+
+/** The middle one of the steps, and the share of steps that are like it. */
+function usualStep(times: Float64Array, known: Int32Array): { readonly usual: number; readonly share: number } {
+  const steps = new Float64Array(known.length - 1);
+  for (let k = 1; k < known.length; k++) {
+    steps[k - 1] = (times[known[k]] - times[known[k - 1]]) / (known[k] - known[k - 1]);
+  }
+  steps.sort();
+  const middle = steps[steps.length >> 1];
+  const usual = middle > 0 ? tidy(middle, 1e-6 * middle) : middle;
+  const alike = steps.reduce((sum, step) => sum + (Math.abs(step - usual) <= LOOSE * usual ? 1 : 0), 0);
+  return { usual, share: alike / steps.length };
+}
+
+/** The roundest spacing within what the printed times allow: a decimal of few figures, or a whole number a second. */
+function tidy(mean: number, within: number): number {
+  const slack = Math.max(within, 1e-12 * mean);
+  for (let figures = 1; figures <= 4; figures++) {
+    const round = Number(mean.toPrecision(figures));
+    if (Math.abs(round - mean) <= slack) return round;
+  }
+  const rate = Math.round(1 / mean);
+  if (rate > 0 && Math.abs(1 / rate - mean) <= slack) return 1 / rate;
+  for (let figures = 5; figures <= 15; figures++) {
+    const round = Number(mean.toPrecision(figures));
+    if (Math.abs(round - mean) <= slack) return round;
+  }
+  return mean;
+}
+
+function short(value: number): string {
+  return String(Number(value.toPrecision(4)));
+}
