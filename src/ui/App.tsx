@@ -8,7 +8,7 @@ import { Evidence } from './foot/Evidence.tsx';
 import { Toast } from './foot/Toast.tsx';
 import { FileDrop } from './motions/import/FileDrop.tsx';
 import { SheetScreen } from './sheet/SheetScreen.tsx';
-import { openExample } from './top/example.ts';
+import { openExample } from './top/begin.ts';
 import { openFile, pickProject, type Refused, saveProject } from './top/files.ts';
 import { RefusedDialog } from './top/RefusedDialog.tsx';
 import { TopBar } from './top/TopBar.tsx';

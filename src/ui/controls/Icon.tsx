@@ -16,6 +16,7 @@ const SHAPES = {
       <path d="M8 2.5a5.5 5.5 0 0 1 0 11Z" fill="currentColor" stroke="none" />
     </>
   ),
+  blank: <path d="M3.5 1.8h6l3 3v9.4h-9ZM9.5 1.8v3h3" />,
   open: <path d="M1.8 12.8V3.4h4l1.4 1.8h6v2M1.8 12.8l2-5.6h10.6l-2 5.6Z" />,
   save: <path d="M8 2.2v7.6M4.9 6.9 8 10l3.1-3.1M2.4 10.6v3h11.2v-3" />,
   table: (

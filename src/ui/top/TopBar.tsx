@@ -2,6 +2,7 @@ import { redo, undo, useDocument } from '../../state/document.ts';
 import { setSession, useSession } from '../../state/session.ts';
 import { Button, IconButton } from '../controls/Button.tsx';
 import { Brand } from './Brand.tsx';
+import { openEmpty } from './begin.ts';
 import { Steps } from './Steps.tsx';
 import { TitleBlock } from './TitleBlock.tsx';
 import './top.css';
@@ -38,6 +39,7 @@ export function TopBar({ onOpen, onSave }: TopBarProps) {
           disabled={redoes === null}
           onClick={redo}
         />
+        <IconButton icon="blank" label="New project" onClick={openEmpty} />
         <IconButton icon="open" label="Open a project file" keys="Ctrl+O" onClick={onOpen} />
         <IconButton icon="save" label="Save the project file" keys="Ctrl+S" onClick={onSave} />
         <IconButton icon="record" label="Add records" onClick={() => setSession({ dialog: 'import' })} />
