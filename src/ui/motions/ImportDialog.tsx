@@ -14,7 +14,7 @@ import { Dialog } from '../controls/Dialog.tsx';
 import { FileList } from './import/FileList.tsx';
 import { Foot } from './import/Foot.tsx';
 import { Offer } from './import/Offer.tsx';
-import { PasteSamples } from './import/PasteSamples.tsx';
+import { PasteFoot, PasteSamples } from './import/PasteSamples.tsx';
 import { Preview } from './import/Preview.tsx';
 import { takePasted } from './import/pick.ts';
 import { RawText } from './import/RawText.tsx';
@@ -46,26 +46,31 @@ export function ImportDialog({ onClose }: { readonly onClose: () => void }) {
     if (importStore.getState().files.every(({ leftOut }) => leftOut)) close();
   }, [close]);
   useDialogKeys({ add, mend, body });
+  const offering = files.length === 0 && !pasting;
 
   return (
     <Dialog
       title="Add records"
-      width={1300}
+      width={offering ? 640 : 1300}
       sticky
       onClose={close}
-      foot={<Foot files={files} mend={mend} onAdd={add} onCancel={close} />}
+      foot={
+        pasting ? (
+          <PasteFoot onBack={() => setPasting(false)} />
+        ) : (
+          <Foot files={files} mend={mend} onAdd={add} onCancel={close} />
+        )
+      }
     >
       <div ref={body} className="import">
-        <p className="quiet import-summary" role="status">
-          {summaryOf(files)}
-        </p>
-        {pasting || files.length === 0 ? (
-          pasting ? (
-            <PasteSamples onDone={() => setPasting(false)} />
-          ) : (
-            <Offer onPaste={() => setPasting(true)} />
-          )
-        ) : (
+        {!offering && !pasting && (
+          <p className="quiet import-summary" role="status">
+            {summaryOf(files)}
+          </p>
+        )}
+        {offering && <Offer onPaste={() => setPasting(true)} />}
+        {pasting && <PasteSamples onDone={() => setPasting(false)} />}
+        {!offering && !pasting && (
           <div className="import-parts">
             <FileList files={files} shown={shownId} onPaste={() => setPasting(true)} />
             {shown && <RawText file={shown} />}
@@ -121,8 +126,10 @@ function useDialogKeys({ add, mend, body }: Keys): void {
     if (!dialog) return;
     const onKeyDown = (event: KeyboardEvent) => {
       if (event.key === 'Enter' && (event.ctrlKey || event.metaKey)) {
+        const pasting = dialog.querySelector<HTMLFormElement>('.import-paste');
         if (document.activeElement instanceof HTMLInputElement) document.activeElement.blur();
-        if (importStore.getState().files.some(isReady)) add();
+        if (pasting) pasting.requestSubmit();
+        else if (importStore.getState().files.some(isReady)) add();
         else mend?.apply();
       } else if (event.key === 'F6') goOn(dialog, event.shiftKey);
       else if (event.key === 'Enter' && event.target instanceof Element && event.target.closest('.import-mends')) {

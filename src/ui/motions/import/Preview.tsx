@@ -15,10 +15,17 @@ const LEFT = 40;
 
 /** Acceleration and velocity as read; only the acceleration, as far as it goes, where something stopped the reading. */
 export function Preview({ answer, system }: PreviewProps) {
+  return answer.preview === null ? null : <Traces {...answer} preview={answer.preview} system={system} />;
+}
+
+interface TracesProps extends Omit<ReadAnswer, 'preview'> {
+  readonly preview: NonNullable<ReadAnswer['preview']>;
+  readonly system: System;
+}
+
+function Traces({ preview, measures, reading, system }: TracesProps) {
   const box = useRef<HTMLDivElement>(null);
   const size = useSize(box);
-  const { preview, measures, reading } = answer;
-  if (preview === null) return null;
   const width = Math.max(120, (size?.width ?? 440) - LEFT - 4);
   const stops = preview.stopsAt !== null;
   const moving = reading.warnings.some(({ code }) => code === 'velocity-ends');

@@ -34,7 +34,7 @@ export function WhatWasRead({ file, answer, system }: WhatWasReadProps) {
   const samples = reading.values.length;
   return (
     <dl className="import-rows">
-      <Row name="Layout" from={answers.layout === undefined ? 'found in the file' : 'chosen'}>
+      <Row name="Layout" from={answers.layout === undefined ? 'found' : 'chosen'}>
         <Select<LayoutId>
           label="Layout"
           value={reading.layout}
@@ -42,7 +42,7 @@ export function WhatWasRead({ file, answer, system }: WhatWasReadProps) {
           onChange={(layout) => again({ layout })}
         />
       </Row>
-      <Row name="Heading lines" from={answers.headingLines === undefined ? 'found in the file' : 'answered'}>
+      <Row name="Heading lines" from={answers.headingLines === undefined ? 'found' : 'answered'}>
         <Field
           label="Heading lines"
           width={56}
