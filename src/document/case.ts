@@ -4,6 +4,7 @@ import type { Analysis } from '../core/dynamics/run.ts';
 import type { Result } from '../core/fault.ts';
 import type { Frame } from '../core/frame/frame.ts';
 import { cellFaults } from './cells.ts';
+import { inFileOrder } from './order.ts';
 import type { Project } from './project.ts';
 import { partFaults, stabilityFaults } from './stepFaults.ts';
 
@@ -36,7 +37,7 @@ export function caseOf(project: Project): Result<Case> {
   const faults = cellFaults(project);
   const analysis = project.analysis as Analysis;
   if (!faults.some(({ where }) => where.startsWith('analysis'))) faults.push(...partFaults(used, analysis));
-  if (faults.length > 0) return { ok: false, faults };
+  if (faults.length > 0) return { ok: false, faults: inFileOrder(faults) };
   // Without a fault every cell holds its number.
   const frame = project.frame as Frame;
   const prepared = prepareFrame(frame);

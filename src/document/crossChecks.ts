@@ -57,7 +57,7 @@ function lawFaults(law: Record<string, unknown> | null, where: string): Fault[] 
     }
   }
   if (law?.kind === 'flag' && typeof law.ratio === 'number' && typeof law.hardening === 'number') {
-    if (law.ratio > 1 - law.hardening) {
+    if (law.ratio <= 1 && law.ratio > 1 - law.hardening) {
       const message = `is ${law.ratio}, must be at most 1 - hardening = ${1 - law.hardening}: more would not re-centre`;
       return [{ code: 'out-of-range', where: `${where}.ratio`, message, mend: 'Type a lower ratio' }];
     }

@@ -43,7 +43,7 @@ function faultsOfIssue(issue: Issue, from: unknown, at: string): Fault[] {
     case 'invalid_value':
       return [fault('unknown-value', where, `is ${shown(value)}, must be ${wanted(issue)}`, `Take ${wanted(issue)}`)];
     default:
-      return [fault('not-allowed', where, issue.message, 'Change it')];
+      return [fault('not-allowed', where, issue.message, 'Type another number')];
   }
 }
 
@@ -76,7 +76,7 @@ function wanted(issue: Issue): string {
     case 'invalid_type':
       return kindWord(issue.expected);
     case 'invalid_value':
-      return issue.values.map((value) => JSON.stringify(value)).join(', ');
+      return issue.values.map((value) => JSON.stringify(value)).join(' or ');
     case 'invalid_union':
       return (
         KINDS[String(issue.path.at(-1))] ?? KINDS[String(issue.path.at(-2))] ?? 'one of the kinds of the project file'

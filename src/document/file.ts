@@ -7,6 +7,7 @@ import { readJson } from './json.ts';
 import { migrated } from './migrations.ts';
 import { type ReadFile, type Source, sourceFaults, sourceOf } from './motionSource.ts';
 import { notYet } from './notYet.ts';
+import { inFileOrder } from './order.ts';
 import { type MotionEntry, PROJECT_FORMAT, PROJECT_VERSION, type Project } from './project.ts';
 import { listOf } from './raw.ts';
 import { type FileMotion, type FileProject, projectSchema } from './schema.ts';
@@ -28,7 +29,7 @@ export function readProject(text: string, readFile?: ReadFile): Result<OpenedPro
   if (!read.ok) return read;
   const { file, faults } = read.value;
   if (faults.length === 0) return withSources(file, readFile);
-  return { ok: false, faults: [...faults, ...recordFaults(file, faults, readFile)] };
+  return { ok: false, faults: inFileOrder([...faults, ...recordFaults(file, faults, readFile)]) };
 }
 
 /**
@@ -39,7 +40,7 @@ export function readProjectOnItsWay(text: string): Result<OpenedProject> {
   const read = checked(text, false);
   if (!read.ok) return read;
   const { file, faults } = read.value;
-  return faults.every(isOnItsWay) ? withSources(file, undefined) : { ok: false, faults };
+  return faults.every(isOnItsWay) ? withSources(file, undefined) : { ok: false, faults: inFileOrder(faults) };
 }
 
 interface Checked {

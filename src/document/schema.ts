@@ -108,7 +108,9 @@ const originSchema = z.strictObject({
   mends: z.optional(z.array(z.strictObject({ line: z.int(), was: z.string(), is: z.string(), why: z.string() }))),
 });
 
-const notZero = z.number().check(z.refine((value) => value !== 0, { error: 'is 0, must be another number' }));
+const notZero = z
+  .number()
+  .check(z.refine((value) => value !== 0, { error: 'is 0, which leaves nothing of the motion' }));
 
 /** What the file and the document hold alike of a motion. */
 export const motionUse = {

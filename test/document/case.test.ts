@@ -130,10 +130,10 @@ describe('[DOC-9] numbers that no building has', () => {
         whole++;
         for (const mode of made.value.prepared.modes) expect(mode.period).toBeGreaterThan(0);
       }),
-      { numRuns: 500 },
+      { numRuns: 200 },
     );
-    expect(whole).toBeGreaterThan(50);
-    expect(refused).toBeGreaterThan(50);
+    expect(whole).toBeGreaterThan(20);
+    expect(refused).toBeGreaterThan(20);
   });
   test('a storey that is stiff beyond reckoning is named; a thousand times the next is fine', () => {
     expect(faults(writeAt(three(), 'frame.storeys[1].stiffness', 1e24))).toEqual([
@@ -149,8 +149,8 @@ describe('[DOC-9] numbers that no building has', () => {
     expect(faults(writeAt(project, 'analysis.step', 0.02 / 1e6))).toEqual(['analysis.step too-many-steps']);
     const long = writeAt(project, 'analysis.tail', 1e9);
     expect(faults(writeAt(long, 'limits.drift', 0))).toEqual([
-      'limits.drift not-positive',
       'analysis.tail too-many-steps',
+      'limits.drift not-positive',
     ]);
     expect(faults(writeAt(project, 'analysis.step.parts', 1000))).toEqual([]);
   });

@@ -236,6 +236,23 @@ describe('[DOC-7] the whole of the project file is known', () => {
     ['motions', []],
   ])('%s = %j is allowed', (path, value) => expect(said(at(plain(), path, value))).toEqual([]));
 
+  test('faults stand in the order of the file, storeys and motions by number', () => {
+    let raw = at(plain(), 'limits.drift', 0);
+    raw = at(raw, 'motions[0].used', false);
+    raw = at(raw, 'motions[0].reason', '');
+    raw = at(raw, 'frame.pDelta', 1);
+    for (const i of [4, 0, 2]) raw = at(raw, `frame.storeys[${i}].mass`, i === 2 ? 1e-30 : 0);
+    expect(faultsOf({ ...raw, stray: 1 }).map(({ where }) => where)).toEqual([
+      'frame.storeys[0].mass',
+      'frame.storeys[2].mass',
+      'frame.storeys[4].mass',
+      'frame.pDelta',
+      'motions[0].reason',
+      'limits.drift',
+      'stray',
+    ]);
+  });
+
   test('a million broken samples are one fault, with the first of them and how many follow', () => {
     const samples = Array.from({ length: 50 }, (_, i) => (i < 7 ? i : null));
     const found = faultsOf(at(plain(), 'motions[0].acceleration', samples));
@@ -256,9 +273,9 @@ describe('[DOC-7] the whole of the project file is known', () => {
         expect(read.faults.length).toBeGreaterThan(0);
         for (const fault of read.faults) for (const word of Object.values(fault)) expect(word).not.toBe('');
       }),
-      { numRuns: 300 },
+      { numRuns: 200 },
     );
-    expect(refused).toBeGreaterThan(150);
+    expect(refused).toBeGreaterThan(100);
   });
 });
 
