@@ -16,6 +16,7 @@ describe('[MEA-1] closed forms of simple broken lines', () => {
     expect(m.endVelocity).toBeCloseTo(4, 14);
     expect(m.peakDisplacement).toBeCloseTo(4, 14);
     expect(m.ariasIntensity).toBeCloseTo((Math.PI * 8) / (2 * STANDARD_GRAVITY), 14);
+    expect(m.start5to95).toBeCloseTo(0.1, 12);
     expect(m.duration5to95).toBeCloseTo(1.8, 12);
   });
   // a = t on [0, 2]: v = t^2 / 2, d = t^3 / 6, the integral of a^2 is t^3 / 3.
