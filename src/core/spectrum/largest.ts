@@ -22,7 +22,8 @@ const STEPS_A_PERIOD = 36;
 export function largestDisplacement(ag: Float64Array, interval: number, w: number, z: number): number {
   const period = (2 * Math.PI) / w;
   const parts = Math.max(1, Math.ceil((STEPS_A_PERIOD * interval) / period));
-  const cycle = Math.ceil(STEPS_A_PERIOD / Math.sqrt(1 - z * z));
+  // A damped cycle, or as long as it takes the sinusoid to fade by e^-40, below the last figure.
+  const cycle = Math.ceil(STEPS_A_PERIOD * Math.min(1 / Math.sqrt(1 - z * z), 40 / (2 * Math.PI * z)));
   if (parts <= 2 * cycle) return march(ag, interval, w, z, interval / parts, parts, null);
   const h = period / STEPS_A_PERIOD;
   return march(ag, interval, w, z, h, 2 * cycle + 1, recurrence(w, z, interval - 2 * cycle * h));
