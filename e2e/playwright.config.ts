@@ -12,6 +12,9 @@ export default defineConfig({
   outputDir: '../test-results',
   workers: 1,
   retries: 0,
+  // Two shared cores: a limit for what hangs, not for what is slow.
+  timeout: 180_000,
+  expect: { timeout: 30_000 },
   forbidOnly: true,
   reporter: [['list'], ['json', { outputFile: '../.cache/playwright.json' }]],
   webServer: {
