@@ -61,6 +61,8 @@ export function NumberField({
           if (event.key === 'Enter') commitField(path, system);
           else if (event.key === 'Escape' && typed !== null) giveUpField(path);
           else return;
+          // Esc gives up the edit, and not the dialog around it.
+          event.preventDefault();
           event.stopPropagation();
           event.currentTarget.select();
         }}
