@@ -78,7 +78,7 @@ function faultsOfShape(document: unknown): string[] {
     check(`motions[${i}].scale`, isTyped(motion?.scale));
   }
   check('analysis.method', typeof objectOf(analysis?.method)?.kind === 'string');
-  check('analysis.step', isTyped(analysis?.step) || typeof objectOf(analysis?.step)?.parts === 'number');
+  check('analysis.step', isTyped(analysis?.step) || isTyped(objectOf(analysis?.step)?.parts));
   for (const key of ['tail', 'stopDrift']) check(`analysis.${key}`, isTyped(analysis?.[key]));
   for (const key of ['drift', 'factor']) check(`limits.${key}`, isTyped(limits?.[key]));
   check('limits.source', typeof limits?.source === 'string');
