@@ -118,7 +118,7 @@ export function printRatio(value: number): string {
   return grouped(value.toFixed(2));
 }
 
-/** Decimal digits without an exponent, as far as anybody would read them so. */
+/** Decimal digits without an exponent, where they are still readable that way. */
 function plain(value: number): string {
   const text = String(value);
   if (!text.includes('e-') || Math.abs(value) < 1e-12) return text;
