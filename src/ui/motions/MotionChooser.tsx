@@ -5,7 +5,7 @@ import { letterOf } from '../controls/letters.ts';
 import { Select } from '../controls/Select.tsx';
 
 /** From so many motions on the chooser is a list. */
-export const LIST_FROM = 13;
+const LIST_FROM = 13;
 
 export interface MotionChooserProps {
   readonly motions: readonly MotionEntry[];

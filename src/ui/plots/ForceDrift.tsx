@@ -185,7 +185,7 @@ function LoopCursor({ loop, axes }: { readonly loop: Loop; readonly axes: Axes }
         const left = x > axes.size.width - 150;
         const below = Math.min(axes.size.height - MARGIN.b - 4, y + 16);
         text.setAttribute('x', (left ? x - 8 : x + 8).toFixed(1));
-        text.setAttribute('y', (left && y > MARGIN.t + 20 ? y - 8 : below).toFixed(1));
+        text.setAttribute('y', (left ? Math.max(6, y - 8) : below).toFixed(1));
         text.setAttribute('text-anchor', left ? 'end' : 'start');
         const force = axes.force.decimals === 0 ? 0 : 1;
         text.textContent = `${axes.drift.print(drift, axes.drift.decimals)} ${axes.drift.unit}, ${axes.force.print(shear, force)} ${axes.force.unit}`;

@@ -36,9 +36,7 @@ export function TableView({ table, system, height }: TableViewProps) {
         <thead>
           <tr aria-rowindex={1}>
             {table.columns.map((column) => (
-              <th key={column.key} scope="col" className={column.quantity === 'text' ? 'words' : ''}>
-                {headOf(column, system)}
-              </th>
+              <Head key={column.key} column={column} system={system} />
             ))}
           </tr>
         </thead>
@@ -55,6 +53,22 @@ export function TableView({ table, system, height }: TableViewProps) {
         </tbody>
       </table>
     </div>
+  );
+}
+
+/** A long name breaks, but not into single words. */
+const LONG = 14;
+
+function Head({ column, system }: { readonly column: Column; readonly system: System }) {
+  const words = headOf(column, system);
+  return (
+    <th
+      scope="col"
+      className={column.quantity === 'text' ? 'words' : ''}
+      style={{ minWidth: words.length > LONG ? 108 : undefined }}
+    >
+      {words}
+    </th>
   );
 }
 

@@ -1,6 +1,6 @@
 import type * as Plotly from 'plotly.js-basic-dist-min';
 
-export type PlotLibrary = typeof Plotly;
+type PlotLibrary = typeof Plotly;
 
 /** One plot as it shall stand: its lines, its axes, its size. */
 export interface PlotSpec {
@@ -13,7 +13,7 @@ export interface PlotSpec {
 let loading: Promise<PlotLibrary> | null = null;
 
 /** The plot library, fetched when it is first asked for; a failed fetch is tried again at the next call. */
-export function plotLibrary(): Promise<PlotLibrary> {
+function plotLibrary(): Promise<PlotLibrary> {
   loading ??= import('plotly.js-basic-dist-min').then(async (module) => {
     // Reading the library in is a task of its own: the first plot waits for the next one.
     await new Promise((resolve) => setTimeout(resolve, 0));

@@ -16,8 +16,7 @@ export interface StackGeometry {
   readonly numbers: number;
 }
 
-/** Width of the labels at the left and the gap behind them [px]. */
-export const LABELS = 168;
+/** The labels at the left and the gap behind them [px]. */
 const AXIS_X = 196;
 
 /** Room under the play button that a second row of letters may take [px]. */
