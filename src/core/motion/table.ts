@@ -194,10 +194,7 @@ function rowsOf(lines: Lines, first: number, last: number, comma: Comma, columns
     if (isComment(lines, i)) continue;
     read(i);
     if (tokens.count === 0) continue;
-    if (
-      tokens.bad > 0 &&
-      (tokens.bad === tokens.count || (2 * tokens.bad > tokens.count && tokens.count !== columns))
-    ) {
+    if (tokens.bad > 0 && (tokens.bad === tokens.count || (tokens.count !== columns && hasWord(lines, tokens)))) {
       waiting.push(i);
       continue;
     }

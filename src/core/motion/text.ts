@@ -65,9 +65,15 @@ function codesOf(raw: Uint8Array): Uint8Array | Uint16Array {
   if (zerosFrom(raw, 1)) return plain(fromUtf16(raw, true));
   if (zerosFrom(raw, 0)) return plain(fromUtf16(raw, false));
   const bytes = raw[0] === 0xef && raw[1] === 0xbb && raw[2] === 0xbf ? raw.subarray(3) : raw;
-  if (bytes.every((byte) => byte < 0x80)) return bytes;
+  if (isAscii(bytes)) return bytes;
   const decoded = fromUtf8(bytes);
   return decoded ? plain(decoded) : bytes;
+}
+
+function isAscii(bytes: Uint8Array): boolean {
+  let all = 0;
+  for (let i = 0; i < bytes.length; i++) all |= bytes[i];
+  return all < 0x80;
 }
 
 /** Whether nearly every second byte, from an offset on, is zero: UTF-16 without its mark. */
