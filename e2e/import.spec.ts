@@ -152,6 +152,10 @@ test('interval and unit are answered before a bare column of values is added, al
   await page.keyboard.press('Tab');
   await page.keyboard.press('Enter');
   await expect(dialog(page).getByRole('textbox')).toBeFocused();
+  await page.keyboard.press('Escape');
+  await dialog(page).getByRole('button', { name: 'Paste samples' }).focus();
+  await page.keyboard.press('Enter');
+  await expect(dialog(page).getByRole('textbox')).toBeFocused();
   await page.keyboard.insertText(values.join('\n'));
   await page.keyboard.press('Control+Enter');
   await expect(files(page)).toContainText('asks for its interval and unit');

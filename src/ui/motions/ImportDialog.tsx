@@ -101,7 +101,9 @@ function Understood({ file, mend }: { readonly file: ImportFile; readonly mend: 
       {answer !== null && !leftOut && (
         <>
           {mend !== null && <Stopped key={mend.fault.id} answer={answer} mend={mend} system={system} />}
-          <WhatWasRead key={file.id} file={file} answer={answer} system={system} />
+          {(answer.reading.values.length > 0 || Object.keys(file.answers).length > 0) && (
+            <WhatWasRead key={file.id} file={file} answer={answer} system={system} />
+          )}
           {mend === null && <Preview answer={answer} system={system} />}
           <ThingsToLookAt file={file} />
         </>

@@ -12,6 +12,12 @@ export function PasteSamples({ onDone }: { readonly onDone: () => void }) {
     <form
       id={FORM}
       className="import-paste"
+      onKeyDown={(event) => {
+        if (event.key !== 'Escape') return;
+        // Without this the dialog would close, with all the files in it.
+        event.preventDefault();
+        onDone();
+      }}
       onSubmit={(event) => {
         event.preventDefault();
         const text = area.current?.value ?? '';
@@ -38,7 +44,7 @@ export function PasteFoot({ onBack }: { readonly onBack: () => void }) {
       <Button onClick={onBack}>Back</Button>
       <span className="small import-keys">
         <kbd className="keycap">Ctrl</kbd> <kbd className="keycap">Enter</kbd> reads, <kbd className="keycap">Esc</kbd>{' '}
-        closes
+        goes back
       </span>
     </div>
   );
