@@ -69,6 +69,18 @@ describe('reading a file off the main thread', () => {
     expect(answer.excerpt.find(({ line }) => line === 700)?.text).toBe('0,12,3 bad');
   });
 
+  it('draws what was read before the value that stopped it', async () => {
+    const rows = lines(900);
+    rows[600] = 'void';
+    const engine = opened(inlineEngine(immediateTurns()));
+    const answer = doneOf(await engine.read('q', 'a.txt', bytesOf(rows.join('\n')), { unit: 'g', interval: 0.01 }));
+    expect(answer.measures).toBeNull();
+    expect(answer.preview?.stopsAt).toBeCloseTo(6, 12);
+    expect(answer.preview?.end).toBeCloseTo(8.99, 12);
+    expect(answer.preview?.time.every((time) => time < 6)).toBe(true);
+    expect(answer.preview?.acceleration.every(Number.isFinite)).toBe(true);
+  });
+
   it('a run goes on beside it', async () => {
     const engine = opened(createPool({ size: 2, make: fakeEnd }));
     engine.putMotion('a', samplesOf(400));
