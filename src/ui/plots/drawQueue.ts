@@ -1,3 +1,4 @@
+import { documentStore } from '../../state/document.ts';
 import { resultsStore } from '../../state/results.ts';
 
 type Draw = () => Promise<void>;
@@ -5,10 +6,15 @@ type Draw = () => Promise<void>;
 /** What waits to be drawn: one entry a plot, a newer one takes the place of the older. */
 const waiting = new Map<object, Draw>();
 let under = false;
+let lastAsked = 0;
+
+/** While a cell is edited the plots wait for so long a pause: the next key's answer goes first [ms]. */
+const PAUSE = 80;
 
 /** Draws at most one plot a frame, in the order in which they were first asked for; returns how to withdraw it. */
 export function queueDraw(plot: object, draw: Draw): () => void {
   waiting.set(plot, draw);
+  lastAsked = performance.now();
   if (!under) {
     under = true;
     void afterAnswers().then(next);
@@ -39,6 +45,11 @@ function next(): void {
   const [entry] = waiting;
   if (entry === undefined) {
     under = false;
+    return;
+  }
+  const early = documentStore.getState().draft === null ? 0 : lastAsked + PAUSE - performance.now();
+  if (early > 0) {
+    setTimeout(next, early);
     return;
   }
   const [plot, draw] = entry;
