@@ -2,13 +2,14 @@ import { useEffect, useState } from 'react';
 import type { MotionMeasures } from '../../core/motion/reading.ts';
 import type { MotionEntry } from '../../document/project.ts';
 import { samplesOf } from '../../state/samples.ts';
+import { whenIdle } from '../plots/whenIdle.ts';
 import { knownMeasures, measuresOfSamples } from './measures.ts';
 
 /** Measures by digest of the samples: those not known yet come one by one, when the page has a moment to spare. */
 export function useKnownMeasures(motions: readonly MotionEntry[]): ReadonlyMap<string, MotionMeasures> {
   const [measures, setMeasures] = useState(() => known(motions));
   useEffect(() => {
-    let waiting = 0;
+    let withdraw = () => {};
     const next = () => {
       const open = motions.find(({ samples }) => {
         const values = samplesOf(samples);
@@ -21,10 +22,10 @@ export function useKnownMeasures(motions: readonly MotionEntry[]): ReadonlyMap<s
       const values = samplesOf(open.samples);
       if (values !== undefined) measuresOfSamples(values, open.interval);
       setMeasures(known(motions));
-      waiting = requestIdleCallback(next, { timeout: 200 });
+      withdraw = whenIdle(next, 200);
     };
     next();
-    return () => cancelIdleCallback(waiting);
+    return () => withdraw();
   }, [motions]);
   return measures;
 }

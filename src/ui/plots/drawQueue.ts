@@ -1,5 +1,6 @@
 import { documentStore } from '../../state/document.ts';
 import { resultsStore } from '../../state/results.ts';
+import { whenIdle } from './whenIdle.ts';
 
 type Draw = () => Promise<void>;
 
@@ -29,7 +30,7 @@ let answersShown: Promise<void> | null = null;
 /** Resolves once the first answers stand on the screen (or there are none to come) and the page has a moment to spare. */
 function afterAnswers(): Promise<void> {
   answersShown ??= new Promise<void>((resolve) => {
-    const spare = () => requestIdleCallback(() => resolve(), { timeout: 500 });
+    const spare = () => void whenIdle(resolve, 500);
     const painted = () => requestAnimationFrame(() => setTimeout(spare, 0));
     if (resultsStore.getState().status !== 'running') return painted();
     const stop = resultsStore.subscribe(({ status }) => {
