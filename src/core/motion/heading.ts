@@ -53,7 +53,7 @@ const INTERVALS: readonly { readonly pattern: RegExp; readonly rate: boolean; re
   },
 ];
 
-const WHOLE = '(\\d{1,9}|\\d{1,3}(?:[ ,]\\d{3})+)';
+const WHOLE = '(\\d{1,3}(?:[ ,]\\d{3})+|\\d{1,9})';
 const COUNTED = '(?:data\\s+)?(?:points|samples|values|data|pts|readings|accelerations?\\s+(?:points|values))';
 const COUNTS: readonly RegExp[] = [
   new RegExp(`\\bNPTS?\\s*(?:=|:)?\\s*${WHOLE}(?![\\d.])`, 'i'),

@@ -31,7 +31,8 @@ const GRAVITY: readonly (readonly [RegExp, number])[] = [
 /** Parts of g and unscaled counts: no unit of ours. */
 const FOREIGN: readonly (readonly [RegExp, number])[] = [
   [/(?:%\s*(?:of\s+)?g\b|\bpercent\s+(?:of\s+)?g\b|\bg\s*[/*]\s*10+\b|\bmilli-?\s?g(?:'s|s)?\b)/gi, 3],
-  [/(?:\bunits?\b[^\n]{0,20}?[\s([:=]|[([]\s*)(?:mg|counts?|volts?|mv|lsb)\b/gi, 3],
+  [/(?<=\bunits?\b[\s:=]*(?:(?:of|is|in)\s+)?)[\d.]+(?:e[+-]?\d+)?[\s*]*g\b/gi, 3],
+  [/(?<=\bunits?\b[^\n]{0,20}?[\s([:=]|[([]\s*)(?:mg|counts?|volts?|mv|lsb)\b/gi, 3],
 ];
 
 const UNITS_WORD = /\bunits?\b/i;
@@ -55,11 +56,7 @@ export function unitsIn(text: string, line: number): UnitFound[] {
     );
   }
   for (const [pattern, weight] of FOREIGN) {
-    for (const match of text.matchAll(pattern)) {
-      const lead = match[0].search(/\S+$/);
-      const from = pattern === FOREIGN[0][0] ? 0 : lead;
-      add('unknown', match.index + from, match[0].slice(from), weight);
-    }
+    for (const match of text.matchAll(pattern)) add('unknown', match.index, match[0], weight);
   }
   for (const [pattern, weight] of GRAVITY) {
     for (const match of text.matchAll(pattern)) {
