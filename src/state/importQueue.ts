@@ -56,6 +56,20 @@ export function answerRecord(id: string, answers: RecordAnswers): void {
   void read(id);
 }
 
+/** Names a record. One that was read takes the name at once: it need not be read again. */
+export function nameRecord(id: string, name: string): void {
+  const file = importStore.getState().files.find((entry) => entry.id === id);
+  if (file === undefined) return;
+  const answers = { ...file.answers, name };
+  if (file.status !== 'read' || file.answer === null) {
+    answerRecord(id, answers);
+    return;
+  }
+  const { reading } = file.answer;
+  const motion = reading.motion === null ? null : { ...reading.motion, name };
+  change(id, { answers, answer: { ...file.answer, reading: { ...reading, name, motion } } });
+}
+
 export function showRecord(id: string): void {
   importStore.setState({ shown: id });
 }

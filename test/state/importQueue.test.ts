@@ -8,6 +8,7 @@ import {
   importStore,
   isReady,
   leaveRecordOut,
+  nameRecord,
   offerRecords,
   removeRecord,
 } from '../../src/state/importQueue.ts';
@@ -89,6 +90,22 @@ describe('record files on their way in', () => {
     expect(documentStore.getState().undoes).toBeNull();
     leaveRecordOut(a.id, false);
     expect(addReadyRecords()).toEqual(['A (2)']);
+  });
+
+  it('that were read take a name at once, without being read again', async () => {
+    offerRecords([whole('a.txt')]);
+    await settle();
+    nameRecord(files()[0].id, 'Slab');
+    expect(waiting).toEqual([]);
+    expect(files()[0].answers.name).toBe('Slab');
+    expect(addReadyRecords()).toEqual(['Slab']);
+  });
+
+  it('named while they are read, are read under the name', async () => {
+    offerRecords([whole('a.txt')]);
+    nameRecord(files()[0].id, 'Slab');
+    await settle();
+    expect(addReadyRecords()).toEqual(['Slab']);
   });
 
   it('that could not be read say why', async () => {
