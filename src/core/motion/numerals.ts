@@ -49,7 +49,8 @@ export class Tokens {
         i++;
         continue;
       }
-      if (c === SEMICOLON || (c === COMMA && parts)) {
+      // A comma between quoted values parts them, whatever it is within one.
+      if (c === SEMICOLON || (c === COMMA && (parts || (codes[i - 1] === QUOTE && codes[i + 1] === QUOTE)))) {
         separators++;
         i++;
         continue;

@@ -42,9 +42,8 @@ export function settledInterval(
     const choices = [{ id: 'typed', label: 'Type the interval', asksValue: true }];
     return { ...none, value: null, from: 'file', faults: [notPositive(`line ${line}`, line, value, choices, span)] };
   }
-  const differs = answered !== undefined && Math.abs(answered - value) > SAME * value;
-  const faults = differs ? [contradiction('interval', line, `${value} s`, `${answered} s`)] : [];
-  return { ...none, value, from: 'file', faults };
+  if (answered === undefined || Math.abs(answered - value) <= SAME * value) return { ...none, value, from: 'file' };
+  return against('interval', { value, text: `${value} s`, line }, { value: answered, text: `${answered} s` }, answers);
 }
 
 /** The unit of the file, or the answer where the file has none; an answer that contradicts the file is a fault. */
@@ -78,8 +77,8 @@ export function settledUnit(
     };
     return { ...none, value: null, from: 'file', faults: [fault] };
   }
-  const faults = answered !== null && answered !== value ? [contradiction('unit', line, value, answered)] : [];
-  return { ...none, value, from: 'file', faults };
+  if (answered === null || answered === value) return { ...none, value, from: 'file' };
+  return against('unit', { value, text: value, line }, { value: answered, text: answered }, answers);
 }
 
 function positive(value: number): boolean {
@@ -105,16 +104,45 @@ function notPositive(
   };
 }
 
-function contradiction(what: 'interval' | 'unit', line: number, said: string, answered: string): RecordFault {
-  return {
-    id: `contradicts-${what}`,
-    code: `contradicts-${what}`,
-    where: what,
-    line,
-    message: `line ${line} says ${said}, the answer is ${answered}`,
-    mend: `Leave the ${what} to the file`,
-    choices: [LEAVE_OUT],
-  };
+/** An answer against what the file says is a fault, until the user says in so many words which of the two counts. */
+function against<T>(
+  what: 'interval' | 'unit',
+  said: { readonly value: T; readonly text: string; readonly line: number },
+  answered: { readonly value: T; readonly text: string },
+  { mends }: RecordAnswers,
+): SettledValue<T> {
+  const none = { faults: [], warnings: [], mends: [] };
+  const { line } = said;
+  const id = `contradicts-${what}`;
+  switch (mends?.[id]?.choice) {
+    case 'file':
+      return { ...none, value: said.value, from: 'file' };
+    case 'answer': {
+      const why = `the ${what} was answered against the file`;
+      return {
+        ...none,
+        value: answered.value,
+        from: 'answer',
+        mends: [{ line, was: said.text, is: answered.text, why }],
+      };
+    }
+    default: {
+      const fault: RecordFault = {
+        id,
+        code: id,
+        where: what,
+        line,
+        message: `line ${line} says ${said.text}, the answer is ${answered.text}`,
+        mend: `Leave the ${what} to the file`,
+        choices: [
+          { id: 'file', label: `Take ${said.text}, as the file says` },
+          { id: 'answer', label: `Take ${answered.text}, as answered`, detail: 'What the file says is passed over.' },
+          LEAVE_OUT,
+        ],
+      };
+      return { ...none, value: said.value, from: 'file', faults: [fault] };
+    }
+  }
 }
 
 function disputed(heading: Heading, what: 'interval' | 'unit'): Fault[] {

@@ -5,6 +5,8 @@ import type { AccelerationUnit, Motion } from './motion.ts';
 
 /** From this interval on the lost high frequencies are said. Nyquist: 1 / (2 x interval). */
 const COARSE = 0.02;
+/** No recorder of ground motion samples at a longer or a shorter interval [s]. Own figures. */
+const INTERVALS = { least: 1e-4, most: 0.1 };
 /** Share of the peak above which a last sample is cut off. Source: project-file page. */
 const CUT_OFF = 0.01;
 /** Share of its peak at which a velocity that ends is far from zero. Own figure. */
@@ -34,6 +36,14 @@ export function motionWarnings(motion: Motion, unit: AccelerationUnit): Fault[] 
       'end of the record',
       `the velocity ends at ${short(measures.endVelocity)} m/s, not at zero; a shifted baseline does that`,
       'Use it as read, or take a corrected record',
+    );
+  }
+  if (interval > INTERVALS.most || interval < INTERVALS.least) {
+    warn(
+      'implausible-interval',
+      'interval',
+      `${short(interval)} s is no usual interval of a recorder`,
+      'Check that it is in seconds',
     );
   }
   if (interval >= COARSE) {

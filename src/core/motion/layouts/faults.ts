@@ -1,3 +1,4 @@
+import type { Fault } from '../../fault.ts';
 import type { RecordAnswers, RecordFault } from '../reading.ts';
 import type { Table } from '../table.ts';
 import { LEAVE_OUT, rowLength } from './layout.ts';
@@ -66,6 +67,29 @@ export function looseFigures(table: Table, answers: RecordAnswers): RecordFault[
       message: 'holds figures like the rows, with text between them and the rows',
       mend: 'Pass them over as heading, or mend the file',
       choices: [{ id: 'heading', label: 'Pass them over as heading' }, LEAVE_OUT],
+    },
+  ];
+}
+
+/** More blank lines than these part a column into blocks, and are no lost values. Own figure. */
+const LOST = 3;
+
+/** A blank line within a column of values may be a value that was lost; `between` are the lines of text there. */
+export function blankLines({ rows, columns, rowLine, between }: Table): Fault[] {
+  if (columns !== 1) return [];
+  const blank: number[] = [];
+  for (let r = 1; r < rows && blank.length <= LOST; r++) {
+    for (let line = rowLine[r - 1] + 1; line < rowLine[r] && blank.length <= LOST; line++) {
+      if (!between.some((text) => text.line === line)) blank.push(line);
+    }
+  }
+  if (blank.length === 0 || blank.length > LOST) return [];
+  return [
+    {
+      code: 'blank-line',
+      where: blank.length === 1 ? `line ${blank[0]}` : `lines ${blank.join(', ')}`,
+      message: `${blank.length === 1 ? 'holds' : 'hold'} no value among the values; none was read for it`,
+      mend: 'If a value is missing there, write it into the file',
     },
   ];
 }

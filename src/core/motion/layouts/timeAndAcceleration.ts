@@ -7,29 +7,38 @@ import { oddRows } from './faults.ts';
 import { type Layout, LEAVE_OUT, rowLength } from './layout.ts';
 import { timeColumn } from './timeColumn.ts';
 
-/** Rows that are looked at, and the share of them in which the time must rise as usual. Own figures. */
+/** Rows that are looked at, and the share of them in which the time must go on as usual. Own figures. */
 const PROBE = 200;
-const RISES = 0.8;
+const ALIKE = 0.8;
 
-const TIME_WORD = /\b(?:time|zeit|temps|tiempo|tempo|t|sec|seconds?)\b/i;
-const ACCELERATION_WORD = /\b(?:acc|accel|accelerations?|accelerogram|ag|a)\b/i;
-const OTHER_WORD = /\b(?:vel|velocity|disp|displ|displacement|index|no|nr|n|sample|point)\b/i;
+// Not \b: names such as time_ms and acc_g are parted by underscores.
+const TIME_WORD = /(?<![a-z])(?:time|zeit|temps|tiempo|tempo|t|sec|seconds?)(?![a-z])/i;
+const MILLISECONDS = /(?<![a-z])(?:ms|msec|milliseconds?)(?![a-z])/i;
+const ACCELERATION_WORD = /(?<![a-z])(?:acc|accel|accelerations?|accelerogram|ag|a)(?![a-z])/i;
+const OTHER_WORD = /(?<![a-z])(?:vel|velocity|disp|displ|displacement|index|no|nr|n|sample|point)(?![a-z])/i;
 
 /** Time in one column, acceleration in another; which, the names over them, the figures or the answers tell. */
 export const timeAndAcceleration: Layout = {
   id: 'time-and-acceleration',
   name: 'time and acceleration in columns',
-  recognise: (table) => (table.columns >= 2 && timeColumnOf(table, columnNames(table)) !== null ? 0.9 : 0),
+  recognise: (table) => {
+    if (table.columns < 2) return 0;
+    return timeColumnOf(table, columnNames(table)) !== null || numberingOf(table) !== null ? 0.9 : 0;
+  },
   read: (table, heading, answers) => {
     const names = columnNames(table);
-    const time = answers.columns?.time ?? timeColumnOf(table, names) ?? 0;
+    const timed = answers.columns?.time ?? timeColumnOf(table, names);
+    const numbering = timed === null ? numberingOf(table) : null;
+    const time = timed ?? numbering ?? 0;
     const candidates = accelerationColumns(names, time);
     const acceleration = answers.columns?.acceleration ?? candidates[0] ?? (time === 0 ? 1 : 0);
     const values = columnOf(table, acceleration);
     const times = columnOf(table, time);
-    const scale = /\b(?:ms|msec|milliseconds?)\b/i.test(names[time]?.name ?? '') ? 1e-3 : 1;
+    const scale = MILLISECONDS.test(names[time]?.name ?? '') ? 1e-3 : 1;
     if (scale !== 1) for (let i = 0; i < times.length; i++) times[i] *= scale;
-    const spacing = timeColumn(times, time, table, answers);
+    // Numbers of samples tell whether one is missing, and not the interval.
+    const column = timeColumn(times, time, table, answers);
+    const spacing = numbering === null ? column : { ...column, interval: null };
     const settled = withHeading(spacing.interval, heading.interval, table, answers);
     return {
       values,
@@ -41,7 +50,7 @@ export const timeAndAcceleration: Layout = {
       facts: [],
       faults: [...spacing.faults, ...settled.faults, ...oddRows(table, 0, answers, 'longer')],
       warnings: [
-        ...lateStart(times, settled.interval?.value ?? null, table.rowLine[0]),
+        ...(numbering === null ? lateStart(times, settled.interval?.value ?? null, table.rowLine[0]) : []),
         ...otherColumns(names, candidates, acceleration, answers),
       ],
       mends: spacing.mends,
@@ -58,16 +67,25 @@ function columnOf(table: Table, column: number): Float64Array {
   return out;
 }
 
-/** The column that rises evenly: the one named time, else one whose step is not that of a mere numbering. */
+/** The column that goes on evenly (one that falls is a time at fault): the one named time, else one that does not number. */
 function timeColumnOf(table: Table, names: readonly ColumnName[]): number | null {
-  const rising = names.map((_, k) => k).filter((k) => rises(table, k) !== null);
-  const named = rising.find((k) => TIME_WORD.test(names[k].name));
+  const even = names.map((_, k) => k).filter((k) => usualStep(table, k) !== null);
+  const named = even.find((k) => TIME_WORD.test(names[k].name));
   if (named !== undefined) return named;
-  return rising.find((k) => rises(table, k) !== 1) ?? null;
+  return even.find((k) => usualStep(table, k) !== 1) ?? null;
 }
 
-/** The usual step of a column that rises in most of the rows looked at; null where it does not. */
-function rises(table: Table, column: number): number | null {
+/** The column that numbers the samples 0, 1, 2 or 1, 2, 3; null where there is none. */
+function numberingOf(table: Table): number | null {
+  for (let k = 0; k < table.columns; k++) {
+    const first = table.values[table.rowStart[0] + k];
+    if ((first === 0 || first === 1) && usualStep(table, k) === 1) return k;
+  }
+  return null;
+}
+
+/** The usual step of a column that goes on by it in most of the rows looked at; null where it does not. */
+function usualStep(table: Table, column: number): number | null {
   const { rows, columns, values, rowStart } = table;
   if (rows < 3) return null;
   const steps: number[] = [];
@@ -76,10 +94,12 @@ function rises(table: Table, column: number): number | null {
     const step = values[rowStart[r] + column] - values[rowStart[r - 1] + column];
     if (!Number.isNaN(step)) steps.push(step);
   }
-  steps.sort((a, b) => a - b);
-  const usual = steps[steps.length >> 1] ?? 0;
-  const alike = steps.filter((step) => Math.abs(step - usual) <= 0.5 * usual).length;
-  return usual > 0 && steps.length >= 2 && alike >= RISES * steps.length ? usual : null;
+  if (steps.length < 2) return null;
+  const middle = [...steps].sort((a, b) => a - b)[steps.length >> 1];
+  // Times that are printed coarsely stand still every now and then.
+  const usual = middle > 0 ? middle : steps.reduce((sum, step) => sum + step, 0) / steps.length;
+  const alike = steps.filter((step) => step >= 0 && step <= 2.05 * usual).length;
+  return usual > 0 && alike >= RISES * steps.length ? usual : null;
 }
 
 /** Columns that may be the acceleration, the likeliest first. */

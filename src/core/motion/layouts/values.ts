@@ -1,6 +1,6 @@
 import type { Heading } from '../heading.ts';
 import { cellOf, type Table } from '../table.ts';
-import { looseFigures, oddRows } from './faults.ts';
+import { blankLines, looseFigures, oddRows } from './faults.ts';
 import type { Layout, Series } from './layout.ts';
 
 /** One value a line, or rows of values read across and then down; the interval is asked for unless words tell it. */
@@ -27,7 +27,7 @@ export function acrossThenDown(table: Table, heading: Heading): Series {
     firstRow: 0,
     facts: [],
     faults: [],
-    warnings: [],
+    warnings: blankLines(table),
     mends: [],
   };
 }
