@@ -99,7 +99,7 @@ function usualStep(table: Table, column: number): number | null {
   // Times that are printed coarsely stand still every now and then.
   const usual = middle > 0 ? middle : steps.reduce((sum, step) => sum + step, 0) / steps.length;
   const alike = steps.filter((step) => step >= 0 && step <= 2.05 * usual).length;
-  return usual > 0 && alike >= RISES * steps.length ? usual : null;
+  return usual > 0 && alike >= ALIKE * steps.length ? usual : null;
 }
 
 /** Columns that may be the acceleration, the likeliest first. */
