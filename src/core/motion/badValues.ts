@@ -5,6 +5,8 @@ import { type Place, placeOf, type Table } from './table.ts';
 
 /** Faults of spoilt values that are listed one by one. */
 const LISTED = 50;
+/** No acceleration in any unit is larger: a slip that would overflow. Own figure. */
+const LARGEST = 1e12;
 
 /**
  * Entries of a series that are no numbers: those for which a mend was chosen are mended in place, the others are faults, the
@@ -24,7 +26,7 @@ export function badValues(
   let bad = 0;
   let more = 0;
   for (let i = 0; i < values.length; i++) {
-    if (!Number.isNaN(values[i])) continue;
+    if (Math.abs(values[i]) <= LARGEST) continue;
     bad++;
     if (faults.length === LISTED) {
       more++;

@@ -57,7 +57,14 @@ export function readRecord(file: string, bytes: Uint8Array, answers: RecordAnswe
     ...parts.flatMap((part) => part.faults),
     ...(counted.values.length < 2 ? [tooFew(counted.values.length)] : []),
   ];
-  const mends: Mend[] = [...text.mends, ...series.mends, ...interval.mends, ...counted.mends, ...bad.mends];
+  const mends: Mend[] = [
+    ...text.mends,
+    ...series.mends,
+    ...interval.mends,
+    ...unit.mends,
+    ...counted.mends,
+    ...bad.mends,
+  ];
   const warnings: Fault[] = [
     ...counted.warnings,
     ...series.warnings,

@@ -57,6 +57,7 @@ const TEXTS_KEPT = 50;
 const LONGEST_TEXT = 40;
 /** A slip such as `0,0123`, `1.2.3` or `1E999`; a date or a time of day is none. */
 const NUMBER_LIKE = /^[+-]?[\d.,]*\d[\d.,]*(?:[eEdD][+-]?\d+)?$/;
+const MISSING = /^(?:-{1,4}|\*+|[x?]+|n\/?a)$/i;
 const NOT_A_NUMBER = /^[+-]?(?:nan|inf(?:inity)?)$/i;
 
 /**
@@ -142,7 +143,7 @@ function firstRow(lines: Lines, skip: number, comma: Comma, columns: number, tok
       if (isComment(lines, i)) continue;
       tokens.read(lines, lines.start[i], lines.end[i], comma);
       if (tokens.count === 0) continue;
-      const row = tokens.bad === 0 || (tokens.count === columns && spoilt(lines, tokens));
+      const row = tokens.bad === 0 || (tokens.count === columns && spoilt(lines, tokens, runLength > 0));
       if (row) {
         runLength++;
         if (run.length < SURELY_ROWS) run.push(i);
@@ -235,12 +236,15 @@ function isComment({ codes, start, end }: Lines, i: number): boolean {
   return c === 35 || c === 37 || c === 33 || (c === 47 && codes[at + 1] === 47);
 }
 
-/** Whether a line's bad tokens are spoilt values: no words beside numbers; alone on the line, made of a number's signs. */
-function spoilt(lines: Lines, tokens: Tokens): boolean {
+/**
+ * Whether a line's bad tokens are spoilt values: no words beside numbers; alone on the line, made of a number's signs or,
+ * within the rows, a mark for a value that is missing.
+ */
+function spoilt(lines: Lines, tokens: Tokens, within: boolean): boolean {
   if (tokens.bad < tokens.count) return !hasWord(lines, tokens);
   for (let t = 0; t < tokens.count; t++) {
     const text = textBetween(lines.codes, tokens.from[t], Math.min(tokens.to[t], tokens.from[t] + LONGEST_TEXT));
-    if (!NOT_A_NUMBER.test(text) && !NUMBER_LIKE.test(text)) return false;
+    if (!NOT_A_NUMBER.test(text) && !NUMBER_LIKE.test(text) && !(within && MISSING.test(text))) return false;
   }
   return true;
 }

@@ -1,5 +1,6 @@
 import type { Said } from '../heading.ts';
 import { cellOf, type Table } from '../table.ts';
+import { components } from './components.ts';
 import { looseFigures, oddRows } from './faults.ts';
 import { type Layout, rowLength } from './layout.ts';
 import { acrossThenDown } from './values.ts';
@@ -18,26 +19,30 @@ export const countAndInterval: Layout = {
   read: (table, heading, answers) => {
     const bare = heading.interval === null && heading.count === null ? bareHeading(table) : null;
     const firstRow = bare?.rows ?? 0;
+    const said = { ...heading, interval: bare?.interval ?? heading.interval, count: bare?.count ?? heading.count };
+    const column = components(table, said, firstRow, answers);
+    if (column !== null) return column;
     const from = table.rowStart[firstRow];
-    const series = acrossThenDown(table, heading);
+    const series = acrossThenDown(table, said);
     const values = series.values.subarray(from);
-    const count = bare?.count ?? series.count;
-    const told = count?.value === values.length;
+    const told = said.count?.value === values.length;
     return {
       ...series,
       values,
       cellOf: (i) => cellOf(table, i + from),
-      interval: bare?.interval ?? series.interval,
-      count,
       firstRow,
       faults: told ? [] : [...(bare ? [] : looseFigures(table, answers)), ...oddRows(table, firstRow, answers)],
     };
   },
 };
 
+/** A smaller number is no count that stands alone. Own figure. */
+const LEAST_COUNT = 20;
+
 interface BareHeading {
   readonly count: Said<number>;
-  readonly interval: Said<number>;
+  /** Null: the count stands alone. */
+  readonly interval: Said<number> | null;
   /** Rows of the table that are this heading. */
   readonly rows: number;
 }
@@ -55,6 +60,9 @@ function bareHeading(table: Table): BareHeading | null {
       return { count: bare(count, last.line), interval: bare(interval, last.line), rows: 0 };
     }
   }
+  // A count alone is taken for one only where it is right: the first sample may be a whole number too.
+  const alone = rowLength(table, 0) === 1 && Number.isInteger(values[0]) && values[0] >= LEAST_COUNT;
+  if (alone && values.length - 1 === values[0]) return { count: bare(values[0], rowLine[0]), interval: null, rows: 1 };
   const headRows =
     rowLength(table, 0) === 2 ? 1 : rowLength(table, 0) === 1 && rows > 2 && rowLength(table, 1) === 1 ? 2 : 0;
   if (headRows === 0 || !fits(values[0], values[1]) || values.length - 2 !== values[0]) return null;

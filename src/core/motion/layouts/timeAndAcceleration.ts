@@ -97,6 +97,10 @@ function usualStep(table: Table, column: number): number | null {
   if (steps.length < 2) return null;
   const middle = [...steps].sort((a, b) => a - b)[steps.length >> 1];
   // Times that are printed coarsely stand still every now and then.
+  // A time that falls is one at fault.
+  const falls =
+    steps.filter((step) => Math.abs(step - middle) <= 0.01 * Math.abs(middle)).length >= ALIKE * steps.length;
+  if (middle < 0) return falls ? middle : null;
   const usual = middle > 0 ? middle : steps.reduce((sum, step) => sum + step, 0) / steps.length;
   const alike = steps.filter((step) => step >= 0 && step <= 2.05 * usual).length;
   return usual > 0 && alike >= ALIKE * steps.length ? usual : null;

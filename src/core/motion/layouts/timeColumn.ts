@@ -18,8 +18,9 @@ const NAMED = 5;
 const LOOKED_AT = 50;
 /** Share of the interval by which a time may be off whatever its print: single precision prints are. Own figure. */
 const LOOSE = 0.01;
-/** Share of the steps that are alike where the print holds the interval exactly. Own figure. */
-const ALIKE = 0.95;
+/** Shares of the steps that are alike where the print holds the interval exactly, and where it surely does. Own figures. */
+const ALIKE = 0.75;
+const MOSTLY = 0.9;
 
 /**
  * The even spacing of a column of printed times: all of them within the rounding of the print of where they should be. A
@@ -34,11 +35,17 @@ export function timeColumn(times: Float64Array, column: number, table: Table, an
   const [first, last] = [known[0], known[known.length - 1]];
   const print = printOf(known, (row) => placeOf(table, { row, column }).text);
   const mean = (times[last] - times[first]) / (last - first);
-  const interval = mean > 0 ? tidy(mean, Math.max(print, 1e-3 * mean) / (last - first)) : mean;
-  if (interval > 0 && spread(times, known, interval) <= Math.max(2 * LOOSE * interval, rounding(interval, print))) {
-    return { interval, faults: [], mends: [] };
-  }
+  const slack = Math.max(print, 1e-3 * mean) / (last - first);
+  const candidates = mean > 0 ? roundOnes(mean, slack) : [];
+  const even = candidates.find((interval) => spread(times, known, interval) <= 2 * LOOSE * interval);
+  if (even !== undefined) return { interval: even, faults: [], mends: [] };
   const { usual, share } = usualStep(times, known);
+  // Where the print is coarse and most steps are alike, the others are no rounding: a line is lost or doubled.
+  const rounded =
+    share > MOSTLY && print > usual / 4
+      ? undefined
+      : candidates.find((interval) => spread(times, known, interval) <= rounding(interval, print));
+  if (rounded !== undefined) return { interval: rounded, faults: [], mends: [] };
   const within = usual > 0 ? Math.max(LOOSE * usual, (share > ALIKE ? 0.5 : 1.5) * print) : 0;
   const bad: number[] = [];
   for (let k = 1; k < known.length; k++) {
@@ -136,25 +143,17 @@ function usualStep(times: Float64Array, known: Int32Array): { readonly usual: nu
   }
   steps.sort();
   const middle = steps[steps.length >> 1];
-  const usual = middle > 0 ? tidy(middle, 1e-6 * middle) : middle;
+  const usual = middle > 0 ? (roundOnes(middle, 1e-6 * middle)[0] ?? middle) : middle;
   const alike = steps.reduce((sum, step) => sum + (Math.abs(step - usual) <= LOOSE * usual ? 1 : 0), 0);
   return { usual, share: alike / steps.length };
 }
 
-/** The roundest spacing within what the printed times allow: a decimal of few figures, or a whole number a second. */
-function tidy(mean: number, within: number): number {
-  const slack = Math.max(within, 1e-12 * mean);
-  for (let figures = 1; figures <= 4; figures++) {
-    const round = Number(mean.toPrecision(figures));
-    if (Math.abs(round - mean) <= slack) return round;
-  }
+/** Spacings within a slack of the mean one, the roundest first: decimals of few figures, whole numbers a second, longer decimals. */
+function roundOnes(mean: number, slack: number): number[] {
+  const decimals = Array.from({ length: 15 }, (_, i) => Number(mean.toPrecision(i + 1)));
   const rate = Math.round(1 / mean);
-  if (rate > 0 && Math.abs(1 / rate - mean) <= slack) return 1 / rate;
-  for (let figures = 5; figures <= 15; figures++) {
-    const round = Number(mean.toPrecision(figures));
-    if (Math.abs(round - mean) <= slack) return round;
-  }
-  return mean;
+  const all = [...decimals.slice(0, 3), ...(rate > 0 ? [1 / rate] : []), ...decimals.slice(3), mean];
+  return all.filter((round) => round > 0 && Math.abs(round - mean) <= Math.max(slack, 1e-12 * mean));
 }
 
 function short(value: number): string {

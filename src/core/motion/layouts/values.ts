@@ -1,5 +1,6 @@
 import type { Heading } from '../heading.ts';
 import { cellOf, type Table } from '../table.ts';
+import { components } from './components.ts';
 import { blankLines, looseFigures, oddRows } from './faults.ts';
 import type { Layout, Series } from './layout.ts';
 
@@ -9,6 +10,8 @@ export const values: Layout = {
   name: 'values, one a line or in rows',
   recognise: (table) => (table.rows > 0 ? 0.1 : 0),
   read: (table, heading, answers) => {
+    const column = components(table, heading, 0, answers);
+    if (column !== null) return column;
     const told = heading.count?.value === table.values.length;
     const faults = [...looseFigures(table, answers), ...(told ? [] : oddRows(table, 0, answers))];
     return { ...acrossThenDown(table, heading), faults };
