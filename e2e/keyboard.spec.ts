@@ -27,17 +27,18 @@ test('the whole job by keyboard alone: new frame, typed rows, a record, a stiffe
   }
   await page.keyboard.press('Control+Home');
   for (let i = 0; i < 6 && !(await focused(page)).includes('stiffness'); i++) await page.keyboard.press('ArrowRight');
-  await page.keyboard.press('Control+Home');
   expect(await focused(page)).toMatch(/^Storey 3, stiffness/);
   for (const stiffness of ['20', '25', '30']) {
     await page.keyboard.type(stiffness);
     await page.keyboard.press('Enter');
   }
   // A record, pasted as text.
-  await tabTo(/^Paste samples/);
+  await tabTo(/^Add records/);
   await page.keyboard.press('Enter');
   const dialog = page.getByRole('dialog', { name: 'Add records' });
   await expect(dialog).toBeVisible();
+  await tabTo(/^Paste samples/);
+  await page.keyboard.press('Enter');
   const text = dialog.getByRole('textbox').first();
   await expect(text).toBeFocused();
   const values = Array.from({ length: 300 }, (_, i) =>
@@ -45,8 +46,8 @@ test('the whole job by keyboard alone: new frame, typed rows, a record, a stiffe
   );
   await page.keyboard.insertText(`interval 0.02 s, unit (g), 300 values\n${values.join('\n')}\n`);
   await page.keyboard.press('Control+Enter');
-  await page.waitForTimeout(500);
-  if (await dialog.isVisible()) await page.keyboard.press('Control+Enter');
+  await expect(dialog.getByRole('button', { name: /^Add 1 record/ })).toBeEnabled();
+  await page.keyboard.press('Control+Enter');
   await expect(dialog).toBeHidden();
   await expect(verdict(page)).toHaveText(/^Storey \d governs/);
   // The cursor, play and pause, the motion's peak; then the tables.

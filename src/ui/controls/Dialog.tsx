@@ -30,7 +30,13 @@ export function Dialog({ title, onClose, width = 560, foot, sticky = false, chil
       const first = dialog.querySelector<HTMLElement>(FIRST_STOP) ?? dialog.querySelector<HTMLElement>(MAIN_BUTTON);
       first?.focus();
     }
+    // What held the focus may be taken out (a step of the dialog is done): the keys must still reach the dialog.
+    const keep = new MutationObserver(() => {
+      if (dialog?.open && document.activeElement === document.body) dialog.focus();
+    });
+    if (dialog !== null) keep.observe(dialog, { childList: true, subtree: true });
     return () => {
+      keep.disconnect();
       dialog?.close();
       if (before instanceof HTMLElement || before instanceof SVGElement) before.focus();
     };
@@ -39,6 +45,7 @@ export function Dialog({ title, onClose, width = 560, foot, sticky = false, chil
     <dialog
       ref={element}
       className="dialog"
+      tabIndex={-1}
       style={{ width }}
       aria-labelledby={heading}
       onCancel={(event) => {
