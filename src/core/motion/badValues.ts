@@ -76,7 +76,7 @@ function faultOf(place: Place, values: Float64Array, i: number, table: Table, in
   const [asDecimal, mean] = [commaRead(text, table), meanAround(values, i)];
   const when = interval === null ? '' : `, at ${Number((i * interval).toPrecision(12))} s`;
   const neighbours = mean === null ? '' : `; the neighbours are ${values[i - 1]} and ${values[i + 1]}`;
-  const what = text === '' ? 'there is no value' : asDecimal === null ? `${text} is no number` : `${text} has a comma`;
+  const what = wrongWith(text, values[i], asDecimal);
   return {
     id: idOf(place),
     code: 'not-a-number',
@@ -102,6 +102,12 @@ function faultOf(place: Place, values: Float64Array, i: number, table: Table, in
       LEAVE_OUT,
     ],
   };
+}
+
+function wrongWith(text: string, value: number, asDecimal: number | null): string {
+  if (text === '') return 'there is no value';
+  if (!Number.isNaN(value)) return `${text} is larger than any acceleration`;
+  return asDecimal === null ? `${text} is no number` : `${text} has a comma`;
 }
 
 /** A value with one comma among points, read with the comma as its decimal sign. */

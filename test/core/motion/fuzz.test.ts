@@ -39,6 +39,9 @@ const answers = fc.record(
   { requiredKeys: [] },
 );
 
+/** The answers that a file asks for, or any. */
+const sensible = fc.oneof(fc.constant({}), fc.constant(FULL), answers);
+
 const good = [
   `NPTS= 40, DT= .0100 SEC\nUNITS OF G\n${rows(wave(40))}`,
   `time (s),acc (g)\n${wave(40)
@@ -76,7 +79,7 @@ describe('any bytes are read without a throw, and to a whole reading', () => {
     let motions = 0;
     const change = fc.tuple(fc.nat(2000), fc.constantFrom('set', 'cut', 'put'), fc.nat(255));
     fc.assert(
-      fc.property(fc.constantFrom(...good), fc.array(change, { maxLength: 12 }), answers, (text, changes, given) => {
+      fc.property(fc.constantFrom(...good), fc.array(change, { maxLength: 8 }), sensible, (text, changes, given) => {
         const bytes = [...new TextEncoder().encode(text)];
         for (const [where, what, byte] of changes) {
           const at = where % bytes.length;
