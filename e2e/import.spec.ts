@@ -82,8 +82,8 @@ test('a record comes in by the picker: what was read stands beside the file, add
   const before = await motionNames(page);
   await pick(page, headed('slab-090.txt', 401));
   await expect(dialog(page).getByText('Test slab, interval 0.02 s')).toBeVisible();
-  await expect(row(page, 'Interval, s')).toContainText('0.02');
-  await expect(row(page, 'Unit').getByText('g', { exact: true })).toBeVisible();
+  await expect(dialog(page).getByLabel('Interval, s')).toHaveValue('0.02');
+  await expect(dialog(page).getByLabel('Unit', { exact: true })).toHaveValue('g');
   await expect(row(page, 'Samples')).toContainText('401');
   await expect(row(page, 'Samples')).toContainText('8.00 s');
   await expect(row(page, 'Peak')).toContainText('0.20 g');
@@ -143,6 +143,29 @@ test('a typed value takes the place of a word among the figures', async ({ page 
   await dialog(page).getByRole('button', { name: 'Mend and read on' }).click();
   await expect(dialog(page).getByRole('region', { name: 'Mends' })).toContainText('void, taken as 0.0123');
   await expect(dialog(page).getByRole('button', { name: 'Add 1 record' })).toBeEnabled();
+});
+
+test('an interval typed against the file waits until the user says which of the two counts', async ({ page }) => {
+  await open(page);
+  await pick(page, headed('slab.txt', 401));
+  const interval = dialog(page).getByLabel('Interval, s');
+  const say = async (text: string) => {
+    await interval.fill(text);
+    await page.keyboard.press('Enter');
+    await expect(dialog(page).getByRole('alert')).toContainText(`line 1 says 0.02 s, the answer is ${text} s`);
+    await expect(dialog(page).getByRole('button', { name: /^Add/ })).toHaveCount(0);
+  };
+  await say('0.01');
+  await dialog(page).getByRole('button', { name: 'Mend and read on' }).click();
+  await expect(files(page)).toContainText('8.00 s');
+  await expect(interval).toHaveValue('0.02');
+  await say('0.005');
+  await dialog(page)
+    .getByRole('radio', { name: /^Take 0.005 s, as answered/ })
+    .check();
+  await dialog(page).getByRole('button', { name: 'Mend and read on' }).click();
+  await expect(files(page)).toContainText('2.00 s');
+  await expect(interval).toHaveValue('0.005');
 });
 
 test('interval and unit are answered before a bare column of values is added, all by keyboard', async ({ page }) => {
@@ -267,8 +290,8 @@ if (existsSync(REAL)) {
     await open(page);
     const before = await motionNames(page);
     await pick(page, fileOf('imperial-valley-1940-ns.txt', readFileSync(REAL)));
-    await expect(row(page, 'Interval, s')).toContainText('0.02');
-    await expect(row(page, 'Unit').getByText('g', { exact: true })).toBeVisible();
+    await expect(dialog(page).getByLabel('Interval, s')).toHaveValue('0.02');
+    await expect(dialog(page).getByLabel('Unit', { exact: true })).toHaveValue('g');
     await expect(dialog(page).locator('mark')).toContainText(['1559 points', 'spacing of 0.02', 'g']);
     await expect(dialog(page).getByText('0.32 g', { exact: true }).first()).toBeVisible();
     await dialog(page).getByLabel('Name').fill('1940 NS');

@@ -5,7 +5,6 @@ import { printQuantity, printTyped, type System } from '../../../core/units/quan
 import { readQuantity } from '../../../core/units/read.ts';
 import { answerRecord, type ImportFile, nameRecord } from '../../../state/importQueue.ts';
 import type { ReadAnswer } from '../../../state/imports.ts';
-import { Button } from '../../controls/Button.tsx';
 import { CautionMark } from '../../controls/Icon.tsx';
 import { Select } from '../../controls/Select.tsx';
 import { Field } from './Field.tsx';
@@ -29,11 +28,15 @@ export function WhatWasRead({ file, answer, system }: WhatWasReadProps) {
   const { reading, measures } = answer;
   const { answers } = file;
   const again = (changed: RecordAnswers) => answerRecord(file.id, { ...answers, ...changed });
+  // A new answer opens anew what was settled between the one before and the file.
+  const answerAnew = (what: 'interval' | 'unit', changed: RecordAnswers) => {
+    const { [`contradicts-${what}`]: _, ...mends } = answers.mends ?? {};
+    again({ ...changed, mends });
+  };
   const fact = (what: RecordFact['what']) => reading.facts.find((entry) => entry.what === what);
   const from = (what: 'interval' | 'unit') =>
-    placeOf(fact(what)) ?? (answers[what] !== undefined ? 'answered' : 'the file does not say');
-  // What the file says itself is not typed over: a file that is wrong there is mended on the disk.
-  const stated = (what: 'interval' | 'unit') => (fact(what)?.line ?? null) !== null;
+    (answers[what] !== undefined && answers[what] === reading[what] ? 'answered' : placeOf(fact(what))) ??
+    'the file does not say';
   const samples = reading.values.length;
   return (
     <dl className="import-rows">
@@ -74,45 +77,29 @@ export function WhatWasRead({ file, answer, system }: WhatWasReadProps) {
         />
       </Row>
       <Row name="Interval, s" from={from('interval')} asked={reading.asks.includes('interval')}>
-        {stated('interval') ? (
-          <Stated
-            value={printTyped(reading.interval ?? Number.NaN, 'time', 'si')}
-            answered={answers.interval !== undefined}
-            leave={() => again({ interval: undefined })}
-          />
-        ) : (
-          <Field
-            label="Interval, s"
-            width={88}
-            placeholder="say 0.01"
-            value={reading.interval === null ? '' : printTyped(answers.interval ?? reading.interval, 'time', 'si')}
-            take={(text) => {
-              const read = readQuantity(text, 'time', 'si');
-              if (read.kind !== 'value' || !(read.value > 0)) return 'A time in seconds above 0, as 0.01.';
-              again({ interval: read.value });
-              return null;
-            }}
-          />
-        )}
+        <Field
+          label="Interval, s"
+          width={88}
+          placeholder="say 0.01"
+          value={reading.interval === null ? '' : printTyped(reading.interval, 'time', 'si')}
+          take={(text) => {
+            const read = readQuantity(text, 'time', 'si');
+            if (read.kind !== 'value' || !(read.value > 0)) return 'A time in seconds above 0, as 0.01.';
+            answerAnew('interval', { interval: read.value });
+            return null;
+          }}
+        />
       </Row>
       <Row name="Unit" from={from('unit')} asked={reading.asks.includes('unit')}>
-        {stated('unit') && reading.unit !== null ? (
-          <Stated
-            value={UNIT_NAMES[reading.unit]}
-            answered={answers.unit !== undefined}
-            leave={() => again({ unit: undefined })}
-          />
-        ) : (
-          <Select<AccelerationUnit | ''>
-            label="Unit"
-            value={answers.unit ?? reading.unit ?? ''}
-            options={[
-              ...(reading.unit === null ? [{ value: '' as const, label: 'choose', disabled: true }] : []),
-              ...ACCELERATION_UNITS.map((unit) => ({ value: unit, label: UNIT_NAMES[unit] })),
-            ]}
-            onChange={(unit) => unit !== '' && again({ unit })}
-          />
-        )}
+        <Select<AccelerationUnit | ''>
+          label="Unit"
+          value={reading.unit ?? ''}
+          options={[
+            ...(reading.unit === null ? [{ value: '' as const, label: 'choose', disabled: true }] : []),
+            ...ACCELERATION_UNITS.map((unit) => ({ value: unit, label: UNIT_NAMES[unit] })),
+          ]}
+          onChange={(unit) => unit !== '' && answerAnew('unit', { unit })}
+        />
       </Row>
       <Row name="Samples" from={samplesFrom(answer, placeOf(fact('count')))}>
         {printQuantity(samples, 'count', system)}
@@ -123,27 +110,6 @@ export function WhatWasRead({ file, answer, system }: WhatWasReadProps) {
         </Row>
       )}
     </dl>
-  );
-}
-
-interface StatedProps {
-  readonly value: string;
-  /** Something else was answered before the file was read so. */
-  readonly answered: boolean;
-  readonly leave: () => void;
-}
-
-/** A fact that the file says itself. */
-function Stated({ value, answered, leave }: StatedProps) {
-  return (
-    <>
-      {value}{' '}
-      {answered && (
-        <Button size="low" onClick={leave}>
-          Leave it to the file
-        </Button>
-      )}
-    </>
   );
 }
 
