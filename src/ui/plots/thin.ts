@@ -29,8 +29,12 @@ export function thinned(values: Float64Array, from: number, to: number, columns:
   return out.subarray(0, kept);
 }
 
+/** A path of more points than this cannot be told from one thinned further, and would hold up the page. */
+const MOST_POINTS = 8000;
+
 /**
- * Which points of a path in the plane to draw: those further than a distance from the last one that was kept, and the last.
+ * Which points of a path in the plane to draw: those further than a distance from the last one that was kept, and the last. A
+ * path that keeps more than MOST_POINTS is thinned with a wider distance until it does not.
  *
  * @param x, y   of equal length
  * @param reach  least distance along x and along y, in the units of each, that shows
@@ -40,11 +44,18 @@ export function thinnedPath(
   y: Float64Array,
   reach: { readonly x: number; readonly y: number },
 ): Int32Array {
+  for (let wide = 1; ; wide *= 4) {
+    const kept = pathBy(x, y, wide * reach.x, wide * reach.y);
+    if (kept.length <= MOST_POINTS || !(reach.x > 0 && reach.y > 0)) return kept;
+  }
+}
+
+function pathBy(x: Float64Array, y: Float64Array, reachX: number, reachY: number): Int32Array {
   const out = new Int32Array(x.length);
   let kept = 0;
   let last = -1;
   for (let i = 0; i < x.length; i++) {
-    const far = last < 0 || Math.abs(x[i] - x[last]) >= reach.x || Math.abs(y[i] - y[last]) >= reach.y;
+    const far = last < 0 || Math.abs(x[i] - x[last]) >= reachX || Math.abs(y[i] - y[last]) >= reachY;
     if (!far && i < x.length - 1) continue;
     out[kept++] = i;
     last = i;
