@@ -19,7 +19,7 @@ import { nothingRead, tooFew } from './unreadable.ts';
 import { motionWarnings } from './warnings.ts';
 
 /** The layouts there are: a new one is one file more and one line here. */
-export const LAYOUTS: readonly Layout[] = [timeAndAcceleration, countAndInterval, values];
+const LAYOUTS: readonly Layout[] = [timeAndAcceleration, countAndInterval, values];
 
 /** SI value of one unit of acceleration [m/s2]. */
 export const UNIT_SIZE: Readonly<Record<AccelerationUnit, number>> = {
