@@ -1,3 +1,4 @@
+import { printQuantity } from '../units/quantities.ts';
 import { LEAVE_OUT, type Series } from './layouts/layout.ts';
 import type { Mend } from './motion.ts';
 import type { RecordAnswers, RecordFault } from './reading.ts';
@@ -75,7 +76,7 @@ function faultOf(place: Place, values: Float64Array, i: number, table: Table, in
   const { line, value, text, span } = place;
   const [asDecimal, mean] = [commaRead(text, table), meanAround(values, i)];
   const when = interval === null ? '' : `, at ${Number((i * interval).toPrecision(12))} s`;
-  const neighbours = mean === null ? '' : `; the neighbours are ${values[i - 1]} and ${values[i + 1]}`;
+  const neighbours = mean === null ? '' : `; the neighbours are ${signed(values[i - 1])} and ${signed(values[i + 1])}`;
   const what = wrongWith(text, values[i], asDecimal);
   return {
     id: idOf(place),
@@ -84,7 +85,7 @@ function faultOf(place: Place, values: Float64Array, i: number, table: Table, in
     line,
     span,
     message: what,
-    detail: `${asDecimal === null ? '' : 'The other values have a decimal point. '}Sample ${i + 1} of ${values.length}${when}.`,
+    detail: `${asDecimal === null ? '' : 'The other values have a decimal point. '}Sample ${counted(i + 1)} of ${counted(values.length)}${when}.`,
     mend:
       asDecimal === null ? 'Write the number that belongs there' : `Write it as ${asDecimal}, if that is what it means`,
     choices: [
@@ -93,15 +94,24 @@ function faultOf(place: Place, values: Float64Array, i: number, table: Table, in
         : [
             {
               id: 'as-decimal',
-              label: `Read it as ${asDecimal}`,
+              label: `Read it as ${signed(asDecimal)}`,
               detail: `The comma taken as a decimal point${neighbours}.`,
             },
           ]),
       { id: 'typed', label: 'Type the value', asksValue: true },
-      ...(mean === null ? [] : [{ id: 'mean', label: `Take the mean of its neighbours, ${mean}` }]),
+      ...(mean === null ? [] : [{ id: 'mean', label: `Take the mean of its neighbours, ${signed(mean)}` }]),
       LEAVE_OUT,
     ],
   };
+}
+
+/** As it is shown: with a true minus. */
+function signed(value: number): string {
+  return String(value).replace('-', '\u2212');
+}
+
+function counted(value: number): string {
+  return printQuantity(value, 'count', 'si');
 }
 
 function wrongWith(text: string, value: number, asDecimal: number | null): string {

@@ -1,5 +1,4 @@
 import { STANDARD_GRAVITY } from '../units/constants.ts';
-import { displacementOf, velocityOf } from './integrals.ts';
 import type { MotionMeasures } from './reading.ts';
 
 /**
@@ -12,60 +11,69 @@ import type { MotionMeasures } from './reading.ts';
  * @param motion  at least one sample [m/s2], interval [s]
  */
 export function measuresOf(motion: { readonly interval: number; readonly acceleration: Float64Array }): MotionMeasures {
-  const { interval: h, acceleration: a } = motion;
-  const n = a.length;
-  const v = velocityOf(a, h);
-  const d = displacementOf(a, v, h);
-  const square = new Float64Array(n);
-  let [peakAcceleration, peakAt, peakVelocity, peakDisplacement] = [0, 0, 0, 0];
-  for (let i = 0; i < n; i++) {
-    if (Math.abs(a[i]) > peakAcceleration) [peakAcceleration, peakAt] = [Math.abs(a[i]), i];
-    peakVelocity = Math.max(peakVelocity, Math.abs(v[i]));
-    peakDisplacement = Math.max(peakDisplacement, Math.abs(d[i]));
-    if (i === 0) continue;
-    square[i] = square[i - 1] + (h / 3) * (a[i - 1] * a[i - 1] + a[i - 1] * a[i] + a[i] * a[i]);
-    peakVelocity = Math.max(peakVelocity, velocityBetween(a[i - 1], a[i], v[i - 1], h));
-    if (v[i - 1] * v[i] < 0)
-      peakDisplacement = Math.max(peakDisplacement, displacementBetween(a[i - 1], a[i], v[i - 1], d[i - 1], h));
+  const { interval: h, acceleration } = motion;
+  const n = acceleration.length;
+  let [a, v, d] = [acceleration[0], 0, 0];
+  let [peakAcceleration, peakAt, peakVelocity, peakDisplacement, total] = [Math.abs(a), 0, 0, 0, 0];
+  for (let i = 1; i < n; i++) {
+    // The steps of velocityOf and displacementOf, without arrays as long as the record.
+    const an = acceleration[i];
+    const vn = v + (h / 2) * (a + an);
+    const dn = d + h * v + ((h * h) / 6) * (2 * a + an);
+    total += squared(a, an, h);
+    if (Math.abs(an) > peakAcceleration) {
+      peakAcceleration = Math.abs(an);
+      peakAt = i;
+    }
+    peakVelocity = Math.max(peakVelocity, Math.abs(vn));
+    peakDisplacement = Math.max(peakDisplacement, Math.abs(dn));
+    if (a * an < 0) peakVelocity = Math.max(peakVelocity, Math.abs(v + (a * a * h) / (2 * (a - an))));
+    if (a * an < 0 || v * vn < 0) peakDisplacement = Math.max(peakDisplacement, displacementBetween(a, an, v, d, h));
+    a = an;
+    v = vn;
+    d = dn;
   }
-  const total = square[n - 1];
-  const start5to95 = timeAt(square, 0.05 * total, h);
+  const [start5to95, end] = timesAt(acceleration, h, 0.05 * total, 0.95 * total);
   return {
     peakAcceleration,
     peakAccelerationTime: peakAt * h,
     peakVelocity,
     peakDisplacement,
-    endVelocity: v[n - 1],
+    endVelocity: v,
     ariasIntensity: (Math.PI / (2 * STANDARD_GRAVITY)) * total,
     start5to95,
-    duration5to95: timeAt(square, 0.95 * total, h) - start5to95,
+    duration5to95: end - start5to95,
   };
 }
 
-/** Largest |velocity| where the acceleration crosses zero within an interval; 0 where it does not. */
-function velocityBetween(a0: number, a1: number, v0: number, h: number): number {
-  if (a0 * a1 >= 0) return 0;
-  const t = (a0 / (a0 - a1)) * h;
-  return Math.abs(v0 + (a0 * t) / 2);
+/** Integral of the square of a straight line from a0 to a1 over h. */
+function squared(a0: number, a1: number, h: number): number {
+  return (h / 3) * (a0 * a0 + a0 * a1 + a1 * a1);
 }
 
-/** |displacement| where the velocity crosses zero within an interval, by bisection of the parabola. */
+/** Largest |displacement| where the velocity, a parabola, is zero within an interval; 0 where it is nowhere zero. */
 function displacementBetween(a0: number, a1: number, v0: number, d0: number, h: number): number {
   const slope = (a1 - a0) / h;
-  const velocity = (t: number) => v0 + a0 * t + (slope * t * t) / 2;
-  let [from, to] = [0, h];
-  for (let i = 0; i < 60; i++) {
-    const middle = (from + to) / 2;
-    if (velocity(middle) * v0 > 0) from = middle;
-    else to = middle;
-  }
-  return Math.abs(d0 + v0 * from + (a0 * from * from) / 2 + (slope * from ** 3) / 6);
+  const discriminant = a0 * a0 - 2 * slope * v0;
+  if (!(discriminant >= 0)) return 0;
+  // Roots without cancellation.
+  const q = a0 >= 0 ? -a0 - Math.sqrt(discriminant) : -a0 + Math.sqrt(discriminant);
+  const at = (t: number) => (t > 0 && t < h ? Math.abs(d0 + v0 * t + (a0 * t * t) / 2 + (slope * t ** 3) / 6) : 0);
+  return Math.max(at(q / slope), at((2 * v0) / q));
 }
 
-function timeAt(sum: Float64Array, value: number, h: number): number {
-  for (let i = 1; i < sum.length; i++) {
-    if (sum[i] >= value && sum[i] > sum[i - 1])
-      return (i - 1 + Math.max(0, value - sum[i - 1]) / (sum[i] - sum[i - 1])) * h;
+/** When the integral of the squared acceleration reaches two values, the smaller first [s]. */
+function timesAt(a: Float64Array, h: number, first: number, second: number): [number, number] {
+  const times: [number, number] = [0, 0];
+  let sum = 0;
+  let next = 0;
+  for (let i = 1; i < a.length && next < 2; i++) {
+    const more = squared(a[i - 1], a[i], h);
+    while (next < 2 && more > 0 && sum + more >= (next === 0 ? first : second)) {
+      times[next] = (i - 1 + Math.max(0, (next === 0 ? first : second) - sum) / more) * h;
+      next++;
+    }
+    sum += more;
   }
-  return 0;
+  return times;
 }

@@ -101,6 +101,7 @@ export function readRecord(file: string, bytes: Uint8Array, answers: RecordAnswe
     values: counted.values,
     firstLine: table.rowLine[Math.min(series.firstRow, table.rows - 1)],
     perLine: table.columns,
+    ...(series.columns ? { columns: series.columns } : {}),
     facts: factsOf(layout, heading, series, table),
     warnings,
     faults,

@@ -32,6 +32,8 @@ export interface RecordFault extends Fault {
     readonly label: string;
     readonly detail?: string;
     readonly asksValue?: boolean;
+    /** Unit of the value that is asked for; absent: the unit of the file. */
+    readonly valueUnit?: 's';
   }[];
 }
 
@@ -60,6 +62,8 @@ export interface RecordReading {
   /** Line on which the values begin, from 1, and how many values a line holds. */
   readonly firstLine: number;
   readonly perLine: number;
+  /** Of the time-and-acceleration layout: the columns that were read, from 0, and what stands over all of them. */
+  readonly columns?: { readonly time: number; readonly acceleration: number; readonly names: readonly string[] };
   readonly facts: readonly RecordFact[];
   /** To look at, nothing stops: velocity that does not end at zero, count that disagrees and was settled, coarse interval ... */
   readonly warnings: readonly Fault[];

@@ -39,7 +39,7 @@ export function settledInterval(
       const mend = { line, was: `${value} s`, is: `${typed} s`, why: 'the interval was typed in its place' };
       return { ...none, value: typed, from: 'answer', mends: [mend] };
     }
-    const choices = [{ id: 'typed', label: 'Type the interval', asksValue: true }];
+    const choices = [{ id: 'typed', label: 'Type the interval', asksValue: true, valueUnit: 's' as const }];
     return { ...none, value: null, from: 'file', faults: [notPositive(`line ${line}`, line, value, choices, span)] };
   }
   if (answered === undefined || Math.abs(answered - value) <= SAME * value) return { ...none, value, from: 'file' };

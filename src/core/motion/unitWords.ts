@@ -42,7 +42,7 @@ const ACCELERATION_WORD = /\bacc(?:el(?:eration)?)?s?\b/i;
 export function unitsIn(text: string, line: number): UnitFound[] {
   const found: UnitFound[] = [];
   const add = (value: UnitFound['value'], from: number, written: string, weight: number) =>
-    found.push({ value, written: written.trim(), line, span: [from, from + written.length], weight });
+    found.push({ value, written: written.trim(), line, span: [from, from + written.trimEnd().length], weight });
   for (const match of text.matchAll(PER_SECOND)) {
     weigh(text, match, (weight, foreign) => {
       const value = foreign ? 'unknown' : named(match[1]);

@@ -45,6 +45,14 @@ describe('[MEA-1] closed forms of simple broken lines', () => {
     const t = (1 + Math.sqrt(5)) / 2;
     expect(m.peakDisplacement).toBeCloseTo(0.5 + t + t ** 2 / 2 - t ** 3 / 3, 13);
   });
+  // In the second interval d = 2 + t - 4 t^2 + 5/2 t^3: its velocity 1 - 8 t + 15/2 t^2 is zero twice, first where d peaks.
+  test('a velocity that is zero twice between two samples', () => {
+    const m = measuresOf(motionOf(1, 10, -8, 7));
+    const t = (8 - Math.sqrt(34)) / 15;
+    expect(m.endVelocity).toBeCloseTo(0.5, 14);
+    expect(m.peakDisplacement).toBeCloseTo(2 + t - 4 * t ** 2 + 2.5 * t ** 3, 13);
+    expect(m.peakDisplacement).toBeGreaterThan(2.06);
+  });
   test('nothing moves: all zero, none of it NaN', () => {
     for (const values of [[0], [0, 0, 0]])
       expect(Object.values(measuresOf(motionOf(0.01, ...values))).every((x) => x === 0)).toBe(true);

@@ -30,7 +30,7 @@ describe('a value that is no number', () => {
       detail: 'The other values have a decimal point. Sample 163 of 400, at 0.81 s.',
     });
     expect(fault.choices.map(({ id }) => id)).toEqual(['as-decimal', 'typed', 'mean', 'leave-out']);
-    expect(fault.choices[0].label).toBe('Read it as -0.0171');
+    expect(fault.choices[0].label).toBe('Read it as \u22120.0171');
   });
 
   test.each([

@@ -1,7 +1,7 @@
 import type { Fault } from '../../fault.ts';
 import type { Heading, Said } from '../heading.ts';
 import type { Mend } from '../motion.ts';
-import type { LayoutId, RecordAnswers, RecordFact, RecordFault } from '../reading.ts';
+import type { LayoutId, RecordAnswers, RecordFact, RecordFault, RecordReading } from '../reading.ts';
 import type { Cell, Table } from '../table.ts';
 import type { UnitFound } from '../unitWords.ts';
 
@@ -16,6 +16,7 @@ export interface Series {
   readonly unit: UnitFound | null;
   /** First row of the table that holds accelerations. */
   readonly firstRow: number;
+  readonly columns?: RecordReading['columns'];
   readonly facts: readonly RecordFact[];
   readonly faults: readonly RecordFault[];
   readonly warnings: readonly Fault[];

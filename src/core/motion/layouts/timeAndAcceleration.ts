@@ -4,6 +4,7 @@ import type { RecordAnswers, RecordFault } from '../reading.ts';
 import type { Table } from '../table.ts';
 import { type ColumnName, columnNames } from './columnNames.ts';
 import { oddRows } from './faults.ts';
+import { fillGaps } from './gaps.ts';
 import { type Layout, LEAVE_OUT, rowLength } from './layout.ts';
 import { timeColumn } from './timeColumn.ts';
 
@@ -32,7 +33,6 @@ export const timeAndAcceleration: Layout = {
     const time = timed ?? numbering ?? 0;
     const candidates = accelerationColumns(names, time);
     const acceleration = answers.columns?.acceleration ?? candidates[0] ?? (time === 0 ? 1 : 0);
-    const values = columnOf(table, acceleration);
     const times = columnOf(table, time);
     const scale = MILLISECONDS.test(names[time]?.name ?? '') ? 1e-3 : 1;
     if (scale !== 1) for (let i = 0; i < times.length; i++) times[i] *= scale;
@@ -40,13 +40,15 @@ export const timeAndAcceleration: Layout = {
     const column = timeColumn(times, time, table, answers);
     const spacing = numbering === null ? column : { ...column, interval: null };
     const settled = withHeading(spacing.interval, heading.interval, table, answers);
+    const { values, rowOf } = fillGaps(columnOf(table, acceleration), spacing.gaps);
     return {
       values,
-      cellOf: (row) => ({ row, column: acceleration }),
+      cellOf: (i) => ({ row: rowOf[i], column: acceleration }),
       interval: settled.interval,
       count: heading.count,
       unit: names[acceleration]?.unit ?? heading.unit,
       firstRow: 0,
+      columns: { time, acceleration, names: names.map(({ name }) => name) },
       facts: [],
       faults: [...spacing.faults, ...settled.faults, ...oddRows(table, 0, answers, 'longer')],
       warnings: [

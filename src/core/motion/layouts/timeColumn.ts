@@ -2,20 +2,27 @@ import type { Mend } from '../motion.ts';
 import { lastPlace } from '../numerals.ts';
 import type { RecordAnswers, RecordFault } from '../reading.ts';
 import { placeOf, type Table } from '../table.ts';
+import type { Gap } from './gaps.ts';
 import { LEAVE_OUT } from './layout.ts';
 
 /** What a column of times says. */
 export interface TimeColumn {
   /** Even spacing, in the column's own unit; null where there is none. */
   readonly interval: number | null;
+  /** Gaps that the user had filled. */
+  readonly gaps: readonly Gap[];
   readonly faults: readonly RecordFault[];
   readonly mends: readonly Mend[];
 }
+
+const NONE = { gaps: [], faults: [], mends: [] };
 
 /** Lines that are named one by one in a message. */
 const NAMED = 5;
 /** Times whose print is looked at. */
 const LOOKED_AT = 50;
+/** Values that may be put into one gap. Own figure. */
+const LONGEST_GAP = 10;
 /** Share of the interval by which a time may be off whatever its print: single precision prints are. Own figure. */
 const LOOSE = 0.01;
 /** Shares of the steps that are alike where the print holds the interval exactly, and where it surely does. Own figures. */
@@ -31,21 +38,21 @@ const MOSTLY = 0.9;
  */
 export function timeColumn(times: Float64Array, column: number, table: Table, answers: RecordAnswers): TimeColumn {
   const known = knownOf(times);
-  if (known.length < 2) return { interval: null, faults: [], mends: [] };
+  if (known.length < 2) return { ...NONE, interval: null };
   const [first, last] = [known[0], known[known.length - 1]];
   const print = printOf(known, (row) => placeOf(table, { row, column }).text);
   const mean = (times[last] - times[first]) / (last - first);
   const slack = Math.max(print, 1e-3 * mean) / (last - first);
   const candidates = mean > 0 ? roundOnes(mean, slack) : [];
   const even = candidates.find((interval) => spread(times, known, interval) <= 2 * LOOSE * interval);
-  if (even !== undefined) return { interval: even, faults: [], mends: [] };
+  if (even !== undefined) return { ...NONE, interval: even };
   const { usual, share } = usualStep(times, known);
   // Where the print is coarse and most steps are alike, the others are no rounding: a line is lost or doubled.
   const rounded =
     share > MOSTLY && print > usual / 4
       ? undefined
       : candidates.find((interval) => spread(times, known, interval) <= rounding(interval, print));
-  if (rounded !== undefined) return { interval: rounded, faults: [], mends: [] };
+  if (rounded !== undefined) return { ...NONE, interval: rounded };
   const within = usual > 0 ? Math.max(LOOSE * usual, (share > ALIKE ? 0.5 : 1.5) * print) : 0;
   const bad: number[] = [];
   for (let k = 1; k < known.length; k++) {
@@ -101,19 +108,37 @@ function uneven(
   const taken = answers.mends?.time;
   const mended = (interval: number, why: string): TimeColumn => {
     const was = `uneven times from line ${line} on`;
-    return { interval, faults: [], mends: [{ line, was, is: `${short(interval)} s throughout`, why }] };
+    return { ...NONE, interval, mends: [{ line, was, is: `${short(interval)} s throughout`, why }] };
   };
   if (taken?.choice === 'even' && usual > 0) return mended(usual, 'the spacing was taken as even');
   if (taken?.choice === 'typed' && taken.value !== undefined && taken.value > 0 && Number.isFinite(taken.value)) {
     return mended(taken.value, 'the interval was typed');
   }
   const rises = usual > 0;
-  const named = bad.slice(0, NAMED).map((i) => `line ${lineOf(i)} (${short(times[i] - previous(times, i))} s)`);
+  const gaps = rises ? gapsOf(times, bad, usual) : [];
+  const missing = gaps.reduce((sum, gap) => sum + gap.missing, 0);
+  if (taken?.choice === 'fill' && missing > 0) {
+    const mends = gaps.map((gap) => ({
+      line: lineOf(gap.row),
+      was: 'nothing',
+      is: count(gap.missing),
+      why: 'put on the straight line between the neighbours where the time leaps',
+    }));
+    return { ...NONE, interval: usual, gaps, mends };
+  }
+  const step = (i: number) => `${short(times[i] - previous(times, i))} s`;
+  const others = bad.slice(1, NAMED).map((i) => `line ${lineOf(i)} (${step(i)})`);
   const more = bad.length > NAMED ? ` and ${bad.length - NAMED} more` : '';
+  const likewise = others.length > 0 ? `; likewise ${others.join(', ')}${more}` : '';
   const even = {
     id: 'even',
     label: `Take the spacing as even, ${short(usual)} s`,
     detail: 'The values are kept in their order; the times are not used.',
+  };
+  const fill = {
+    id: 'fill',
+    label: `Put ${count(missing)} on the straight line between the neighbours`,
+    detail: 'Every value keeps its time.',
   };
   const fault: RecordFault = {
     id: 'time',
@@ -121,12 +146,31 @@ function uneven(
     where: `line ${line}`,
     line,
     message: rises
-      ? `the time does not go on by ${short(usual)} s as elsewhere: ${named.join(', ')}${more}`
+      ? `the time goes on by ${step(bad[0])}, elsewhere by ${short(usual)} s${likewise}`
       : 'the time column does not rise',
     mend: 'Mend the times in the file, or choose the columns anew',
-    choices: [...(rises ? [even] : []), { id: 'typed', label: 'Type the interval', asksValue: true }, LEAVE_OUT],
+    choices: [
+      ...(missing > 0 ? [fill] : []),
+      ...(rises ? [even] : []),
+      { id: 'typed', label: 'Type the interval', asksValue: true, valueUnit: 's' },
+      LEAVE_OUT,
+    ],
   };
-  return { interval: rises ? usual : null, faults: [fault], mends: [] };
+  return { ...NONE, interval: rises ? usual : null, faults: [fault] };
+}
+
+/** The gaps of a column whose leaps are whole numbers of steps; none where one of them is no leap. */
+function gapsOf(times: Float64Array, leaps: readonly number[], usual: number): Gap[] {
+  const gaps = leaps.map((row) => {
+    const steps = (times[row] - previous(times, row)) / usual;
+    const whole = Math.abs(steps - Math.round(steps)) <= LOOSE * steps && !Number.isNaN(times[row - 1]);
+    return { row, missing: whole ? Math.round(steps) - 1 : 0 };
+  });
+  return gaps.every(({ missing }) => missing >= 1 && missing <= LONGEST_GAP) ? gaps : [];
+}
+
+function count(missing: number): string {
+  return missing === 1 ? '1 missing value' : `${missing} missing values`;
 }
 
 function previous(times: Float64Array, i: number): number {

@@ -98,7 +98,11 @@ describe('times that are not even', () => {
     const reading = readText(without(50), { unit: 'g' });
     expect(reading.motion).toBeNull();
     expect(reading.faults).toMatchObject([{ id: 'time', code: 'uneven-time', line: 51 }]);
-    expect(reading.faults[0].message).toContain('line 51 (0.02 s)');
+    expect(reading.faults[0].message).toBe('the time goes on by 0.02 s, elsewhere by 0.01 s');
+    const fill = readText(without(50), { unit: 'g', mends: { time: { choice: 'fill' } } });
+    expect(fill.motion).toMatchObject({ interval: 0.01, origin: { mends: [{ line: 51, is: '1 missing value' }] } });
+    expect(fill.values[50]).toBeCloseTo((values[49] + values[51]) / 2, 12);
+    expect(Array.from(fill.values).toSpliced(50, 1)).toEqual(values.toSpliced(50, 1));
     const even = readText(without(50), { unit: 'g', mends: { time: { choice: 'even' } } });
     expect(even.motion).toMatchObject({ interval: 0.01, origin: { mends: [{ line: 51 }] } });
     const typed = readText(without(50), { unit: 'g', mends: { time: { choice: 'typed', value: 0.02 } } });
@@ -106,7 +110,7 @@ describe('times that are not even', () => {
   });
 
   test('every such line is named, up to five', () => {
-    expect(readText(without(20, 40), { unit: 'g' }).faults[0].message).toMatch(/line 21 \(.*line 40 \(/);
+    expect(readText(without(20, 40), { unit: 'g' }).faults[0].message).toMatch(/likewise line 40 \(0.02 s\)$/);
     const many = readText(without(10, 20, 30, 40, 50, 60, 70), { unit: 'g' }).faults[0].message;
     expect(many).toMatch(/and 2 more$/);
   });
@@ -119,6 +123,26 @@ describe('times that are not even', () => {
     const still = values.map((value) => `0.00 ${value}`).join('\n');
     const columnsChosen = { time: 0, acceleration: 1 };
     expect(codesOf(readText(still, { unit: 'g', columns: columnsChosen }))).toEqual(['time-not-rising']);
+  });
+
+  test('a gap of several lines beside a spoilt value is filled all the same, a leap that is no whole one is not', () => {
+    const text = lines
+      .map((line, i) => (i === 49 ? '0.49 x' : line))
+      .filter((_, i) => i < 50 || i > 52)
+      .join('\n');
+    const mends = { time: { choice: 'fill' }, 'line-50-value-2': { choice: 'typed', value: 0.5 } };
+    const { motion, values: filled } = readText(text, { unit: 'g', mends });
+    expect(motion?.acceleration.length).toBe(120);
+    expect(filled[49]).toBe(0.5);
+    expect(filled[51]).toBeCloseTo((values[48] + values[53]) / 2, 12);
+    const odd = lines.map((line, i) =>
+      i > 60 ? line.replace(/^\S+/, (time) => (Number(time) + 0.005).toFixed(3)) : line,
+    );
+    expect(readText(odd.join('\n'), { unit: 'g' }).faults[0].choices.map(({ id }) => id)).toEqual([
+      'even',
+      'typed',
+      'leave-out',
+    ]);
   });
 
   test('a heading that says another interval', () => {
