@@ -117,7 +117,7 @@ function Trace(props: TraceProps) {
         {points.length > 0 && (
           <path d={`M${points.join('L')}`} fill="none" stroke="var(--ink)" strokeWidth="0.9" strokeLinejoin="round" />
         )}
-        {stopsAt === null && values.length > 0 && (
+        {stopsAt === null && values.length > 0 && !(endsAt !== null && left) && (
           <Mark
             x={x(time[peak])}
             y={y(largest)}
@@ -177,7 +177,7 @@ function Mark({ x, y, textY, left, text, tone }: MarkProps) {
     <g>
       <circle cx={x} cy={y} r="2.5" fill={`var(--${tone})`} />
       <text
-        x={left ? x - (tone === 'signal' ? 0 : 8) : x + 7}
+        x={left ? x - 8 : x + 7}
         y={textY}
         textAnchor={left ? 'end' : 'start'}
         style={{ fill: `var(--${tone})` }}

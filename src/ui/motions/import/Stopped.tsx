@@ -47,13 +47,15 @@ export function Stopped({ answer, mend, system }: StoppedProps) {
                   <input
                     className="field"
                     style={{ width: 96 }}
-                    aria-label={`${option.label}${reading.unit === null ? '' : `, ${reading.unit}`}`}
+                    aria-label={[option.label, option.valueUnit ?? reading.unit].filter(Boolean).join(', ')}
                     autoComplete="off"
                     value={mend.typed}
                     onFocus={() => mend.choose(option.id)}
                     onChange={(event) => mend.type(event.target.value)}
                   />
-                  {reading.unit !== null && <span className="unit">{UNIT_NAMES[reading.unit]}</span>}
+                  <span className="unit">
+                    {option.valueUnit ?? (reading.unit === null ? '' : UNIT_NAMES[reading.unit])}
+                  </span>
                 </>
               )}
               {option.detail !== undefined && <small>{option.detail}</small>}

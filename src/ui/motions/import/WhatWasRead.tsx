@@ -1,6 +1,6 @@
 import type { ReactNode } from 'react';
 import { ACCELERATION_UNITS, type AccelerationUnit } from '../../../core/motion/motion.ts';
-import type { LayoutId, RecordAnswers, RecordFact } from '../../../core/motion/reading.ts';
+import type { LayoutId, RecordAnswers, RecordFact, RecordReading } from '../../../core/motion/reading.ts';
 import { printQuantity, printTyped, type System } from '../../../core/units/quantities.ts';
 import { readQuantity } from '../../../core/units/read.ts';
 import { answerRecord, type ImportFile, nameRecord } from '../../../state/importQueue.ts';
@@ -61,9 +61,7 @@ export function WhatWasRead({ file, answer, system }: WhatWasReadProps) {
           }}
         />
       </Row>
-      {reading.layout === 'time-and-acceleration' && reading.perLine >= 2 && (
-        <Columns columns={reading.perLine} answers={answers} again={again} />
-      )}
+      {reading.columns && <Columns columns={reading.columns} answers={answers} again={again} />}
       <Row name="Name" from={answers.name === undefined ? (placeOf(fact('name')) ?? 'the file name') : 'typed'}>
         <Field
           label="Name"
@@ -135,23 +133,27 @@ function Row({ name, from, asked = false, children }: RowProps) {
 }
 
 interface ColumnsProps {
-  readonly columns: number;
+  readonly columns: NonNullable<RecordReading['columns']>;
   readonly answers: RecordAnswers;
   readonly again: (changed: RecordAnswers) => void;
 }
 
 function Columns({ columns, answers, again }: ColumnsProps) {
-  const chosen = answers.columns ?? { time: 0, acceleration: 1 };
-  const options = Array.from({ length: columns }, (_, i) => ({ value: String(i), label: String(i + 1) }));
+  const { time, acceleration, names } = columns;
+  const chosen = { time, acceleration };
+  const options = names.map((name, i) => ({
+    value: String(i),
+    label: name === '' ? String(i + 1) : `${i + 1}, ${name}`,
+  }));
   return (
-    <Row name="Columns" from={answers.columns === undefined ? 'the first two' : 'chosen'}>
+    <Row name="Columns" from={answers.columns === undefined ? 'found' : 'chosen'}>
       <span className="import-columns">
         time
         <Select
           label="Column of the time"
           value={String(chosen.time)}
           options={options}
-          onChange={(time) => again({ columns: { ...chosen, time: Number(time) } })}
+          onChange={(column) => again({ columns: { ...chosen, time: Number(column) } })}
         />
         acceleration
         <Select
