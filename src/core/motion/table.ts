@@ -173,22 +173,19 @@ function start(lines: Lines, run: readonly number[], comma: Comma, columns: numb
 }
 
 function rowsOf(lines: Lines, first: number, last: number, comma: Comma, columns: number, tokens: Tokens) {
-  let values = new Float64Array(4096);
-  let rowStart = new Int32Array(1024);
-  let rowLine = new Int32Array(1024);
+  // As many as there can be rows; values only grow where rows are longer than most. A value takes two characters at least.
+  const rowStart = new Int32Array(Math.max(0, last - first) + 1);
+  const rowLine = new Int32Array(rowStart.length);
+  let values = new Float64Array(Math.max(64, Math.min(rowStart.length * columns, lines.codes.length >> 1)));
   let rows = 0;
   let filled = 0;
   const between: { line: number; valuesBefore: number }[] = [];
   // Lines without a single number: spoilt values or text, as the lines after them will tell.
   let waiting: number[] = [];
   const push = (i: number) => {
-    if (rows + 1 >= rowStart.length) {
-      rowStart = grown(rowStart, new Int32Array(2 * rowStart.length));
-      rowLine = grown(rowLine, new Int32Array(2 * rowLine.length));
-    }
     rowStart[rows] = filled;
     rowLine[rows++] = i + 1;
-    while (filled + tokens.count > values.length) values = grown(values, new Float64Array(2 * values.length));
+    while (filled + tokens.count > values.length) values = grown(values);
     for (let t = 0; t < tokens.count; t++) values[filled++] = tokens.value[t];
   };
   const read = (i: number) => tokens.read(lines, lines.start[i], lines.end[i], comma);
@@ -219,9 +216,9 @@ function rowsOf(lines: Lines, first: number, last: number, comma: Comma, columns
   }
   rowStart[rows] = filled;
   return {
-    values: values.slice(0, filled),
-    rowStart: rowStart.slice(0, rows + 1),
-    rowLine: rowLine.slice(0, rows),
+    values: values.subarray(0, filled),
+    rowStart: rowStart.subarray(0, rows + 1),
+    rowLine: rowLine.subarray(0, rows),
     rows,
     between,
     trailing,
@@ -267,7 +264,8 @@ function hasWord({ codes }: Lines, tokens: Tokens): boolean {
   return false;
 }
 
-function grown<T extends Float64Array | Int32Array>(from: T, into: T): T {
+function grown(from: Float64Array<ArrayBuffer>): Float64Array<ArrayBuffer> {
+  const into = new Float64Array(2 * from.length);
   into.set(from);
   return into;
 }
