@@ -27,7 +27,7 @@ export function DriftProfile({ layout, tokens, system, old }: DriftProfileProps)
   const lit = useSession((state) => state.lit);
   const { width, height } = plotSize(layout);
   const spec = useMemo(
-    () => (answers === null ? null : profilePlot(answers, lit ?? chosen, { width, height }, tokens, system)),
+    () => (answers === null ? null : () => profilePlot(answers, lit ?? chosen, { width, height }, tokens, system)),
     [answers, lit, chosen, width, height, tokens, system],
   );
   const unit = axisUnitOf('length', system, 0).unit;

@@ -48,7 +48,7 @@ export function ForceDrift({ layout, tokens, system, old, shown }: ForceDriftPro
     [loop, width, height, system],
   );
   const spec = useMemo(
-    () => (loop === null || axes === null ? null : forcePlot(loop, axes, tokens)),
+    () => (loop === null || axes === null ? null : () => forcePlot(loop, axes, tokens)),
     [loop, axes, tokens],
   );
   const letter = letterOf(

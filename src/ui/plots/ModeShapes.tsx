@@ -34,7 +34,7 @@ export function ModeShapes({ layout, tokens, system, old }: ModeShapesProps) {
     () =>
       modes === null || levels === null || levels.length !== modes.length + 1
         ? null
-        : modesPlot(modes, levels, { width, height }, tokens, system),
+        : () => modesPlot(modes, levels, { width, height }, tokens, system),
     [modes, levels, width, height, tokens, system],
   );
   const unit = axisUnitOf('length', system, 0).unit;

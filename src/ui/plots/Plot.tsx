@@ -3,8 +3,8 @@ import { queueDraw } from './drawQueue.ts';
 import { clearPlot, drawPlot, type PlotSpec } from './plotly.ts';
 
 export interface PlotProps {
-  /** Null: nothing to draw yet. */
-  readonly spec: PlotSpec | null;
+  /** Makes what is to be drawn, when its turn comes; null: nothing to draw yet. A new function is a new drawing. */
+  readonly spec: (() => PlotSpec) | null;
   /** What it shows, in a sentence. */
   readonly label: string;
   /** Drawn from numbers that are no longer those of the document. */
@@ -19,7 +19,7 @@ export function Plot({ spec, label, old = false }: PlotProps) {
     const element = place.current;
     if (element === null || spec === null) return;
     return queueDraw(element, () =>
-      drawPlot(element, spec).then(
+      drawPlot(element, spec()).then(
         () => setFailed(false),
         () => setFailed(true),
       ),

@@ -10,7 +10,7 @@ let under = false;
 let lastAsked = 0;
 
 /** While a cell is edited the plots wait for so long a pause: the next key's answer goes first [ms]. */
-const PAUSE = 80;
+const PAUSE = 350;
 
 /** Draws at most one plot a frame, in the order in which they were first asked for; returns how to withdraw it. */
 export function queueDraw(plot: object, draw: Draw): () => void {

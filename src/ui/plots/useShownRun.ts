@@ -1,4 +1,4 @@
-import { useMemo, useRef } from 'react';
+import { useDeferredValue, useMemo, useRef } from 'react';
 import type { Run } from '../../core/dynamics/run.ts';
 import type { Answers } from '../../state/answers.ts';
 import { useResults } from '../../state/results.ts';
@@ -17,7 +17,8 @@ export interface ShownRun {
 
 /**
  * The chosen motion's run with histories. While a newer one of the same motion is computed the last one stays; of another
- * motion, or of another number of storeys, none is shown.
+ * motion, or of another number of storeys, none is shown. The panels follow the bars: theirs is a rendering of its own, after
+ * the answers stand on the sheet.
  */
 export function useShownRun(): { readonly shown: ShownRun | null; readonly old: boolean } {
   const chosen = useResults((state) => state.chosen);
@@ -34,5 +35,5 @@ export function useShownRun(): { readonly shown: ShownRun | null; readonly old: 
     if (run.histories.displacement.length !== heights.length * run.histories.count) return null;
     return { motion, run, answers, storey: Math.min(storey, heights.length - 1), heights };
   }, [run, answers, motion, storey]);
-  return { shown, old };
+  return { shown: useDeferredValue(shown), old };
 }

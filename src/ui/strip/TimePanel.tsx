@@ -36,7 +36,7 @@ export const TimePanel = memo(function TimePanel(props: TimePanelProps) {
     () => (content === null ? null : { content, scale, height, tokens, system, limit }),
     [content, scale, height, tokens, system, limit],
   );
-  const spec = useMemo(() => (plot === null ? null : timePlot(plot)), [plot]);
+  const spec = useMemo(() => (plot === null ? null : () => timePlot(plot)), [plot]);
   const name = TIME_PANELS.find((panel) => panel.kind === kind)?.name ?? '';
   const unit = content === null ? null : unitOfContent(content, system);
   const title = unit === null ? name : `${name}, ${unit.unit}`;
