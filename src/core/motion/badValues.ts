@@ -40,7 +40,7 @@ export function badValues(
       mends.push({ line: place.line, was: place.text, is: String(mend.value), why: mend.why });
     } else faults.push(faultOf(place, values, i, table, interval));
   }
-  if (2 * bad > values.length && bad > 3) return { mends: [], faults: [mostlyBad(bad, values.length)] };
+  if (2 * bad >= values.length && bad > 3) return { mends: [], faults: [mostlyBad(bad, values.length)] };
   if (more > 0) faults.push(moreFault(more));
   return { mends, faults };
 }
@@ -58,9 +58,12 @@ function mendOf(
 ): { readonly value: number; readonly why: string } | null {
   const made = mends?.[idOf(place)];
   const [asDecimal, mean] = [commaRead(place.text, table), meanAround(values, i)];
+  const asThousands = thousandsRead(place.text, table);
   switch (made?.choice) {
     case 'as-decimal':
       return asDecimal === null ? null : { value: asDecimal, why: 'the comma was taken as a decimal point' };
+    case 'as-thousands':
+      return asThousands === null ? null : { value: asThousands, why: 'the comma was taken to part thousands' };
     case 'typed':
       return made.value !== undefined && Number.isFinite(made.value)
         ? { value: made.value, why: 'typed in its place' }
@@ -75,6 +78,7 @@ function mendOf(
 function faultOf(place: Place, values: Float64Array, i: number, table: Table, interval: number | null): RecordFault {
   const { line, value, text, span } = place;
   const [asDecimal, mean] = [commaRead(text, table), meanAround(values, i)];
+  const asThousands = thousandsRead(text, table);
   const when = interval === null ? '' : `, at ${Number((i * interval).toPrecision(12))} s`;
   const neighbours = mean === null ? '' : `; the neighbours are ${signed(values[i - 1])} and ${signed(values[i + 1])}`;
   const what = wrongWith(text, values[i], asDecimal);
@@ -96,6 +100,15 @@ function faultOf(place: Place, values: Float64Array, i: number, table: Table, in
               id: 'as-decimal',
               label: `Read it as ${signed(asDecimal)}`,
               detail: `The comma taken as a decimal point${neighbours}.`,
+            },
+          ]),
+      ...(asThousands === null
+        ? []
+        : [
+            {
+              id: 'as-thousands',
+              label: `Read it as ${signed(asThousands)}`,
+              detail: `The comma taken to part thousands${neighbours}.`,
             },
           ]),
       { id: 'typed', label: 'Type the value', asksValue: true },
@@ -125,6 +138,12 @@ function commaRead(text: string, { comma }: Table): number | null {
   if (comma === 'decimal' || !/^[+-]?\d*,\d+(?:[eE][+-]?\d{1,3})?$/.test(text)) return null;
   const value = Number(text.replace(',', '.'));
   return Number.isFinite(value) ? value : null;
+}
+
+/** A value with commas before threes of figures and a point after them, `-1,016.2`, read without its commas. */
+function thousandsRead(text: string, { comma }: Table): number | null {
+  if (comma === 'decimal' || !/^[+-]?\d{1,3}(?:,\d{3})+\.\d*$/.test(text)) return null;
+  return Number(text.replaceAll(',', ''));
 }
 
 /** To as many figures as its neighbours have: their sum is not worth more. */

@@ -40,8 +40,10 @@ export function readRecord(file: string, bytes: Uint8Array, answers: RecordAnswe
   const name = nameOf(file, answers);
   const lines = linesOf(bytes);
   if (lines.count === 0 || lines.binary) return nothingRead(file, name, lines.binary ? 'binary' : 'empty');
-  const skip = Math.max(0, Math.min(lines.count, Math.floor(answers.headingLines ?? 0) || 0));
-  const whole = tableOf(lines, skip);
+  const asked = Math.max(0, Math.min(lines.count, Math.floor(answers.headingLines ?? 0) || 0));
+  const found = tableOf(lines, asked);
+  const skip = Math.max(asked, bareHead(found));
+  const whole = skip > asked ? tableOf(lines, skip) : found;
   if (whole.rows === 0) return nothingRead(file, name, 'no-figures');
   const heading = headingOf(whole.heading);
   const layout = layoutOf(whole, heading, answers);
@@ -72,6 +74,7 @@ export function readRecord(file: string, bytes: Uint8Array, answers: RecordAnswe
     ...unit.warnings,
     ...text.warnings,
     ...factorWarning(heading),
+    ...otherQuantity(whole.heading),
   ];
   const asks: RecordReading['asks'] = [
     ...(interval.value === null && interval.faults.length === 0 ? ['interval' as const] : []),
@@ -111,6 +114,16 @@ export function readRecord(file: string, bytes: Uint8Array, answers: RecordAnswe
   };
 }
 
+/**
+ * The line, from 1, of a first row of bare count and interval over two columns, `400 0.005` over times and values: it looks
+ * like a row and is none where as many rows follow and go on by that interval. 0 where there is no such line.
+ */
+function bareHead({ columns, rows, values, rowLine }: Table): number {
+  if (columns !== 2 || rows < 4 || values[0] !== rows - 1) return 0;
+  const step = values[4] - values[2];
+  return Math.abs(values[1] - step) <= 1e-6 * Math.abs(step) ? rowLine[0] : 0;
+}
+
 /** The layout that was answered, else the one that fits best. */
 function layoutOf(table: Table, heading: Heading, { layout: answered, columns }: RecordAnswers): Layout {
   const asked = LAYOUTS.find(({ id }) => id === answered);
@@ -142,6 +155,24 @@ function factorWarning({ factor }: Heading): Fault[] {
       mend: 'If the values are not yet in their unit, give the record a scale',
     },
   ];
+}
+
+/** A heading that speaks of velocity or displacement and never of acceleration. */
+function otherQuantity(heading: Table['heading']): Fault[] {
+  if (heading.some(({ text }) => /acc/i.test(text))) return [];
+  for (const { line, text } of heading) {
+    const word = /\b(?:velocity|velocities|displacements?)\b/i.exec(text)?.[0].toLowerCase();
+    if (word === undefined) continue;
+    return [
+      {
+        code: 'other-quantity',
+        where: `line ${line}`,
+        message: `speaks of ${word}, and no line of acceleration; the values were read as acceleration`,
+        mend: 'Make sure that the file holds ground acceleration',
+      },
+    ];
+  }
+  return [];
 }
 
 function factsOf(layout: Layout, heading: Heading, series: Series, table: Table): RecordFact[] {

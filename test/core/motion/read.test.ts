@@ -68,6 +68,20 @@ describe('a value that is no number', () => {
     expect(readText(spoilt('1e300')).faults).toMatchObject([{ message: '1e300 is larger than any acceleration' }]);
   });
 
+  test('commas that part thousands', () => {
+    const [fault] = readText(spoilt('-1,016.2')).faults;
+    expect(fault.choices.map(({ id }) => id)).toEqual(['as-thousands', 'typed', 'mean', 'leave-out']);
+    const mends = { [fault.id]: { choice: 'as-thousands' } };
+    expect(readText(spoilt('-1,016.2'), { mends }).values[162]).toBe(-1016.2);
+  });
+
+  test('a file that is mostly none is no record', () => {
+    const clock = values.map((value, i) => `00:00:0${(i * 0.005).toFixed(3)} ${value}`).join('\n');
+    expect(codesOf(readText(clock, { unit: 'g', interval: 0.005 }))).toEqual(['mostly-bad']);
+    const columns = { time: 0, acceleration: 1 };
+    expect(readText(clock, { unit: 'g', interval: 0.005, columns }).values).toEqual(Float64Array.from(values));
+  });
+
   test('in the first line, in the last, alone on its line', () => {
     expect(readText(spoilt('0,1', 0, 0)).faults).toMatchObject([{ where: 'line 2, value 1' }]);
     expect(readText(spoilt('0,1', 49, 7)).faults).toMatchObject([{ where: 'line 51, value 8' }]);
@@ -189,6 +203,12 @@ describe('what to look at', () => {
       message: expect.stringMatching(/34\.\d g/),
       mend: expect.stringContaining('cm/s2'),
     });
+  });
+
+  test('a heading that speaks of velocity and not of acceleration', () => {
+    expect(warningsOf(readText(`velocity, dt 0.01 s, units cm/s2\n${rows(values)}`))).toContain('other-quantity');
+    const both = `acceleration, velocity and displacement\ndt 0.01 s, units g\n${rows(values)}`;
+    expect(warningsOf(readText(both))).not.toContain('other-quantity');
   });
 
   test('a note after the last value, a factor in the heading', () => {

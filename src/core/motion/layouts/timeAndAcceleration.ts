@@ -31,7 +31,7 @@ export const timeAndAcceleration: Layout = {
     const timed = answers.columns?.time ?? timeColumnOf(table, names);
     const numbering = timed === null ? numberingOf(table) : null;
     const time = timed ?? numbering ?? 0;
-    const candidates = accelerationColumns(names, time);
+    const candidates = accelerationColumns(table, names, time);
     const acceleration = answers.columns?.acceleration ?? candidates[0] ?? (time === 0 ? 1 : 0);
     const times = columnOf(table, time);
     const scale = MILLISECONDS.test(names[time]?.name ?? '') ? 1e-3 : 1;
@@ -108,9 +108,20 @@ function usualStep(table: Table, column: number): number | null {
   return usual > 0 && alike >= ALIKE * steps.length ? usual : null;
 }
 
+/** Whether a column holds numbers in most of the rows looked at, and no marks in words. */
+function holdsNumbers(table: Table, column: number): boolean {
+  const { rows, rowStart, values } = table;
+  const probe = Math.min(rows, PROBE);
+  let numbers = 0;
+  for (let r = 0; r < probe; r++) {
+    if (column < rowLength(table, r) && !Number.isNaN(values[rowStart[r] + column])) numbers++;
+  }
+  return 2 * numbers > probe;
+}
+
 /** Columns that may be the acceleration, the likeliest first. */
-function accelerationColumns(names: readonly ColumnName[], time: number): number[] {
-  const others = names.map((_, k) => k).filter((k) => k !== time);
+function accelerationColumns(table: Table, names: readonly ColumnName[], time: number): number[] {
+  const others = names.map((_, k) => k).filter((k) => k !== time && holdsNumbers(table, k));
   const named = others.filter((k) => names[k].unit !== null || ACCELERATION_WORD.test(names[k].name));
   return named.length > 0 ? named : others.filter((k) => !OTHER_WORD.test(names[k].name));
 }

@@ -51,6 +51,15 @@ describe('time and acceleration in columns', () => {
     expect(warningsOf(chosen)).not.toContain('several-columns');
   });
 
+  test('a column of marks is no acceleration, a first line of count and interval is no row', () => {
+    const marked = readText(columns(' ').replaceAll('\n', ' A\n'), { unit: 'g' });
+    expect(marked).toMatchObject({ faults: [], columns: { time: 0, acceleration: 1 } });
+    expect(warningsOf(marked)).not.toContain('several-columns');
+    const headed = readText(`120 0.01\n${columns(' ')}`, { unit: 'g' });
+    expect(headed).toMatchObject({ interval: 0.01, firstLine: 2, faults: [] });
+    expect(headed.values).toEqual(Float64Array.from(values));
+  });
+
   test('each column has its own unit', () => {
     const rows = values
       .map((value, i) => `${(i * 0.01).toFixed(2)},${value},${(value * 980.665).toFixed(3)}\n`)
