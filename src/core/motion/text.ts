@@ -32,7 +32,7 @@ export function linesOf(raw: Uint8Array): Lines {
   let [count, from, controls] = [0, 0, 0];
   for (let i = 0; i < length; i++) {
     const c = codes[i];
-    if (c > CR && c !== END_OF_TEXT && c >= 32) continue;
+    if (c >= 32) continue;
     if (c === LF || c === CR) {
       start[count] = from;
       end[count++] = i;

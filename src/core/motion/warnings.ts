@@ -1,6 +1,6 @@
 import type { Fault } from '../fault.ts';
 import { STANDARD_GRAVITY } from '../units/constants.ts';
-import { measuresOf } from './measures.ts';
+import { velocityOf } from './integrals.ts';
 import type { AccelerationUnit, Motion } from './motion.ts';
 
 /** From this interval on the lost high frequencies are said. Nyquist: 1 / (2 x interval). */
@@ -17,24 +17,26 @@ const PLAUSIBLE = { least: 0.001 * STANDARD_GRAVITY, most: 4 * STANDARD_GRAVITY 
 /** What to look at in a motion that was read: nothing of it stops the motion. */
 export function motionWarnings(motion: Motion, unit: AccelerationUnit): Fault[] {
   const { interval, acceleration } = motion;
-  const measures = measuresOf(motion);
+  const peak = largest(acceleration);
+  const velocity = velocityOf(acceleration, interval);
+  const endVelocity = velocity[velocity.length - 1];
   const out: Fault[] = [];
   const warn = (code: string, where: string, message: string, mend: string) => out.push({ code, where, message, mend });
-  if (measures.peakAcceleration > PLAUSIBLE.most || measures.peakAcceleration < PLAUSIBLE.least) {
-    const peak = measures.peakAcceleration / STANDARD_GRAVITY;
-    const other = likelier(measures.peakAcceleration, unit);
+  if (peak > PLAUSIBLE.most || peak < PLAUSIBLE.least) {
+    const peakG = peak / STANDARD_GRAVITY;
+    const other = likelier(peak, unit);
     warn(
       'implausible-peak',
       'unit',
-      `the peak is ${short(peak)} g with the unit ${unit}`,
+      `the peak is ${short(peakG)} g with the unit ${unit}`,
       other ? `Check the unit: is it ${other}?` : 'Check the unit',
     );
   }
-  if (measures.peakVelocity > 0 && Math.abs(measures.endVelocity) > ENDS_MOVING * measures.peakVelocity) {
+  if (Math.abs(endVelocity) > ENDS_MOVING * largest(velocity)) {
     warn(
       'velocity-ends',
       'end of the record',
-      `the velocity ends at ${short(measures.endVelocity)} m/s, not at zero; a shifted baseline does that`,
+      `the velocity ends at ${short(endVelocity)} m/s, not at zero; a shifted baseline does that`,
       'Use it as read, or take a corrected record',
     );
   }
@@ -55,15 +57,21 @@ export function motionWarnings(motion: Motion, unit: AccelerationUnit): Fault[] 
     );
   }
   const last = Math.abs(acceleration[acceleration.length - 1]);
-  if (last > CUT_OFF * measures.peakAcceleration) {
+  if (last > CUT_OFF * peak) {
     warn(
       'cut-off',
       'end of the record',
-      `the last sample is at ${Math.round((100 * last) / measures.peakAcceleration)} % of the peak; the motion is taken to fall to zero over one interval`,
+      `the last sample is at ${Math.round((100 * last) / peak)} % of the peak; the motion is taken to fall to zero over one interval`,
       'Use it as read, or take a record that is not cut off',
     );
   }
   return out;
+}
+
+function largest(x: Float64Array): number {
+  let most = 0;
+  for (let i = 0; i < x.length; i++) most = Math.max(most, Math.abs(x[i]));
+  return most;
 }
 
 /** The unit that would make a peak an earthquake's. */
