@@ -4,7 +4,7 @@ import { clearPlot, drawPlot, type PlotSpec } from './plotly.ts';
 
 export interface PlotProps {
   /** Makes what is to be drawn, when its turn comes; null: nothing to draw yet. A new function is a new drawing. */
-  readonly spec: (() => PlotSpec) | null;
+  readonly spec: (() => PlotSpec | null) | null;
   /** What it shows, in a sentence. */
   readonly label: string;
   /** Drawn from numbers that are no longer those of the document. */
@@ -18,12 +18,14 @@ export function Plot({ spec, label, old = false }: PlotProps) {
   useEffect(() => {
     const element = place.current;
     if (element === null || spec === null) return;
-    return queueDraw(element, () =>
-      drawPlot(element, spec()).then(
+    return queueDraw(element, async () => {
+      const made = spec();
+      if (made === null) return;
+      await drawPlot(element, made).then(
         () => setFailed(false),
         () => setFailed(true),
-      ),
-    );
+      );
+    });
   }, [spec]);
   useEffect(() => {
     const element = place.current;
