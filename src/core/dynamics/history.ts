@@ -4,7 +4,7 @@ import { FIELD, SUM } from './stepping.ts';
 import type { Workspace } from './workspace.ts';
 
 /** Histories of one run may take so many bytes; beyond it only each k-th step is kept, and k is said. */
-export const HISTORY_LIMIT = 64 * 1024 * 1024;
+const HISTORY_LIMIT = 64 * 1024 * 1024;
 
 export interface HistoryBuffers {
   readonly histories: Histories;
