@@ -26,9 +26,11 @@ export interface Pace {
   readonly shown: number;
   /** The evidence starts when nothing was typed for so long. */
   readonly evidence: number;
+  /** The same while a cell is edited: the next key's answer must not wait for a half-step run [ms]. */
+  readonly typing: number;
 }
 
-const PACE: Pace = { quick: 50, pause: 120, long: 3000, shown: 400, evidence: 200 };
+const PACE: Pace = { quick: 50, pause: 120, long: 3000, shown: 400, evidence: 200, typing: 800 };
 
 const EVIDENCE_PRIORITY = 10;
 
@@ -172,7 +174,7 @@ export function follow(
     if (faults.length > 0) rest({ status: 'stale', waits: true, faults });
   }
 
-  /** The whole answer in one update; false while a run is missing, or the chosen histories are about to come. */
+  /** The whole answer in one update; false while a run is missing. The histories of the chosen motion may still be on their way. */
   function publish(): boolean {
     if (!question) return false;
     const found: MotionRun[] = [];
@@ -185,15 +187,12 @@ export function follow(
     const took = asked.weight > 0 ? performance.now() - asked.at : (resultsStore.getState().answers?.took ?? 0);
     const answers = answersOf(question, { runs: found, stepErrors, samplesOf, took, at: Date.now() });
     const ask = chosenAsk(answers.envelope);
-    if (ask && full?.key !== ask.key && askHistories(ask) && expected.of(ask.weight) <= pace.quick) {
-      if (resultsStore.getState().status !== 'running') begin(question);
-      return true;
-    }
     expected.learn(asked.weight, took);
     asked = { at: 0, weight: 0 };
     rest({ status: 'current', answers, faults: [], changed: null, stepErrors, chosen: chosenRun(ask) });
     forgetMotions(question.case);
-    timers.evidence.set(pace.evidence, gatherEvidence);
+    if (ask) askHistories(ask);
+    timers.evidence.set(documentStore.getState().draft === null ? pace.evidence : pace.typing, gatherEvidence);
     return true;
   }
 

@@ -45,7 +45,7 @@ function watchedEngine(): Watched {
 
 let engine: Watched;
 let follower: Follower | null = null;
-const PACE: Pace = { quick: 1e6, pause: 0, long: 1e9, shown: 1e6, evidence: 0 };
+const PACE: Pace = { quick: 1e6, pause: 0, long: 1e9, shown: 1e6, evidence: 0, typing: 0 };
 
 function begin(project: Project = suite.project, pace: Partial<Pace> = {}): void {
   restore(project);
