@@ -1,6 +1,6 @@
 /**
  * The one stepping loop. All that a step reads and writes of a storey (and the floor on top of it) stands side by side in one
- * record of one flat array: kept in an array a quantity, the same loop took three times as long in Chromium (too many base
+ * record of one flat array: kept in an array a quantity, the same loop took a third longer in Chromium (too many base
  * addresses for the registers). Record i begins at i x STRIDE, ground up.
  *
  * Symbols: h step; u v a displacement, velocity, acceleration relative to the ground at the step before; ag ground
