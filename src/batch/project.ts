@@ -1,4 +1,5 @@
-import { dirname, resolve } from 'node:path';
+import { basename, dirname, resolve } from 'node:path';
+import { readRecord } from '../core/doors.ts';
 import type { Result } from '../core/fault.ts';
 import { type OpenedProject, readProject } from '../document/file.ts';
 import { readBytes } from './files.ts';
@@ -9,10 +10,10 @@ export function projectAt(path: string): Result<OpenedProject> {
   if (!bytes.ok) return bytes;
   const text = textOf(bytes.value);
   if (!text.ok) return text;
-  return readProject(text.value, (name) => {
+  return readProject(text.value, (name, answers) => {
     const record = readBytes(resolve(dirname(path), name));
     return record.ok
-      ? record
+      ? { ok: true, value: readRecord(basename(name), record.value, answers) }
       : { ok: false, faults: record.faults.map((fault) => ({ ...fault, message: `${name} ${fault.message}` })) };
   });
 }

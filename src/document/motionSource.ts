@@ -1,12 +1,12 @@
 import { digestOfSamples } from '../core/digest.ts';
-import { readRecord } from '../core/doors.ts';
 import type { Fault, Result } from '../core/fault.ts';
 import type { Motion } from '../core/motion/motion.ts';
+import type { RecordAnswers, RecordReading } from '../core/motion/reading.ts';
 import { objectOf } from './raw.ts';
 import type { FileMotion } from './schema.ts';
 
-/** How a motion given by a file name is got: bytes, or why not. */
-export type ReadFile = (name: string) => Result<Uint8Array>;
+/** How a motion given by a file name is got: what the record reader made of it, or why it cannot be reached. (Handed in: the page never reads files this way, and need not load the reader for it.) */
+export type ReadFile = (name: string, answers: RecordAnswers) => Result<RecordReading>;
 
 /** The samples of a motion of a project file, with what is known of where they came from. */
 export interface Source extends Pick<Motion, 'acceleration' | 'interval'> {
@@ -88,12 +88,12 @@ export function sourceOf(motion: FileMotion, where: string, readFile: ReadFile |
 
 /** A record beside the project: unit and interval as answers, which the reader refuses where they contradict the file. */
 function recordOf(file: string, { unit, interval }: FileMotion, where: string, readFile: ReadFile): Result<Motion> {
-  const bytes = readFile(file);
-  if (!bytes.ok) return { ok: false, faults: bytes.faults.map((fault) => ({ ...fault, where: `${where}.file` })) };
-  const reading = readRecord(file.split('/').at(-1) ?? file, bytes.value, {
+  const read = readFile(file, {
     ...(unit === undefined ? {} : { unit }),
     ...(interval === undefined ? {} : { interval }),
   });
+  if (!read.ok) return { ok: false, faults: read.faults.map((fault) => ({ ...fault, where: `${where}.file` })) };
+  const reading = read.value;
   if (reading.motion) return { ok: true, value: reading.motion };
   const asked = reading.asks.map((what) => ({
     code: `no-${what}`,

@@ -1,5 +1,7 @@
 import fc from 'fast-check';
 import { describe, expect, test } from 'vitest';
+import { readRecord } from '../../src/core/doors.ts';
+import type { RecordAnswers } from '../../src/core/motion/reading.ts';
 import { readProject, writeProject } from '../../src/document/file.ts';
 import { migrated } from '../../src/document/migrations.ts';
 
@@ -195,7 +197,8 @@ describe('[DOC-2] motions by file', () => {
   // 5 values at 0.02 s in g, with its count and interval in the heading; and the same without unit and interval
   const RECORD = 'NPTS= 5, DT= .02 SEC, UNITS G\n0.01 -0.02 0.03 -0.04 0.05\n';
   const BARE = '0.01\n-0.02\n0.03\n-0.04\n0.05\n';
-  const beside = (text: string) => () => ({ ok: true, value: new TextEncoder().encode(text) }) as const;
+  const beside = (text: string) => (name: string, answers: RecordAnswers) =>
+    ({ ok: true, value: readRecord(name.split('/').at(-1) ?? name, new TextEncoder().encode(text), answers) }) as const;
   test('are read by their file, under the name of the project, in m/s2', () => {
     const file = good() as Good & Record<string, unknown>;
     byFile({})(file);

@@ -1,5 +1,6 @@
 import { readFileSync } from 'node:fs';
 import { expect, test } from 'vitest';
+import { readRecord } from '../../src/core/doors.ts';
 import { caseOf } from '../../src/document/case.ts';
 import { readProject } from '../../src/document/file.ts';
 
@@ -7,9 +8,9 @@ test('the project file in the README is one, and can be computed', () => {
   const [, text] = /```json\n([\s\S]*?)```/.exec(readFileSync('README.md', 'utf8')) ?? [];
   const record = Array.from({ length: 100 }, (_, i) => `${(0.01 * i).toFixed(2)} ${Math.sin(i).toFixed(4)}`).join('\n');
   const asked: string[] = [];
-  const read = readProject(text, (name) => {
+  const read = readProject(text, (name, answers) => {
     asked.push(name);
-    return { ok: true, value: new TextEncoder().encode(record) };
+    return { ok: true, value: readRecord(name, new TextEncoder().encode(record), answers) };
   });
   if (!read.ok) throw new Error(JSON.stringify(read.faults));
   expect(asked).toEqual(['records/a.txt']);
