@@ -112,7 +112,7 @@ export function timeKernel(
   const once = () => {
     work.records.set(fresh);
     sums.fill(0);
-    stepTo(work.records, work.matrix, n, problem.ground, work.scheme, sums, 0, problem.steps);
+    stepTo(work.records, work.matrix, n, problem.ground, work.scheme, sums, problem.residualFrom, 0, problem.steps);
   };
   for (let i = 0; i < 60; i++) once();
   const batch = 5;

@@ -1,6 +1,6 @@
 import { type HistoryBuffers, historyBuffers, keepHistory } from './history.ts';
 import type { Problem } from './problem.ts';
-import { emptyResiduals, keepResiduals, type Residuals, residualsOf } from './residual.ts';
+import { residualsOf } from './residual.ts';
 import type { Ending, MethodChoice, Run, Want } from './run.ts';
 import { FIELD, STATE, SUM, stepTo } from './stepping.ts';
 import { type Workspace, workspace } from './workspace.ts';
@@ -28,12 +28,9 @@ export function startMarch(problem: Problem, choice: MethodChoice, want: Want): 
   const { n } = problem.prepared.arrays;
   const work = workspace(problem);
   const { records, matrix, scheme, sums } = work;
-  const residuals = emptyResiduals(n);
   const histories = want.histories ? historyBuffers(problem) : null;
   if (histories) keepHistory(histories, problem, work, 0);
   let done = 0;
-  // Up to here nothing is looked at between steps, so that they run in one go.
-  const unwatched = histories ? 0 : Math.min(steps, residualFrom);
   const over = () => done >= steps || sums[SUM.STOPPED] !== STATE.GOING;
   return {
     steps,
@@ -42,16 +39,15 @@ export function startMarch(problem: Problem, choice: MethodChoice, want: Want): 
     },
     advance(count) {
       const end = Math.min(steps, done + count);
-      if (!over() && done < unwatched)
-        done = stepTo(records, matrix, n, ground, scheme, sums, done, Math.min(end, unwatched));
+      // Histories are kept between steps; without them nothing is looked at, and the steps run in one go.
       while (!over() && done < end) {
-        done = stepTo(records, matrix, n, ground, scheme, sums, done, done + 1);
+        const to = histories ? done + 1 : end;
+        done = stepTo(records, matrix, n, ground, scheme, sums, residualFrom, done, to);
         if (histories) keepHistory(histories, problem, work, done);
-        if (done > residualFrom) keepResiduals(residuals, records);
       }
       return over();
     },
-    finish: () => runOf(problem, choice, work, residuals, histories, done, endingOf(problem, work, done, over())),
+    finish: () => runOf(problem, choice, work, histories, done, endingOf(problem, work, done, over())),
   };
 }
 
@@ -78,12 +74,11 @@ function runOf(
   problem: Problem,
   method: MethodChoice,
   { records, sums }: Workspace,
-  residuals: Residuals,
   histories: HistoryBuffers | null,
   done: number,
   ending: Ending | null,
 ): Run {
-  const { step, steps, prepared } = problem;
+  const { step, steps, prepared, residualFrom } = problem;
   const { n, stiffness, height } = prepared.arrays;
   const column = (field: number) => Float64Array.from({ length: n }, (_, i) => records[i * FIELD.STRIDE + field]);
   const peakDrift = column(FIELD.PEAK_DRIFT);
@@ -96,7 +91,7 @@ function runOf(
       peakDrift,
       peakDriftRatio: peakDrift.map((d, i) => d / height[i]),
       peakTime: column(FIELD.PEAK_STEP).map((at) => at * step),
-      ...residualsOf(residuals),
+      ...residualsOf(records, n, done - residualFrom),
       // An elastic storey without a damper: shear follows drift, so its peak is k times the peak drift.
       peakShear: peakDrift.map((d, i) => stiffness[i] * d),
       peakOverturning: column(FIELD.PEAK_OVERTURNING),

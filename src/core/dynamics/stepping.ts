@@ -23,7 +23,9 @@ const
   PEAK_DRIFT = 16, PEAK_STEP = 17, PEAK_OVERTURNING = 18, PEAK_U = 19, PEAK_V = 20, PEAK_TOTAL = 21,
   /** Drift at which the run is stopped [m]. */
   STOP = 22,
-  STRIDE = 23;
+  /** Over the last fundamental period: sum, least and largest of the signed drift [m]. */
+  DRIFT_SUM = 23, DRIFT_LEAST = 24, DRIFT_MOST = 25,
+  STRIDE = 26;
 
 /** Places in the sums that a slice of the march hands to the next one. Energies are doubled there [J]. */
 // biome-ignore format: a table
@@ -59,6 +61,9 @@ export const FIELD = {
   PEAK_V,
   PEAK_TOTAL,
   STOP,
+  DRIFT_SUM,
+  DRIFT_LEAST,
+  DRIFT_MOST,
   STRIDE,
 } as const;
 export const SUM = {
@@ -101,6 +106,7 @@ export interface Scheme {
  * @param matrix   the full matrix of the step, or null
  * @param ground   ag at each step, at least `to` + 1 entries [m/s2]
  * @param sums     SUMS entries
+ * @param settling step after which drifts are summed for the residual
  * @returns the last step done: `to`, or the one at which sums[STOPPED] was set
  */
 export function stepTo(
@@ -110,6 +116,7 @@ export function stepTo(
   ground: Float64Array,
   scheme: Scheme,
   sums: Float64Array,
+  settling: number,
   from: number,
   to: number,
 ): number {
@@ -174,6 +181,7 @@ export function stepTo(
     let push = 0;
     let dampingStep = 0;
     let stopped = false;
+    const settles = j > settling;
     kinetic = 0;
     strain = 0;
     for (; p >= 0; p -= STRIDE) {
@@ -221,6 +229,11 @@ export function stepTo(
         w[p + PEAK_DRIFT] = driftSize;
         w[p + PEAK_STEP] = j;
         if (driftSize > w[p + STOP]) stopped = true;
+      }
+      if (settles) {
+        w[p + DRIFT_SUM] += d;
+        if (d < w[p + DRIFT_LEAST]) w[p + DRIFT_LEAST] = d;
+        if (d > w[p + DRIFT_MOST]) w[p + DRIFT_MOST] = d;
       }
       const overturningSize = Math.abs(overturning);
       if (overturningSize > w[p + PEAK_OVERTURNING]) w[p + PEAK_OVERTURNING] = overturningSize;

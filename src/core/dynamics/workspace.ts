@@ -26,6 +26,8 @@ export function workspace({ prepared, method, step, ground, stopDrift }: Problem
     records[at + FIELD.STIFFNESS] = netStiffness[i];
     records[at + FIELD.LEVER] = stiffness[i] * height[i];
     records[at + FIELD.STOP] = stopDrift[i];
+    records[at + FIELD.DRIFT_LEAST] = Number.POSITIVE_INFINITY;
+    records[at + FIELD.DRIFT_MOST] = Number.NEGATIVE_INFINITY;
     // At rest, M a = -M ag at t = 0.
     records[at + FIELD.A] = -ground[0];
   }
