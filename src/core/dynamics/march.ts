@@ -1,4 +1,4 @@
-import { type HistoryBuffers, historyBuffers, keepHistory } from './history.ts';
+import { type HistoryBuffers, historiesUpTo, historyBuffers, keepHistory } from './history.ts';
 import type { Problem } from './problem.ts';
 import { residualsOf } from './residual.ts';
 import type { Ending, MethodChoice, Run, Want } from './run.ts';
@@ -111,6 +111,6 @@ function runOf(
       hysteretic: 0,
       imbalance: sums[SUM.LARGEST_INPUT] > 0 ? sums[SUM.LARGEST_GAP] / sums[SUM.LARGEST_INPUT] : 0,
     },
-    histories: histories ? histories.upTo(done) : null,
+    histories: histories ? historiesUpTo(histories, n, done) : null,
   };
 }
