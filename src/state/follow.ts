@@ -124,10 +124,8 @@ export function follow(
     }
     asked = { at: performance.now(), weight: missing.reduce((sum, ask) => sum + ask.weight, 0) };
     const chosen = chosenMotionOf(documentStore.getState(), sessionStore.getState(), resultsStore.getState());
-    for (const ask of [...missing].sort((a, b) => Number(b.motion === chosen) - Number(a.motion === chosen))) {
-      const request = ask.motion === chosen ? withHistories(ask) : ask.request;
-      send(`run ${ask.motion}`, ask, request, 0, (run) => take(ask, run));
-    }
+    // Histories come after the answers: a run that keeps them takes twice as long, and only the panels wait for it.
+    for (const ask of missing) send(`run ${ask.motion}`, ask, ask.request, 0, (run) => take(ask, run));
     const first = asking.asks.find((ask) => ask.motion === chosen);
     if (first && runs.has(first.key)) askHistories(first);
   }
