@@ -9,7 +9,7 @@ export default defineConfig({
   test: {
     include: ['test/**/*.test.ts', 'test/**/*.test.tsx'],
     exclude: ['test/bench/**'],
-    setupFiles: ['test/support/warnings.ts'],
+    setupFiles: ['test/support/warnings.ts', 'test/support/seed.ts'],
     testTimeout: 60_000,
     reporters: ['default', ['json', { outputFile: '.cache/vitest.json' }]],
   },

@@ -17,7 +17,8 @@ describe('one number', () => {
   test('is what the language reads, to the last bit', () => {
     fc.assert(
       fc.property(fc.double({ noNaN: true, noDefaultInfinity: true }), (value) => {
-        expect(read(String(value))).toBe(value);
+        // The language writes minus zero as 0.
+        expect(read(String(value))).toBe(value === 0 ? 0 : value);
       }),
     );
     fc.assert(
