@@ -8,14 +8,32 @@ import type { Origin } from '../core/motion/motion.ts';
  */
 export type Typed = number | null | string;
 
+/** Laws as the project file names them; what the numbers mean is said in core/frame/frame.ts. */
+export type LawRow =
+  | { readonly kind: 'elastic' }
+  | { readonly kind: 'bilinear'; readonly strength: Typed; readonly hardening: Typed }
+  | { readonly kind: 'peak-oriented'; readonly strength: Typed; readonly hardening: Typed }
+  | {
+      readonly kind: 'bouc-wen';
+      readonly strength: Typed;
+      readonly hardening: Typed;
+      readonly exponent: Typed;
+      readonly beta: Typed;
+      readonly gamma: Typed;
+    }
+  | { readonly kind: 'flag'; readonly strength: Typed; readonly hardening: Typed; readonly ratio: Typed };
+
 export interface StoreyRow {
   readonly name: string;
   readonly height: Typed;
   readonly mass: Typed;
   readonly stiffness: Typed;
-  readonly law: { readonly kind: 'elastic' };
+  readonly law: LawRow;
   /** Absent: mass x g. */
   readonly gravity?: Typed;
+  readonly damper?: { readonly coefficient: Typed; readonly exponent: Typed };
+  /** Absent: storey. The first storey only may be an isolator. */
+  readonly role?: 'storey' | 'isolator';
 }
 
 export type DampingRow =
@@ -24,7 +42,7 @@ export type DampingRow =
       readonly kind: 'rayleigh';
       readonly modes: readonly [Typed, Typed];
       readonly ratios: readonly [Typed, Typed];
-      readonly stiffness?: 'initial';
+      readonly stiffness?: 'initial' | 'tangent';
     }
   | { readonly kind: 'modal'; readonly ratios: readonly Typed[] }
   | { readonly kind: 'stiffness-proportional'; readonly mode: Typed; readonly ratio: Typed };
@@ -46,7 +64,6 @@ export interface MotionEntry {
 
 export interface AnalysisRow {
   readonly method: MethodChoice;
-  /** `auto` arrives with a later version. */
   readonly step: StepChoice | null | string;
   readonly tail: Typed;
   readonly stopDrift: Typed;
@@ -57,6 +74,8 @@ export interface LimitsRow {
   readonly measure?: 'mean' | 'median' | 'max';
   readonly factor: Typed;
   readonly source: string;
+  /** Displacement that an isolator may reach [m]; absent: not compared. */
+  readonly isolator?: Typed;
 }
 
 export interface Project {
@@ -68,5 +87,5 @@ export interface Project {
 }
 
 export const PROJECT_FORMAT = 'swaybook';
-export const PROJECT_VERSION = 1;
+export const PROJECT_VERSION = 2;
 export const MAX_STOREYS = 60;

@@ -1,6 +1,7 @@
 import { type Problem, problemOf } from '../../src/core/dynamics/problem.ts';
+import { FIELD } from '../../src/core/dynamics/record.ts';
 import type { MethodChoice, RunCase } from '../../src/core/dynamics/run.ts';
-import { FIELD, stepTo } from '../../src/core/dynamics/stepping.ts';
+import { stepTo } from '../../src/core/dynamics/stepping.ts';
 import { workspace } from '../../src/core/dynamics/workspace.ts';
 import type { Damping } from '../../src/core/frame/frame.ts';
 import { prepareFrame } from '../../src/core/frame/prepare.ts';

@@ -53,6 +53,8 @@ export function endingWords({ ending, storeys }: Run): string {
       return `storey ${ending.storey + 1} passed the drift at which a run is stopped at ${time} s, drift ${printQuantity(storeys.peakDriftRatio[ending.storey], 'percent', 'si', 1)} %`;
     case 'diverged':
       return `the numbers left the finite range at ${time} s`;
+    case 'not-converged':
+      return `storey ${ending.storey + 1} found no equilibrium at ${time} s, however short the step`;
     case 'cancelled':
       return `it was stopped at ${time} s`;
   }

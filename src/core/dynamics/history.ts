@@ -1,6 +1,6 @@
 import type { Problem } from './problem.ts';
+import { FIELD, SUM } from './record.ts';
 import type { Histories } from './run.ts';
-import { FIELD, SUM } from './stepping.ts';
 import type { Workspace } from './workspace.ts';
 
 /** Histories of one run may take so many bytes; beyond it only each k-th step is kept, and k is said. */
@@ -34,6 +34,7 @@ export function historyBuffers({ prepared, steps }: Problem): HistoryBuffers {
     shear: all(),
     acceleration: all(),
     energy: { input: one(), kinetic: one(), strain: one(), damping: one(), dampers: one(), hysteretic: one() },
+    nonlinear: null,
   };
   return { histories, block: new Float64Array(BLOCK * 3 * n), gathered: 0, written: 0 };
 }
@@ -112,5 +113,6 @@ function cut(h: Histories, kept: number): Histories {
       dampers: rows(energy.dampers),
       hysteretic: rows(energy.hysteretic),
     },
+    nonlinear: h.nonlinear,
   };
 }

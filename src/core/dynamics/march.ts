@@ -1,8 +1,9 @@
 import { type HistoryBuffers, historiesUpTo, historyBuffers, keepHistory } from './history.ts';
 import type { Problem } from './problem.ts';
+import { FIELD, STATE, SUM } from './record.ts';
 import { residualsOf } from './residual.ts';
 import type { Ending, MethodChoice, Run, Want } from './run.ts';
-import { FIELD, STATE, SUM, stepTo } from './stepping.ts';
+import { stepTo } from './stepping.ts';
 import { type Workspace, workspace } from './workspace.ts';
 
 /** FIELD.A march under way: call `advance` until it says true, then `finish`. Nothing is allocated in `advance`. */
@@ -96,6 +97,9 @@ function runOf(
       peakShear: peakDrift.map((d, i) => stiffness[i] * d),
       peakOverturning: column(FIELD.PEAK_OVERTURNING),
       dissipated: new Float64Array(n),
+      ductility: new Float64Array(n).fill(Number.NaN),
+      firstYield: new Float64Array(n).fill(Number.NaN),
+      damperWork: new Float64Array(n),
     },
     floors: {
       peakDisplacement: column(FIELD.PEAK_U),
@@ -111,6 +115,7 @@ function runOf(
       hysteretic: 0,
       imbalance: sums[SUM.LARGEST_INPUT] > 0 ? sums[SUM.LARGEST_GAP] / sums[SUM.LARGEST_INPUT] : 0,
     },
+    marching: { solves: done, mostSolves: Math.min(1, done), halvings: 0 },
     histories: histories ? historiesUpTo(histories, n, done) : null,
   };
 }

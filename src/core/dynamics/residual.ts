@@ -1,4 +1,4 @@
-import { FIELD } from './stepping.ts';
+import { FIELD } from './record.ts';
 
 /**
  * Residual drift: signed mean over the last fundamental period of a run, and the largest distance from it [m], from what the

@@ -62,11 +62,21 @@ export interface Histories {
     readonly dampers: Float64Array;
     readonly hysteretic: Float64Array;
   };
+  /** Of frames that yield or have dampers; null for linear ones. */
+  readonly nonlinear: {
+    /** Force of the storey damper [N], a part of `shear`; storeys x count. */
+    readonly damper: Float64Array;
+    /** 1 where the storey is past yield (its tangent is softer than the initial stiffness), storeys x count. */
+    readonly yielding: Uint8Array;
+  } | null;
 }
 
 export interface Ending {
-  /** `collapsed`: a storey passed stopDrift. `diverged`: the numbers left the finite range. `cancelled`: superseded or stopped. */
-  readonly status: 'collapsed' | 'diverged' | 'cancelled';
+  /**
+   * `collapsed`: a storey passed stopDrift. `diverged`: the numbers left the finite range. `not-converged`: a step did not
+   * converge however far it was halved. `cancelled`: superseded or stopped.
+   */
+  readonly status: 'collapsed' | 'diverged' | 'not-converged' | 'cancelled';
   /** Storey index, from 0; -1 where no single storey is to blame. */
   readonly storey: number;
   /** [s] */
@@ -99,6 +109,12 @@ export interface Run {
     readonly peakOverturning: Float64Array;
     /** Work of the restoring force that is not recoverable [J]. */
     readonly dissipated: Float64Array;
+    /** Peak drift / yield drift [-]; NaN for elastic storeys. */
+    readonly ductility: Float64Array;
+    /** When the storey first passed its yield drift [s]; NaN where it never did. */
+    readonly firstYield: Float64Array;
+    /** Work taken by the storey damper [J]. */
+    readonly damperWork: Float64Array;
   };
   readonly floors: {
     /** Relative to the ground [m]. */
@@ -117,6 +133,15 @@ export interface Run {
     readonly dampers: number;
     readonly hysteretic: number;
     readonly imbalance: number;
+  };
+  /** What the steps cost. Linear frames: one solve a step, no halving. */
+  readonly marching: {
+    /** Solves of the step's equations, all steps together. */
+    readonly solves: number;
+    /** Most solves of one step. */
+    readonly mostSolves: number;
+    /** Times that a step was halved because it did not converge. */
+    readonly halvings: number;
   };
   readonly histories: Histories | null;
 }

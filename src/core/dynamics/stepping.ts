@@ -1,81 +1,11 @@
-/**
- * The one stepping loop. All that a step reads and writes of a storey (and the floor on top of it) stands side by side in one
- * record of one flat array: kept in an array a quantity, the same loop took a third longer in Chromium (too many base
- * addresses for the registers). Record i begins at i x STRIDE, ground up.
- *
- * Symbols: h step; u v a displacement, velocity, acceleration relative to the ground at the step before; ag ground
- * acceleration; x y the weighted predictors of displacement and velocity; q storey force of the predictors; d drift; fs, fd
- * restoring and damping force. A name that ends in B or A is that of the floor below or above, in n the one at the new step.
- */
-// biome-ignore format: a table, a line a group
-const
-  /** Floor mass [kg] and its inverse; storey stiffness less P-Delta [N/m]; initial stiffness x height [N]. */
-  MASS = 0, PER_MASS = 1, STIFFNESS = 2, LEVER = 3,
-  /** Dashpots to the ground and between floors [N s/m]. */
-  FLOOR_DASHPOT = 4, STOREY_DASHPOT = 5,
-  /** Factors of the step's matrix: multiplier and inverse pivot. */
-  MULTIPLIER = 6, PER_PIVOT = 7,
-  /** State [m, m/s, m/s2] and scratch: right-hand side, part-solved; the next a of a full matrix. */
-  U = 8, V = 9, A = 10, RHS = 11, NEXT = 12,
-  /** Damping force on the floor, C v [N]; C a, carried for full matrices [N/s]; total acceleration [m/s2]. */
-  DAMPING_FORCE = 13, DAMPING_RATE = 14, TOTAL = 15,
-  /** Largest magnitudes so far, and the step of the drift's. */
-  PEAK_DRIFT = 16, PEAK_STEP = 17, PEAK_OVERTURNING = 18, PEAK_U = 19, PEAK_V = 20, PEAK_TOTAL = 21,
-  /** Drift at which the run is stopped [m]. */
-  STOP = 22,
-  /** Over the last fundamental period: sum, least and largest of the signed drift [m]. */
-  DRIFT_SUM = 23, DRIFT_LEAST = 24, DRIFT_MOST = 25,
-  STRIDE = 26;
+import { FIELD, STATE, SUM } from './record.ts';
 
-/** Places in the sums that a slice of the march hands to the next one. Energies are doubled there [J]. */
-// biome-ignore format: a table
-const SUM_INPUT = 0, SUM_DAMPING = 1, SUM_KINETIC = 2, SUM_STRAIN = 3, LARGEST_GAP = 4, LARGEST_INPUT = 5, STOPPED = 6, SUMS = 7;
-
-/** What STOPPED says: under way, a storey passed its stop drift, the numbers left the finite range. */
-const GOING = 0;
-const COLLAPSED = 1;
-const DIVERGED = 2;
-export const STATE = { GOING, COLLAPSED, DIVERGED } as const;
-
-/**
- * The places above for those who fill and read the records. The loop itself uses the plain constants: an exported one is
- * looked up at each use where modules are not bundled (Node), and cost it half its speed.
- */
-export const FIELD = {
-  MASS,
-  PER_MASS,
-  STIFFNESS,
-  LEVER,
-  FLOOR_DASHPOT,
-  STOREY_DASHPOT,
-  MULTIPLIER,
-  PER_PIVOT,
-  U,
-  A,
-  DAMPING_RATE,
-  TOTAL,
-  PEAK_DRIFT,
-  PEAK_STEP,
-  PEAK_OVERTURNING,
-  PEAK_U,
-  PEAK_V,
-  PEAK_TOTAL,
-  STOP,
-  DRIFT_SUM,
-  DRIFT_LEAST,
-  DRIFT_MOST,
-  STRIDE,
-} as const;
-export const SUM = {
-  INPUT: SUM_INPUT,
-  DAMPING: SUM_DAMPING,
-  KINETIC: SUM_KINETIC,
-  STRAIN: SUM_STRAIN,
-  LARGEST_GAP,
-  LARGEST_INPUT,
-  STOPPED,
-  SUMS,
-} as const;
+const { MASS, PER_MASS, STIFFNESS, LEVER, FLOOR_DASHPOT, STOREY_DASHPOT, MULTIPLIER, PER_PIVOT } = FIELD;
+const { U, V, A, RHS, NEXT, DAMPING_FORCE, DAMPING_RATE, TOTAL, STOP, STRIDE } = FIELD;
+const { PEAK_DRIFT, PEAK_STEP, PEAK_OVERTURNING, PEAK_U, PEAK_V, PEAK_TOTAL } = FIELD;
+const { DRIFT_SUM, DRIFT_LEAST, DRIFT_MOST } = FIELD;
+const { INPUT, DAMPING, KINETIC, STRAIN, LARGEST_GAP, LARGEST_INPUT, STOPPED } = SUM;
+const { COLLAPSED, DIVERGED } = STATE;
 
 /** The inverse of the step's matrix, row-major n x n, and scratch of n for the right-hand side without gaps. */
 export interface FullMatrix {
@@ -93,7 +23,7 @@ export interface Scheme {
 }
 
 /**
- * Steps `from` + 1 to `to` of a linear frame. Nothing is allocated and nothing checked in here. Two sweeps a step: upwards the
+ * Steps `from` + 1 to `to` of a linear frame, on records (record.ts). Nothing is allocated and nothing checked in here. Two sweeps a step: upwards the
  * right-hand side and the elimination, downwards the substitution, the new state, energies and peaks, each number used while
  * it is still in a register.
  *
@@ -101,6 +31,10 @@ export interface Scheme {
  * the step's matrix A = (1 - am) M + (1 - af) (gamma h C + beta h^2 K) comes inverted, a step is one product with it, and C
  * itself is never needed: from A a(n+1) = r follows C a(n+1) = (r - (1 - am) M a(n+1) - (1 - af) beta h^2 K a(n+1)) /
  * ((1 - af) gamma h), and C v, C a are carried along by the scheme's own update of v.
+ *
+ * Symbols: h step; u v a displacement, velocity, acceleration relative to the ground at the step before; ag ground
+ * acceleration; x y the weighted predictors of displacement and velocity; q storey force of the predictors; d drift; fs, fd
+ * restoring and damping force. A name that ends in B or A is that of the floor below or above, in n the one at the new step.
  *
  * @param w        n records of STRIDE
  * @param matrix   the full matrix of the step, or null
@@ -134,10 +68,10 @@ export function stepTo(
   const onStiffness = wf * b0;
   const perDamping = 1 / (wf * g0);
   const top = (n - 1) * STRIDE;
-  let input = sums[SUM_INPUT];
-  let damping = sums[SUM_DAMPING];
-  let kinetic = sums[SUM_KINETIC];
-  let strain = sums[SUM_STRAIN];
+  let input = sums[INPUT];
+  let damping = sums[DAMPING];
+  let kinetic = sums[KINETIC];
+  let strain = sums[STRAIN];
   let largestGap = sums[LARGEST_GAP];
   let largestInput = sums[LARGEST_INPUT];
   let last = to;
@@ -260,10 +194,10 @@ export function stepTo(
       break;
     }
   }
-  sums[SUM_INPUT] = input;
-  sums[SUM_DAMPING] = damping;
-  sums[SUM_KINETIC] = kinetic;
-  sums[SUM_STRAIN] = strain;
+  sums[INPUT] = input;
+  sums[DAMPING] = damping;
+  sums[KINETIC] = kinetic;
+  sums[STRAIN] = strain;
   sums[LARGEST_GAP] = largestGap;
   sums[LARGEST_INPUT] = largestInput;
   return last;

@@ -2,7 +2,8 @@ import { assembleTridiagonal } from '../frame/matrices.ts';
 import type { PreparedFrame } from '../frame/prepare.ts';
 import { factorTridiagonal } from '../linalg/tridiagonal.ts';
 import type { Problem } from './problem.ts';
-import { FIELD, type FullMatrix, type Scheme, SUM } from './stepping.ts';
+import { FIELD, SUM } from './record.ts';
+import type { FullMatrix, Scheme } from './stepping.ts';
 
 /** All scratch of one march, made once: the only thing a step may write. */
 export interface Workspace {

@@ -10,6 +10,7 @@ const histories = {
   shear: new Float64Array(6),
   acceleration: new Float64Array(6),
   energy: { input: zero, kinetic: zero, strain: zero, damping: zero, dampers: zero, hysteretic: zero },
+  nonlinear: null,
 };
 
 describe('the frame at the cursor', () => {

@@ -1,0 +1,51 @@
+import { FIELD } from '../record.ts';
+import type { LawBehaviour } from './law.ts';
+
+const { K, K_YIELD, STRENGTH, LAW_A, DRIFT, FORCE, WORK, TRIAL_DRIFT, TRIAL_FORCE, TANGENT } = FIELD;
+
+/**
+ * Bilinear with kinematic hardening: elastic between two parallel lines of slope K_YIELD, +-(1 - h) Fy + K_YIELD x; without
+ * hardening elastic-perfectly plastic. Its state is where it is: DRIFT and FORCE; LAW_A holds the lines' offset (1 - h) Fy.
+ * Source: Prager (1956), J. Appl. Mech. 23, 493-496 (kinematic hardening); in this form Chopra, Dynamics of Structures, section
+ * 7.1 (both from memory).
+ */
+export const bilinear: LawBehaviour = { begin, trial, commit, recoverable };
+
+export function begin(w: Float64Array, at: number): void {
+  w[at + LAW_A] = w[at + STRENGTH] * (1 - w[at + K_YIELD] / w[at + K]);
+}
+
+export function trial(w: Float64Array, at: number): void {
+  const d = w[at + TRIAL_DRIFT];
+  const k = w[at + K];
+  const h = w[at + K_YIELD];
+  const elastic = w[at + FORCE] + k * (d - w[at + DRIFT]);
+  const upper = h * d + w[at + LAW_A];
+  const lower = h * d - w[at + LAW_A];
+  const inside = elastic <= upper && elastic >= lower;
+  w[at + TRIAL_FORCE] = inside ? elastic : elastic > upper ? upper : lower;
+  w[at + TANGENT] = inside ? k : h;
+}
+
+/** The path is elastic as far as the line that bounds it, then along that line. */
+export function commit(w: Float64Array, at: number): void {
+  const d0 = w[at + DRIFT];
+  const f0 = w[at + FORCE];
+  const d1 = w[at + TRIAL_DRIFT];
+  const f1 = w[at + TRIAL_FORCE];
+  const k = w[at + K];
+  const h = w[at + K_YIELD];
+  const step = d1 - d0;
+  const rise = f1 - f0;
+  // Elastic as far as a drift of `free`: k free + h (step - free) = rise.
+  const free = k > h ? (rise - h * step) / (k - h) : step;
+  const middle = f0 + k * free;
+  w[at + WORK] += 0.5 * ((f0 + middle) * free + (middle + f1) * (step - free));
+  w[at + DRIFT] = d1;
+  w[at + FORCE] = f1;
+}
+
+/** f^2 / (2 k). Source: the project-file page. */
+export function recoverable(w: Float64Array, at: number, out: number): void {
+  w[out] = (0.5 * w[at + FORCE] * w[at + FORCE]) / w[at + K];
+}
