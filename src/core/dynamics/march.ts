@@ -106,6 +106,7 @@ function runOf(
       peakVelocity: column(FIELD.PEAK_V),
       peakAcceleration: column(FIELD.PEAK_TOTAL),
     },
+    base: { peakDampingForce: Number.NaN },
     energy: {
       input: sums[SUM.INPUT] / 2,
       kinetic: sums[SUM.KINETIC] / 2,

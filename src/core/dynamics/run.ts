@@ -116,6 +116,13 @@ export interface Run {
     /** Work taken by the storey damper [J]. */
     readonly damperWork: Float64Array;
   };
+  readonly base: {
+    /**
+     * Largest |sum over the floors of the viscous force C v| while any storey is past yield [N]: what damping then adds to the
+     * storeys' base shear. NaN for linear frames.
+     */
+    readonly peakDampingForce: number;
+  };
   readonly floors: {
     /** Relative to the ground [m]. */
     readonly peakDisplacement: Float64Array;
