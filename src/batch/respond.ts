@@ -94,7 +94,7 @@ function sourceOf(read: OpenedProject, asked: Case, runs: readonly ReportRun[]):
       return { ...entry, scale: Number(entry.scale), peakAcceleration };
     }),
     runs,
-    envelope: envelopeOf(runs, asked.limits, asked.leftOut),
+    envelope: envelopeOf(runs, asked.limits, asked.leftOut, asked.frame),
     analysis: asked.analysis,
     limits: asked.limits,
   };

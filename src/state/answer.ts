@@ -1,5 +1,7 @@
 import { cautionsOf } from '../core/checks/cautions.ts';
 import { envelopeOf } from '../core/checks/envelope.ts';
+import { evidenceSentence } from '../core/checks/evidenceSentence.ts';
+import { evidenceOf } from '../core/dynamics/evidence.ts';
 import { stepLimit, stepOf } from '../core/dynamics/steps.ts';
 import type { Case } from '../document/case.ts';
 import type { Answers, MotionRun } from './answers.ts';
@@ -19,13 +21,22 @@ export interface Found {
 /** The whole answer to a question whose runs are all in. */
 export function answersOf({ key, case: from }: Question, { runs, stepErrors, samplesOf, took, at }: Found): Answers {
   const { limits, analysis, prepared, leftOut } = from;
-  const envelope = envelopeOf(runs, limits, leftOut);
+  const envelope = envelopeOf(runs, limits, leftOut, from.frame);
   const motions = from.motions.map(({ name, interval, samples }) => {
     const values = samplesOf(samples);
     return { name, interval, ...(values ? { lastOverPeak: lastOverPeak(values) } : {}) };
   });
   const cautions = cautionsOf({ envelope, limits, analysis, prepared, runs, motions, stepErrors });
-  return { key, case: from, modes: prepared.modes, runs, envelope, cautions, step: stepFacts(from), took, at };
+  const evidence = Object.fromEntries(
+    runs.map(({ motion, run }, i) => {
+      const error = stepErrors?.[motion] ?? null;
+      return [motion, evidenceOf(prepared, run, motions[i].interval, error)];
+    }),
+  );
+  const sentence = evidenceSentence(Object.values(evidence));
+  const { modes } = prepared;
+  const step = stepFacts(from);
+  return { key, case: from, modes, runs, envelope, cautions, evidence, evidenceSentence: sentence, step, took, at };
 }
 
 function stepFacts({ analysis, motions, prepared: { modes } }: Case): Answers['step'] {

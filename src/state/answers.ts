@@ -2,6 +2,7 @@ import { useStore } from 'zustand';
 import { createStore } from 'zustand/vanilla';
 import type { Caution } from '../core/checks/cautions.ts';
 import type { Envelope } from '../core/checks/envelope.ts';
+import type { Evidence } from '../core/dynamics/evidence.ts';
 import type { Run } from '../core/dynamics/run.ts';
 import type { Fault } from '../core/fault.ts';
 import type { Mode } from '../core/frame/modes.ts';
@@ -22,6 +23,10 @@ export interface Answers {
   readonly runs: readonly MotionRun[];
   readonly envelope: Envelope;
   readonly cautions: readonly Caution[];
+  /** How far each run can be trusted, by motion; its step error is null until the half-step run is in. */
+  readonly evidence: Readonly<Record<string, Evidence>>;
+  /** The same of the whole suite in one sentence, as the note prints it. */
+  readonly evidenceSentence: string;
   /** Largest natural frequency x step / stability limit, shortest period, and the like, for the evidence line. */
   readonly step: {
     /** The largest step of the suite [s]. */

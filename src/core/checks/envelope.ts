@@ -1,4 +1,5 @@
 import type { Run } from '../dynamics/run.ts';
+import type { Frame } from '../frame/frame.ts';
 import type { Limits } from './limits.ts';
 import { type Measure, type Statistic, statisticOf } from './statistic.ts';
 
@@ -20,12 +21,14 @@ export interface Envelope {
   readonly limit: number;
   /** Computed drift ratio, before the factor [-]. */
   readonly drift: Statistic | null;
-  /** factor x measure / limit per storey [-]. */
+  /** factor x measure / limit per storey [-]; NaN for an isolator, whose displacement has a limit of its own. */
   readonly ratio: Float64Array | null;
   /** [N] */
   readonly shear: Statistic | null;
   /** [N m] */
   readonly overturning: Statistic | null;
+  /** Peak drift / yield drift [-]; NaN for elastic storeys. */
+  readonly ductility: Statistic | null;
   /** Of magnitudes [m]. */
   readonly residualDrift: Statistic | null;
   /** Relative to the ground [m]. */
@@ -34,13 +37,24 @@ export interface Envelope {
   readonly acceleration: Statistic | null;
   /** Storey with the largest ratio, -1 while there is none. */
   readonly governingStorey: number;
+  /** The isolator under the frame; null where there is none. */
+  readonly isolator: {
+    /** Displacement that it may reach [m]; null: not compared. */
+    readonly limit: number | null;
+    /** measure of its displacement / limit [-], without the factor on storey drifts; null while either is not there. */
+    readonly ratio: number | null;
+  } | null;
 }
 
-/** Mean, median, largest and governing motion of every answer, and the drift against its limit. */
+/**
+ * Mean, median, largest and governing motion of every answer, the drift against its limit, and an isolator's displacement against
+ * its own.
+ */
 export function envelopeOf(
   runs: readonly { readonly motion: string; readonly run: Run }[],
   limits: Limits,
   leftOut: readonly string[],
+  { storeys }: Pick<Frame, 'storeys'>,
 ): Envelope {
   const incomplete = runs.filter(({ run }) => run.ending !== null).map(({ motion }) => motion);
   const measure = limits.measure ?? (runs.length >= MOTIONS_FOR_MEAN ? 'mean' : 'max');
@@ -48,7 +62,10 @@ export function envelopeOf(
   const of = (pick: (run: Run) => Float64Array) =>
     runs.length > 0 && incomplete.length === 0 ? statisticOf(runs.map(({ run }) => pick(run))) : null;
   const drift = of((run) => run.storeys.peakDriftRatio);
-  const ratio = drift ? drift[measure].map((value) => (factor * value) / limits.drift) : null;
+  const isolated = storeys[0]?.role === 'isolator';
+  const ratio =
+    drift?.[measure].map((value, i) => (isolated && i === 0 ? Number.NaN : (factor * value) / limits.drift)) ?? null;
+  const displacement = of((run) => run.floors.peakDisplacement);
   return {
     motions: runs.map(({ motion }) => motion),
     leftOut,
@@ -60,9 +77,26 @@ export function envelopeOf(
     ratio,
     shear: of((run) => run.storeys.peakShear),
     overturning: of((run) => run.storeys.peakOverturning),
+    ductility: of((run) => run.storeys.ductility),
     residualDrift: of((run) => run.storeys.residualDrift.map(Math.abs)),
-    displacement: of((run) => run.floors.peakDisplacement),
+    displacement,
     acceleration: of((run) => run.floors.peakAcceleration),
-    governingStorey: ratio ? ratio.indexOf(Math.max(...ratio)) : -1,
+    governingStorey: ratio ? largestOf(ratio) : -1,
+    isolator: isolated ? isolatorOf(limits.isolator, displacement?.[measure][0]) : null,
   };
+}
+
+/** The isolator is the first storey: what its floor moves relative to the ground is its own displacement. */
+function isolatorOf(limit: number | undefined, displacement: number | undefined): Envelope['isolator'] {
+  if (limit === undefined) return { limit: null, ratio: null };
+  return { limit, ratio: displacement === undefined ? null : displacement / limit };
+}
+
+/** Place of the largest value, NaN passed over; -1 where there is none. */
+function largestOf(values: Float64Array): number {
+  let at = -1;
+  for (let i = 0; i < values.length; i++) {
+    if (!Number.isNaN(values[i]) && (at < 0 || values[i] > values[at])) at = i;
+  }
+  return at;
 }

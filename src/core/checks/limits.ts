@@ -6,6 +6,8 @@ export interface Limits {
   readonly measure?: 'mean' | 'median' | 'max';
   /** On the computed drift before it is compared; default 1. */
   readonly factor?: number;
+  /** Displacement that an isolator may reach [m], > 0; absent: not compared. */
+  readonly isolator?: number;
   /** The clause, the earthquake level and which drift it limits, in words. */
   readonly source: string;
 }

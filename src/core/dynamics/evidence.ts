@@ -1,19 +1,65 @@
+import type { PreparedFrame } from '../frame/prepare.ts';
+import type { LeastParts } from './autoStep.ts';
+import { methodOf } from './methods.ts';
+import { type Accuracy, modeAccuracy } from './modeAccuracy.ts';
 import type { Run } from './run.ts';
 
+/** How far the numbers of one run can be trusted. */
+export interface Evidence {
+  /** [s] */
+  readonly step: number;
+  /** interval / step, whole. */
+  readonly parts: number;
+  /** How `step: "auto"` came to it; null where the step was typed. */
+  readonly auto: {
+    readonly least: LeastParts;
+    /** null while it is not known: the run at half the step is still out. */
+    readonly converged: boolean | null;
+  } | null;
+  /** Estimated error of the peak drifts [-]; null while it is not known, and where the run ended early. */
+  readonly stepError: number | null;
+  /** [-] */
+  readonly imbalance: number;
+  /** Mean number of solves a step, and most of one step. */
+  readonly solvesAStep: number;
+  readonly mostSolves: number;
+  /** Times that a step was halved because it did not converge. */
+  readonly halvings: number;
+  /** [s] */
+  readonly shortestPeriod: number;
+  /** Shortest period / step [-]. */
+  readonly stepsInShortest: number;
+  /** What scheme and step make of each mode of the initial stiffness, longest period first. */
+  readonly modes: readonly Accuracy[];
+}
+
 /**
- * Estimated error of the peak drifts from the step: 2 x the largest over the storeys of |Di(h) - Di(h/2)| over the largest
- * drift of the run. 4/3 would be the smooth second-order value (Richardson); 2 allows for peaks between samples. Definition:
- * the project-file page.
- *
- * @param run   at step h
- * @param half  the same case at step h / 2
+ * @param interval   of the motion [s]
+ * @param stepError  null where it is not known
+ * @param auto       how the step was chosen; null where it was typed
  */
-export function stepErrorOf(run: Run, half: Run): number {
-  const [at, finer] = [run.storeys.peakDrift, half.storeys.peakDrift];
-  let [change, largest] = [0, 0];
-  for (let i = 0; i < at.length; i++) {
-    change = Math.max(change, Math.abs(at[i] - finer[i]));
-    largest = Math.max(largest, at[i]);
-  }
-  return largest > 0 ? (2 * change) / largest : 0;
+export function evidenceOf(
+  { modes, dampingRatios }: PreparedFrame,
+  run: Run,
+  interval: number,
+  stepError: number | null,
+  auto: Evidence['auto'] = null,
+): Evidence {
+  const { step, marching, energy } = run;
+  const method = methodOf(run.method);
+  const shortestPeriod = modes[modes.length - 1].period;
+  const done = run.ending ? Math.max(1, Math.round(run.ending.time / step)) : Math.max(1, run.steps);
+  return {
+    step,
+    parts: Math.round(interval / step),
+    auto,
+    stepError,
+    imbalance: energy.imbalance,
+    solvesAStep: marching.solves / done,
+    mostSolves: marching.mostSolves,
+    halvings: marching.halvings,
+    shortestPeriod,
+    stepsInShortest: shortestPeriod / step,
+    modes: modes.map(({ frequency }, r) => modeAccuracy(method, frequency, dampingRatios[r], step)),
+  };
 }

@@ -52,7 +52,7 @@ describe('[CHK-1] the statistics of a suite', () => {
   });
   test('the same motion twice changes nothing', () => {
     const [one] = suite(1);
-    const [single, twice] = [envelopeOf([one], limits, []), envelopeOf([one, one], limits, [])];
+    const [single, twice] = [envelopeOf([one], limits, [], frame), envelopeOf([one, one], limits, [], frame)];
     expect(twice.drift).toEqual(single.drift);
     expect(twice.ratio).toEqual(single.ratio);
   });
@@ -61,13 +61,13 @@ describe('[CHK-1] the statistics of a suite', () => {
 describe('[CHK-2] drift against its limit', () => {
   // EN 1998-1:2004 4.3.3.4.3(3): the mean from 7 motions on, the most unfavourable below.
   test('the mean from seven motions on, else the largest, unless the user says', () => {
-    expect(envelopeOf(suite(6), limits, []).measure).toBe('max');
-    expect(envelopeOf(suite(7), limits, []).measure).toBe('mean');
-    expect(envelopeOf(suite(7), { ...limits, measure: 'median' }, []).measure).toBe('median');
+    expect(envelopeOf(suite(6), limits, [], frame).measure).toBe('max');
+    expect(envelopeOf(suite(7), limits, [], frame).measure).toBe('mean');
+    expect(envelopeOf(suite(7), { ...limits, measure: 'median' }, [], frame).measure).toBe('median');
   });
   test('ratio = factor x measure / limit', () => {
     const runs = suite(3);
-    const { ratio, drift } = envelopeOf(runs, { ...limits, factor: 0.5 }, []);
+    const { ratio, drift } = envelopeOf(runs, { ...limits, factor: 0.5 }, [], frame);
     for (let i = 0; i < 3; i++) {
       const largest = Math.max(...runs.map((entry) => entry.run.storeys.peakDriftRatio[i]));
       expect(drift?.max[i]).toBe(largest);
@@ -76,7 +76,7 @@ describe('[CHK-2] drift against its limit', () => {
   });
   test('while a used motion is incomplete there is no statistic and no ratio, and it is named', () => {
     const runs = suite(3);
-    const envelope = envelopeOf([runs[0], { ...runs[1], run: failed(runs[1].run) }, runs[2]], limits, ['X']);
+    const envelope = envelopeOf([runs[0], { ...runs[1], run: failed(runs[1].run) }, runs[2]], limits, ['X'], frame);
     expect(envelope).toMatchObject({
       incomplete: ['M2'],
       leftOut: ['X'],
@@ -92,7 +92,7 @@ describe('[CHK-2] drift against its limit', () => {
 describe('[CHK-3] the verdict', () => {
   test('names the governing storey, its ratio, the measure and the next', () => {
     const runs = suite(7);
-    const envelope = envelopeOf(runs, limits, []);
+    const envelope = envelopeOf(runs, limits, [], frame);
     const { headline, detail, over } = verdictOf(envelope, runs);
     expect(headline).toMatch(/^Storey \d governs: \d+\.\d\d\d? of the limit$/);
     expect(detail).toMatch(/^mean \d+\.\d\d %, limit 1\.00 %; next, storey \d at \d\.\d\d$/);
@@ -100,14 +100,14 @@ describe('[CHK-3] the verdict', () => {
   });
   test('shows the factored drift, and what was left out', () => {
     const runs = suite(2);
-    const { headline, detail } = verdictOf(envelopeOf(runs, { ...limits, factor: 0.5 }, ['E']), runs);
+    const { headline, detail } = verdictOf(envelopeOf(runs, { ...limits, factor: 0.5 }, ['E'], frame), runs);
     expect(headline).toMatch(/, 2 of 3 motions$/);
     expect(detail).toMatch(/^largest .* × 0\.5 = .*; left out: E$/);
   });
   test('a motion that did not finish has the word', () => {
     const runs = suite(2);
     const broken = [runs[0], { motion: 'M2', run: failed(runs[1].run) }];
-    const verdict = verdictOf(envelopeOf(broken, limits, []), broken);
+    const verdict = verdictOf(envelopeOf(broken, limits, [], frame), broken);
     expect(verdict.over).toBe(true);
     expect(verdict.headline).toBe('M2 did not finish');
     expect(verdict.detail).toMatch(/storey 2 .* at 8\.41 s/);
@@ -121,7 +121,7 @@ describe('[CHK-4] cautions', () => {
     limit: Partial<Limits> = {},
   ) =>
     cautionsOf({
-      envelope: envelopeOf(runs, { ...limits, ...limit }, []),
+      envelope: envelopeOf(runs, { ...limits, ...limit }, [], frame),
       limits: { ...limits, ...limit },
       analysis,
       prepared: prepared(frame),
@@ -139,7 +139,7 @@ describe('[CHK-4] cautions', () => {
   });
   test('met on the mean while motions exceed it alone is said', () => {
     const runs = suite(7);
-    const mean = Math.max(...(envelopeOf(runs, limits, []).drift?.mean ?? []));
+    const mean = Math.max(...(envelopeOf(runs, limits, [], frame).drift?.mean ?? []));
     expect(having(codes(runs, {}, { drift: mean * 1.0001 }), 'met-on-the-mean-only')[0]).toMatch(
       /Limit met on the mean of 7; \w+ motions? exceeds? it alone/,
     );

@@ -56,7 +56,7 @@ export function exampleSource({ strength = 1, histories = false } = {}): ReportS
       { name: 'C', interval: 0.02, scale: 1, count: 10, peakAcceleration: null, used: false, reason: 'no site match' },
     ],
     runs,
-    envelope: envelopeOf(runs, limits, ['C']),
+    envelope: envelopeOf(runs, limits, ['C'], frame),
     analysis,
     limits,
   };
