@@ -2,7 +2,6 @@ import * as z from 'zod/mini';
 import type { Fault } from '../core/fault.ts';
 import { crossChecks } from './crossChecks.ts';
 import { faultsOf } from './faults.ts';
-import { notYet } from './notYet.ts';
 import type { Project } from './project.ts';
 import { analysisSchema, frameSchema, limitsSchema, motionUse } from './schema.ts';
 
@@ -16,9 +15,9 @@ const cellsSchema = z.object({
 
 /**
  * Everything that keeps the cells of a document from being a case: not typed, not readable, out of range, a reference to what
- * is not there, not available yet. The same faults, at the same places, as in the project file.
+ * is not there. The same faults, at the same places, as in the project file.
  */
 export function cellFaults(project: Project): Fault[] {
   const parsed = cellsSchema.safeParse(project);
-  return [...(parsed.success ? [] : faultsOf(parsed.error, project)), ...crossChecks(project), ...notYet(project)];
+  return [...(parsed.success ? [] : faultsOf(parsed.error, project)), ...crossChecks(project)];
 }

@@ -49,17 +49,22 @@ function dampingFaults(damping: Record<string, unknown> | null, storeys: number)
   return faults;
 }
 
+/** How far typed decimals may be from adding up. */
+const ROUNDING = 1e-9;
+
 function lawFaults(law: Record<string, unknown> | null, where: string): Fault[] {
   if (law?.kind === 'bouc-wen' && typeof law.beta === 'number' && typeof law.gamma === 'number') {
-    if (Math.abs(law.beta + law.gamma - 1) > 1e-9) {
-      const message = `beta + gamma is ${law.beta + law.gamma}, must be 1`;
-      return [{ code: 'out-of-range', where: `${where}.gamma`, message, mend: `Type gamma ${1 - law.beta}` }];
+    if (law.beta >= 0.5 && !(Math.abs(law.beta + law.gamma - 1) <= ROUNDING)) {
+      const message = `beta + gamma is ${short(law.beta + law.gamma)}, must be 1`;
+      const mend = `Type gamma ${short(1 - law.beta)}, or beta ${short(1 - law.gamma)}`;
+      return [{ code: 'out-of-range', where: `${where}.gamma`, message, mend }];
     }
   }
   if (law?.kind === 'flag' && typeof law.ratio === 'number' && typeof law.hardening === 'number') {
-    if (law.ratio <= 1 && law.ratio > 1 - law.hardening) {
-      const message = `is ${law.ratio}, must be at most 1 - hardening = ${1 - law.hardening}: more would not re-centre`;
-      return [{ code: 'out-of-range', where: `${where}.ratio`, message, mend: 'Type a lower ratio' }];
+    if (law.ratio <= 1 && law.ratio > 1 - law.hardening + ROUNDING) {
+      const most = short(1 - law.hardening);
+      const message = `is ${short(law.ratio)}, must be at most 1 - hardening = ${most}: more would not re-centre`;
+      return [{ code: 'out-of-range', where: `${where}.ratio`, message, mend: `Type a ratio of at most ${most}` }];
     }
   }
   return [];
@@ -104,4 +109,9 @@ function motionFaults(motions: readonly unknown[]): Fault[] {
     }
   }
   return faults;
+}
+
+/** Without the last bits that a difference of decimals gets wrong: 0.97 and not 0.9700000000000001. */
+function short(value: number): string {
+  return String(Number(value.toPrecision(12)));
 }

@@ -5,18 +5,20 @@ import { MAX_STOREYS, type MotionEntry, type Project, type StoreyRow } from './p
  * Edits of a project as pure functions: a new project that shares what did not change. References to modes are left as
  * typed; one that is out of range afterwards is named by `caseOf`.
  */
+export { clearDamper, setDamper, setLaw, setRole } from './storeyParts.ts';
+
 const BLANK: StoreyRow = { name: '', height: null, mass: null, stiffness: null, law: { kind: 'elastic' } };
 
 /**
  * Puts a storey in at an index (0: on the ground; count: under the roof).
- * @param copyOf  index of the storey that it starts as a copy of; left out: blank
+ * @param copyOf  index of the storey that it starts as a copy of (an isolator is copied as a storey); left out: blank
  * @throws RangeError beyond MAX_STOREYS (the screen asks before)
  */
 export function addStorey(project: Project, at: number, copyOf?: number): Project {
   const { storeys } = project.frame;
   if (storeys.length >= MAX_STOREYS)
     throw new RangeError(`addStorey: ${storeys.length} storeys, expected fewer than ${MAX_STOREYS}`);
-  const made = copyOf === undefined ? BLANK : (storeys[copyOf] ?? BLANK);
+  const made = plain(copyOf === undefined ? BLANK : (storeys[copyOf] ?? BLANK));
   return withStoreys(project, [...storeys.slice(0, at), made, ...storeys.slice(at)]);
 }
 
@@ -35,11 +37,12 @@ export function moveStorey(project: Project, from: number, to: number): Project 
   return withStoreys(project, storeys);
 }
 
-/** A frame of so many equal storeys; weights and stiffness of the first storey there is are kept, else left to type. */
+/** A frame of so many equal storeys; weights and stiffness of the first storey there is (no isolator) are kept, else left to type. */
 export function makeEqualStoreys(project: Project, count: number, height: number): Project {
   if (!(Number.isInteger(count) && count >= 1 && count <= MAX_STOREYS))
     throw new RangeError(`makeEqualStoreys: ${count}, expected 1 to ${MAX_STOREYS}`);
-  const like = project.frame.storeys[0] ?? BLANK;
+  const { storeys } = project.frame;
+  const like = plain(storeys.find(({ role }) => role !== 'isolator') ?? storeys[0] ?? BLANK);
   return withStoreys(
     project,
     Array.from({ length: count }, () => ({ ...like, height })),
@@ -88,6 +91,12 @@ export function useMotion(project: Project, at: number, used: boolean, reason?: 
       return used ? { ...rest, used } : { ...rest, used, ...(why === undefined ? {} : { reason: why }) };
     }),
   };
+}
+
+/** Without its role: one isolator is all that a frame can have. */
+function plain(row: StoreyRow): StoreyRow {
+  const { role, ...rest } = row;
+  return role === 'isolator' ? rest : row;
 }
 
 function withStoreys(project: Project, storeys: readonly StoreyRow[]): Project {

@@ -1,5 +1,6 @@
 import { printQuantity, type Quantity, type System, unitOf } from '../core/units/quantities.ts';
 import type { Project, Typed } from './project.ts';
+import { clearDamper, setDamper, setLaw } from './storeyParts.ts';
 
 /** What is known of one field that a user types into, by its path in the project file. */
 export interface Field {
@@ -56,6 +57,60 @@ const KNOWN: readonly Known[] = [
     quantity: 'force',
     label: storey('gravity load'),
     what: 'at this floor, for P-Delta; the weight where left empty',
+  },
+  {
+    pattern: /^frame\.storeys\[(\d+)\]\.law\.strength$/,
+    quantity: 'force',
+    label: storey('strength'),
+    what: 'storey shear at which it yields, usually at 0.3 to 1 % of the height',
+  },
+  {
+    pattern: /^frame\.storeys\[(\d+)\]\.law\.hardening$/,
+    quantity: 'percent',
+    label: storey('hardening'),
+    what: 'stiffness after yield over the initial one',
+    usual: [0, 0.1, 0],
+  },
+  {
+    pattern: /^frame\.storeys\[(\d+)\]\.law\.exponent$/,
+    quantity: 'ratio',
+    label: storey('Bouc-Wen exponent'),
+    what: '1 or more; the higher, the sharper the yield',
+    usual: [1, 5, 0],
+  },
+  {
+    pattern: /^frame\.storeys\[(\d+)\]\.law\.beta$/,
+    quantity: 'ratio',
+    label: storey('Bouc-Wen beta'),
+    what: '1/2 or more; with gamma it makes 1',
+    usual: [0.5, 0.9, 1],
+  },
+  {
+    pattern: /^frame\.storeys\[(\d+)\]\.law\.gamma$/,
+    quantity: 'ratio',
+    label: storey('Bouc-Wen gamma'),
+    what: '1 less beta; 1/2 unloads at the initial stiffness',
+    usual: [0.1, 0.5, 1],
+  },
+  {
+    pattern: /^frame\.storeys\[(\d+)\]\.law\.ratio$/,
+    quantity: 'ratio',
+    label: storey('flag height'),
+    what: 'height of the flag over the strength, at most 1 - hardening',
+    usual: [0.2, 0.9, 1],
+  },
+  {
+    pattern: /^frame\.storeys\[(\d+)\]\.damper\.coefficient$/,
+    quantity: 'force',
+    label: storey('damper force at 1 m/s'),
+    what: 'the coefficient c of F = c |v|^a: the force at a drift velocity of 1 m/s; no damper where left empty',
+  },
+  {
+    pattern: /^frame\.storeys\[(\d+)\]\.damper\.exponent$/,
+    quantity: 'ratio',
+    label: storey('damper exponent'),
+    what: '0.15 to 2; 1 is linear viscous',
+    usual: [0.3, 1, 1],
   },
   {
     pattern: /^frame\.damping\.ratios\[(\d+)\]$/,
@@ -164,6 +219,13 @@ const KNOWN: readonly Known[] = [
     label: plain('Source of the limit'),
     what: 'clause, earthquake level and which drift it limits',
   },
+  {
+    pattern: /^limits\.isolator$/,
+    quantity: 'displacement',
+    label: plain('Allowable isolator displacement'),
+    what: 'of the isolator row; not compared where left empty',
+    usual: [0.2, 0.6, 0],
+  },
 ];
 
 /** @throws RangeError for a path that nobody types into */
@@ -199,11 +261,48 @@ export function readAt(project: Project, path: string): Typed {
 }
 
 /**
- * The project with another value at a path; all that did not change is shared. An empty optional field (gravity, reason) is
- * taken out.
+ * The project with another value at a path; all that did not change is shared. An empty optional field (gravity, reason, isolator
+ * limit) is taken out. Parts of a storey come and go with their first cell: a damper with its coefficient, and an elastic storey
+ * that is given a strength becomes bilinear; an elastic one stays as it is where its strength or hardening is emptied.
  * @throws RangeError where the path leads nowhere
  */
 export function writeAt(project: Project, path: string, value: Typed): Project {
+  const [, storey, part, key] = PART.exec(path) ?? [];
+  return part === undefined
+    ? write(project, path, value)
+    : writePart(project, path, Number(storey), part === 'law' ? 'law' : 'damper', key, value);
+}
+
+/** A number of a storey's law or damper. */
+const PART = /^frame\.storeys\[(\d+)\]\.(law|damper)\.(\w+)$/;
+
+function writePart(
+  project: Project,
+  path: string,
+  index: number,
+  part: 'law' | 'damper',
+  key: string,
+  value: Typed,
+): Project {
+  const row = project.frame.storeys[index];
+  if (row === undefined) throw new RangeError(`writeAt: ${path}, there are ${project.frame.storeys.length} entries`);
+  if (part === 'damper') {
+    if (key !== 'coefficient' && key !== 'exponent') throw new RangeError(`writeAt: ${path}, a damper has no ${key}`);
+    if (key === 'coefficient' && value === null) return clearDamper(project, [index]);
+    if (row.damper === undefined && value === null) return project;
+    return setDamper(project, [index], { ...(row.damper ?? NO_DAMPER), [key]: value });
+  }
+  if (key !== 'kind' && key in row.law) return write(project, path, value);
+  if (row.law.kind !== 'elastic' || (key !== 'strength' && key !== 'hardening')) {
+    throw new RangeError(`writeAt: ${path}, the ${row.law.kind} law has no ${key}`);
+  }
+  return value === null ? project : write(setLaw(project, [index], 'bilinear'), path, value);
+}
+
+/** What a damper is until both of its cells are typed. */
+const NO_DAMPER = { coefficient: null, exponent: 1 } as const;
+
+function write(project: Project, path: string, value: Typed): Project {
   const keys = keysOf(path);
   const into = (node: unknown, at: number): unknown => {
     if (at === keys.length) return value;
@@ -227,7 +326,7 @@ export function writeAt(project: Project, path: string, value: Typed): Project {
   return into(project, 0) as Project;
 }
 
-const OPTIONAL: ReadonlySet<string> = new Set(['gravity', 'reason']);
+const OPTIONAL: ReadonlySet<string> = new Set(['gravity', 'reason', 'isolator']);
 
 function keysOf(path: string): string[] {
   return path.split(/[.[\]]+/).filter((key) => key !== '');

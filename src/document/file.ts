@@ -6,7 +6,6 @@ import { faultsOf } from './faults.ts';
 import { readJson } from './json.ts';
 import { migrated } from './migrations.ts';
 import { type ReadFile, type Source, sourceFaults, sourceOf } from './motionSource.ts';
-import { notYet } from './notYet.ts';
 import { inFileOrder } from './order.ts';
 import { type MotionEntry, PROJECT_FORMAT, PROJECT_VERSION, type Project } from './project.ts';
 import { listOf } from './raw.ts';
@@ -59,7 +58,6 @@ function checked(text: string, reachable: boolean): Result<Checked> {
   const faults = [
     ...(shape.success ? [] : faultsOf(shape.error, file)),
     ...crossChecks(file),
-    ...notYet(file),
     ...listOf(file.motions).flatMap((motion, i) => sourceFaults(motion, `motions[${i}]`, reachable)),
   ];
   return { ok: true, value: { file: file as unknown as FileProject, faults } };
@@ -106,24 +104,7 @@ function entryOf({ name, scale, used, reason }: FileMotion, source: Source): Mot
 }
 
 function projectOf({ title, frame, analysis, limits }: FileProject, motions: readonly MotionEntry[]): Project {
-  return {
-    title,
-    frame: {
-      pDelta: frame.pDelta,
-      damping: frame.damping as Project['frame']['damping'],
-      storeys: frame.storeys.map(({ name, height, mass, stiffness, gravity }) => ({
-        name,
-        height,
-        mass,
-        stiffness,
-        law: { kind: 'elastic' },
-        ...(gravity === undefined ? {} : { gravity }),
-      })),
-    },
-    motions,
-    analysis,
-    limits,
-  };
+  return { title, frame: frame as Project['frame'], motions, analysis, limits };
 }
 
 /**

@@ -1,9 +1,12 @@
 import type { Fault, Result } from '../core/fault.ts';
 import { PROJECT_FORMAT, PROJECT_VERSION } from './project.ts';
 
-/** One migration a version: from that version to the next, on the raw object. Version 1 is the first, so there is none yet. */
+/** One migration a version: from that version to the next, on the raw object. */
 type Migration = (raw: Record<string, unknown>) => Record<string, unknown>;
-export const MIGRATIONS: ReadonlyMap<number, Migration> = new Map();
+export const MIGRATIONS: ReadonlyMap<number, Migration> = new Map([
+  // 2 added limits.isolator, which may be left out: what a file of version 1 says means the same.
+  [1, (raw: Record<string, unknown>) => raw],
+]);
 
 /** Brings a raw project file up to the present version, or says why not: another format, a later or an unknown version. */
 export function migrated(

@@ -1,7 +1,7 @@
 import type { Fault } from '../core/fault.ts';
 import { objectOf } from './raw.ts';
 
-/** No height, mass or stiffness of a building, nor of a model of one in other units, lies beyond [SI]. */
+/** No height, mass, stiffness, strength or damper of a building, nor of a model of one in other units, lies beyond [SI]. */
 const LEAST = 1e-9;
 const MOST = 1e21;
 
@@ -16,8 +16,12 @@ export function proportionFaults(storeys: readonly unknown[]): Fault[] {
   const faults: Fault[] = [];
   const rows: { readonly mass: number; readonly stiffness: number }[] = [];
   for (const [i, entry] of storeys.entries()) {
-    const { mass, stiffness, height } = objectOf(entry) ?? {};
-    for (const [key, value] of Object.entries({ height, mass, stiffness })) {
+    const storey = objectOf(entry);
+    const { mass, stiffness, height } = storey ?? {};
+    const strength = objectOf(storey?.law)?.strength;
+    const coefficient = objectOf(storey?.damper)?.coefficient;
+    const cells = { height, mass, stiffness, 'law.strength': strength, 'damper.coefficient': coefficient };
+    for (const [key, value] of Object.entries(cells)) {
       if (typeof value !== 'number' || !(value > 0 && value < Number.POSITIVE_INFINITY)) continue;
       if (isPossible(value)) continue;
       const message = `is ${value}, which no building has`;

@@ -1,13 +1,12 @@
 import * as z from 'zod/mini';
 import type { StepChoice } from '../core/dynamics/run.ts';
 import { ACCELERATION_UNITS } from '../core/motion/motion.ts';
-import { MAX_STOREYS, PROJECT_FORMAT } from './project.ts';
+import { MAX_STOREYS, PROJECT_FORMAT, PROJECT_VERSION } from './project.ts';
 import { objectOf } from './raw.ts';
 
 /**
  * The shape of the project file, all of the project-file page: what a key may hold, its defaults written out. Unknown keys are
- * faults. What one key alone cannot tell (a mode that is not there, two motions of one name) stands in crossChecks.ts; what a
- * later version brings is in shape here and refused by notYet.ts.
+ * faults. What one key alone cannot tell (a mode that is not there, two motions of one name) stands in crossChecks.ts.
  */
 const above0 = z.number().check(z.gt(0));
 const from0 = z.number().check(z.gte(0));
@@ -37,7 +36,7 @@ const storey = z.strictObject({
   stiffness: above0,
   law,
   gravity: z.optional(from0),
-  damper: z.optional(z.strictObject({ coefficient: from0, exponent: above0 })),
+  damper: z.optional(z.strictObject({ coefficient: from0, exponent: z.number().check(z.gte(0.15), z.lte(2)) })),
   role: z.optional(z.enum(['storey', 'isolator'])),
 });
 
@@ -92,6 +91,7 @@ export const limitsSchema = z.strictObject({
   measure: z.optional(z.enum(['mean', 'median', 'max'])),
   factor: above0,
   source: z.string(),
+  isolator: z.optional(above0),
 });
 
 const originSchema = z.strictObject({
@@ -132,7 +132,7 @@ const motion = z.strictObject({
 
 export const projectSchema = z.strictObject({
   format: z.literal(PROJECT_FORMAT),
-  version: z.literal(1),
+  version: z.literal(PROJECT_VERSION),
   title: z.string(),
   frame: frameSchema,
   motions: z.array(motion),

@@ -1,4 +1,5 @@
-import type { Analysis } from '../core/dynamics/run.ts';
+import { MOST_PARTS } from '../core/dynamics/autoStep.ts';
+import type { Analysis, StepChoice } from '../core/dynamics/run.ts';
 import { stabilityFault, stepOf } from '../core/dynamics/steps.ts';
 import type { Fault } from '../core/fault.ts';
 import type { PreparedFrame } from '../core/frame/prepare.ts';
@@ -9,10 +10,13 @@ const MOST_STEPS = 2e7;
 
 type Timed = Pick<MotionEntry, 'name' | 'interval' | 'count'>;
 
-/** What is wrong with the step for the motions alone: no whole part of an interval, or more steps than a run can hold. */
+/**
+ * What is wrong with the step for the motions alone: no whole part of an interval, or more steps than a run can hold. A step that
+ * is chosen by halving begins at the whole interval.
+ */
 export function partFaults(motions: readonly Timed[], { step, tail }: Analysis): Fault[] {
   return once(motions, ({ interval, count }) => {
-    const fitted = stepOf(step, interval);
+    const fitted = stepOf(chosen(step, 1), interval);
     if (!fitted.ok) return fitted.faults;
     const { size, parts } = fitted.value;
     const during = (count - 1) * parts;
@@ -24,17 +28,21 @@ export function partFaults(motions: readonly Timed[], { step, tail }: Analysis):
   });
 }
 
-/** Where the step is beyond the stability limit of the scheme in this frame. */
+/** Where the step, or the shortest that halving comes to, is beyond the stability limit of the scheme in this frame. */
 export function stabilityFaults(
   motions: readonly Timed[],
   { step, method }: Analysis,
   { modes }: PreparedFrame,
 ): Fault[] {
   return once(motions, ({ interval }) => {
-    const fitted = stepOf(step, interval);
+    const fitted = stepOf(chosen(step, MOST_PARTS), interval);
     const unstable = fitted.ok ? stabilityFault(modes, method, fitted.value.size) : null;
     return unstable === null ? [] : [unstable];
   });
+}
+
+function chosen(step: StepChoice, parts: number): Exclude<StepChoice, 'auto'> {
+  return step === 'auto' ? { parts } : step;
 }
 
 /** Each fault once, with the motions it comes from. */

@@ -9,6 +9,7 @@ const REFERENCES: ReadonlySet<string> = new Set([
   'no-such-mode',
   'same-mode',
   'rayleigh-on-one-storey',
+  'isolator-not-first',
   'no-reason',
 ]);
 
