@@ -1,9 +1,10 @@
+import type { Storey } from '../frame/frame.ts';
 import { type HistoryBuffers, historiesUpTo, historyBuffers, keepHistory } from './history.ts';
 import type { Problem } from './problem.ts';
 import { FIELD, STATE, SUM } from './record.ts';
 import { residualsOf } from './residual.ts';
 import type { Ending, MethodChoice, Run, Want } from './run.ts';
-import { stepTo } from './stepping.ts';
+import { storeyEnergies } from './storeyEnergies.ts';
 import { type Workspace, workspace } from './workspace.ts';
 
 /** FIELD.A march under way: call `advance` until it says true, then `finish`. Nothing is allocated in `advance`. */
@@ -25,10 +26,9 @@ export function march(problem: Problem, choice: MethodChoice, want: Want): Run {
 
 /** As `march`, in slices of the caller's choosing: the same bits. */
 export function startMarch(problem: Problem, choice: MethodChoice, want: Want): March {
-  const { steps, residualFrom, ground } = problem;
-  const { n } = problem.prepared.arrays;
+  const { steps } = problem;
   const work = workspace(problem);
-  const { records, matrix, scheme, sums } = work;
+  const { sums } = work;
   const histories = want.histories ? historyBuffers(problem) : null;
   if (histories) keepHistory(histories, problem, work, 0);
   let done = 0;
@@ -43,7 +43,7 @@ export function startMarch(problem: Problem, choice: MethodChoice, want: Want): 
       // Histories are kept between steps; without them nothing is looked at, and the steps run in one go.
       while (!over() && done < end) {
         const to = histories ? done + 1 : end;
-        done = stepTo(records, matrix, n, ground, scheme, sums, residualFrom, done, to);
+        done = work.advance(done, to);
         if (histories) keepHistory(histories, problem, work, done);
       }
       return over();
@@ -67,6 +67,7 @@ function endingOf(
     }
     return { status: 'collapsed', storey, time };
   }
+  if (sums[SUM.STOPPED] === STATE.NOT_CONVERGED) return { status: 'not-converged', storey: sums[SUM.CULPRIT], time };
   if (sums[SUM.STOPPED] === STATE.DIVERGED) return { status: 'diverged', storey: -1, time };
   return over ? null : { status: 'cancelled', storey: -1, time };
 }
@@ -79,10 +80,11 @@ function runOf(
   done: number,
   ending: Ending | null,
 ): Run {
-  const { step, steps, prepared, residualFrom } = problem;
+  const { step, steps, prepared, residualFrom, linear } = problem;
   const { n, stiffness, height } = prepared.arrays;
   const column = (field: number) => Float64Array.from({ length: n }, (_, i) => records[i * FIELD.STRIDE + field]);
   const peakDrift = column(FIELD.PEAK_DRIFT);
+  const energy = storeyEnergies(records, n);
   return {
     method,
     step,
@@ -93,30 +95,37 @@ function runOf(
       peakDriftRatio: peakDrift.map((d, i) => d / height[i]),
       peakTime: column(FIELD.PEAK_STEP).map((at) => at * step),
       ...residualsOf(records, n, done - residualFrom),
-      // An elastic storey without a damper: shear follows drift, so its peak is k times the peak drift.
-      peakShear: peakDrift.map((d, i) => stiffness[i] * d),
+      // Of an elastic storey without a damper, shear follows drift: its peak is k times the peak drift.
+      peakShear: linear ? peakDrift.map((d, i) => stiffness[i] * d) : column(FIELD.PEAK_SHEAR),
       peakOverturning: column(FIELD.PEAK_OVERTURNING),
-      dissipated: new Float64Array(n),
-      ductility: new Float64Array(n).fill(Number.NaN),
-      firstYield: new Float64Array(n).fill(Number.NaN),
-      damperWork: new Float64Array(n),
+      dissipated: energy.dissipated,
+      ductility: peakDrift.map((d, i) => ductilityOf(prepared.frame.storeys[i], d)),
+      firstYield: column(FIELD.YIELD_STEP).map((at) => (at > 0 ? at * step : Number.NaN)),
+      damperWork: column(FIELD.DAMPER_WORK),
     },
+    base: { peakDampingForce: linear ? Number.NaN : sums[SUM.DAMPING_SHEAR] },
     floors: {
       peakDisplacement: column(FIELD.PEAK_U),
       peakVelocity: column(FIELD.PEAK_V),
       peakAcceleration: column(FIELD.PEAK_TOTAL),
     },
-    base: { peakDampingForce: Number.NaN },
     energy: {
       input: sums[SUM.INPUT] / 2,
       kinetic: sums[SUM.KINETIC] / 2,
-      strain: sums[SUM.STRAIN] / 2,
+      strain: linear ? sums[SUM.STRAIN] / 2 : energy.strain,
       damping: sums[SUM.DAMPING] / 2,
-      dampers: 0,
-      hysteretic: 0,
+      dampers: energy.dampers,
+      hysteretic: energy.hysteretic,
       imbalance: sums[SUM.LARGEST_INPUT] > 0 ? sums[SUM.LARGEST_GAP] / sums[SUM.LARGEST_INPUT] : 0,
     },
-    marching: { solves: done, mostSolves: Math.min(1, done), halvings: 0 },
+    marching: linear
+      ? { solves: done, mostSolves: Math.min(1, done), halvings: 0 }
+      : { solves: sums[SUM.SOLVES], mostSolves: sums[SUM.MOST_SOLVES], halvings: sums[SUM.HALVINGS] },
     histories: histories ? historiesUpTo(histories, n, done) : null,
   };
+}
+
+/** Peak drift over yield drift; NaN for an elastic storey. */
+function ductilityOf({ law, stiffness }: Storey, drift: number): number {
+  return law.kind === 'elastic' ? Number.NaN : (drift * stiffness) / law.strength;
 }

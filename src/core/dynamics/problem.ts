@@ -17,6 +17,8 @@ export interface Problem {
   readonly stopDrift: Float64Array;
   /** First step of the last fundamental period of the run. */
   readonly residualFrom: number;
+  /** No storey yields or has a damper, and C is tridiagonal or modal: each step is one solve with one matrix. */
+  readonly linear: boolean;
 }
 
 /** @throws RangeError for a step or scheme that a validated case does not have */
@@ -31,14 +33,19 @@ export function problemOf(prepared: PreparedFrame, { analysis, motion }: RunCase
     throw new RangeError(`motion: ${motion.acceleration.length} samples, expected at least 2`);
   const steps = stepCount(motion.acceleration.length, parts, size, analysis.tail);
   const { frame, arrays, modes } = prepared;
-  const stop = frame.pDelta ? analysis.stopDrift : Number.POSITIVE_INFINITY;
+  const yields = frame.storeys.some(({ law }) => law.kind !== 'elastic');
+  const damped = frame.storeys.some(({ damper }) => damper !== undefined && damper.coefficient > 0);
+  const slab = prepared.damping.kind === 'banded' && prepared.damping.against === 'isolator';
+  const stop = frame.pDelta || yields ? analysis.stopDrift : Number.POSITIVE_INFINITY;
   return {
     prepared,
     method,
     step: size,
     steps,
     ground: groundAtSteps(motion.acceleration, motion.scale, parts, steps),
-    stopDrift: arrays.height.map((h) => stop * h),
+    // An isolator moves by more than a storey may: it has a limit of its own.
+    stopDrift: arrays.height.map((h, i) => (i === 0 && arrays.isolated ? Number.POSITIVE_INFINITY : stop * h)),
     residualFrom: Math.max(0, steps - Math.round(modes[0].period / size)),
+    linear: !yields && !damped && !slab,
   };
 }

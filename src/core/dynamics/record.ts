@@ -26,6 +26,8 @@ const PLACES = [
   'DRIFT_SUM', 'DRIFT_LEAST', 'DRIFT_MOST',
 
   // From here on: nonlinear frames only.
+  /** Of C v, the part of a full matrix [N]. */
+  'FULL_FORCE',
   /** Storey height [m]; gravity above / height [N/m]. */
   'HEIGHT', 'P_OVER_H',
   /** The law: its number (laws/laws.ts), initial and post-yield stiffness [N/m], strength [N], three more of its own. */
@@ -38,10 +40,14 @@ const PLACES = [
   'INTERCEPT', 'SLOPE', 'FORCE_TOLERANCE',
   /** The damper: coefficient, exponent, trial velocity [m/s] and force [N], its straight line, and its force and work so far. */
   'DAMPER', 'EXPONENT', 'TRIAL_RATE', 'TRIAL_DAMPER', 'DAMPER_INTERCEPT', 'DAMPER_SLOPE', 'DAMPER_FORCE', 'DAMPER_WORK',
+  /** Steepest line of the damper [N s/m]; largest drift velocity so far [m/s]. */
+  'STICK', 'PEAK_RATE',
   /** What the storey carries at the last step: law, P-Delta, dashpot and damper [N]; a1 of tangent damping [s]. */
   'STOREY_FORCE', 'TANGENT_FACTOR',
-  /** Factor of the storey on the drift acceleration in the step's matrix; predicted drift and its rate; new u and v. */
-  'COUPLING', 'DRIFT_AHEAD', 'RATE_AHEAD', 'NEXT_U', 'NEXT_V',
+  /** Factor of the storey on the drift acceleration in the step's matrix [kg]. */
+  'COUPLING',
+  /** The new step without its acceleration: u, v, drift and its rate; and what does not change in the iteration [N]. */
+  'U_AHEAD', 'V_AHEAD', 'DRIFT_AHEAD', 'RATE_AHEAD', 'LOAD',
   /** Largest storey shear [N]; step of first yield, 0 for never. */
   'PEAK_SHEAR', 'YIELD_STEP',
 ] as const;
@@ -68,7 +74,10 @@ export const SUM = Object.freeze({
   MOST_SOLVES: 8,
   HALVINGS: 9,
   CULPRIT: 10,
-  SUMS: 11,
+  /** Largest |sum of the floors' damping forces| since a storey first yielded [N], and 1 once one has. */
+  DAMPING_SHEAR: 11,
+  YIELDED: 12,
+  SUMS: 13,
 });
 
 /** What STOPPED says: under way, a storey passed its stop drift, the numbers left the finite range, a step did not converge. */

@@ -1,22 +1,26 @@
 import { assembleTridiagonal } from '../frame/matrices.ts';
 import type { PreparedFrame } from '../frame/prepare.ts';
 import { factorTridiagonal } from '../linalg/tridiagonal.ts';
+import { nonlinearWorkspace } from './nonlinearWorkspace.ts';
 import type { Problem } from './problem.ts';
 import { FIELD, SUM } from './record.ts';
-import type { FullMatrix, Scheme } from './stepping.ts';
+import { type FullMatrix, type Scheme, stepTo } from './stepping.ts';
 
 /** All scratch of one march, made once: the only thing a step may write. */
 export interface Workspace {
-  /** n records, see stepping.ts. */
+  /** n records, see record.ts. */
   readonly records: Float64Array;
-  /** The step's matrix where damping is full; null where it is banded. */
-  readonly matrix: FullMatrix | null;
-  readonly scheme: Scheme;
   readonly sums: Float64Array;
+  /** Marches from step `from` to step `to`; returns the last step done. */
+  readonly advance: (from: number, to: number) => number;
 }
 
 /** @throws RangeError where the step's matrix is not positive definite (a validated case never is) */
-export function workspace({ prepared, method, step, ground, stopDrift }: Problem): Workspace {
+export function workspace(problem: Problem): Workspace {
+  return problem.linear ? linearWorkspace(problem) : nonlinearWorkspace(problem);
+}
+
+function linearWorkspace({ prepared, method, step, ground, stopDrift, residualFrom }: Problem): Workspace {
   const { n, mass, stiffness, netStiffness, height } = prepared.arrays;
   const { am, af, beta, gamma } = method;
   const records = new Float64Array(n * FIELD.STRIDE);
@@ -41,7 +45,11 @@ export function workspace({ prepared, method, step, ground, stopDrift }: Problem
   let matrix: FullMatrix | null = null;
   if (damping.kind === 'banded') setFactors(records, prepared, damping.floor, damping.storey, system);
   else matrix = setFull(records, prepared, damping.ratios, system, -ground[0]);
-  return { records, matrix, scheme: { am, af, beta, gamma, h: step }, sums: new Float64Array(SUM.SUMS) };
+  const scheme: Scheme = { am, af, beta, gamma, h: step };
+  const sums = new Float64Array(SUM.SUMS);
+  const advance = (from: number, to: number) =>
+    stepTo(records, matrix, n, ground, scheme, sums, residualFrom, from, to);
+  return { records, sums, advance };
 }
 
 /** Factors on M, C and K in the matrix that a step solves with. */

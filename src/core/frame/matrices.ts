@@ -20,6 +20,8 @@ export interface FrameArrays {
   readonly gravityAbove: Float64Array;
   /** Storey stiffness less P-Delta, k - P / h [N/m]: what the frame vibrates with. */
   readonly netStiffness: Float64Array;
+  /** The first storey is an isolator. */
+  readonly isolated: boolean;
 }
 
 export function frameArrays(frame: Frame): FrameArrays {
@@ -38,7 +40,7 @@ export function frameArrays(frame: Frame): FrameArrays {
       netStiffness[i] = stiffness[i] - above / height[i];
     }
   }
-  return { n, height, mass, stiffness, gravityAbove, netStiffness };
+  return { n, height, mass, stiffness, gravityAbove, netStiffness, isolated: storeys[0]?.role === 'isolator' };
 }
 
 /**

@@ -1,0 +1,88 @@
+import { fullDamping } from '../frame/damping.ts';
+import type { Storey } from '../frame/frame.ts';
+import type { PreparedFrame } from '../frame/prepare.ts';
+import { setLaw } from './laws/laws.ts';
+import type { Problem } from './problem.ts';
+import { FIELD, SUM } from './record.ts';
+import type { Workspace } from './workspace.ts';
+import { type FullWork, type NonlinearWork, nowOf, refactor, yieldTo } from './yielding.ts';
+
+/** A law may be off its line by so much of the largest base shear that the motion can ask for, mass x ground acceleration. Own choice: well under what is printed. */
+const FORCE_TOLERANCE = 1e-12;
+/** Steepest line of a damper, as a multiple of mass / step. Own choice: stands for stick, and leaves ten figures. */
+const STICK = 1e5;
+
+/** @throws RangeError where the step's matrix is not positive definite (a validated case never is) */
+export function nonlinearWorkspace(problem: Problem): Workspace {
+  const { prepared, method, step, ground, stopDrift, residualFrom } = problem;
+  const { n, mass, stiffness, height, gravityAbove } = prepared.arrays;
+  const { am, af, beta, gamma } = method;
+  const { STRIDE } = FIELD;
+  const w = new Float64Array(n * STRIDE);
+  const wholeMass = mass.reduce((sum, m) => sum + m, 0);
+  const strongest = ground.reduce((most, ag) => Math.max(most, Math.abs(ag)), 0);
+  const { damping } = prepared;
+  prepared.frame.storeys.forEach((storey, i) => {
+    const at = i * STRIDE;
+    w[at + FIELD.MASS] = mass[i];
+    w[at + FIELD.PER_MASS] = 1 / mass[i];
+    w[at + FIELD.HEIGHT] = height[i];
+    w[at + FIELD.P_OVER_H] = gravityAbove[i] / height[i];
+    w[at + FIELD.STOP] = stopDrift[i];
+    w[at + FIELD.DRIFT_LEAST] = Number.POSITIVE_INFINITY;
+    w[at + FIELD.DRIFT_MOST] = Number.NEGATIVE_INFINITY;
+    // At rest, M a = -M ag at t = 0.
+    w[at + FIELD.A] = -ground[0];
+    setLaw(w, at, storey.law, stiffness[i]);
+    w[at + FIELD.SLOPE] = stiffness[i];
+    w[at + FIELD.TANGENT] = stiffness[i];
+    w[at + FIELD.FORCE_TOLERANCE] = FORCE_TOLERANCE * wholeMass * strongest;
+    setDamper(w, at, storey, (STICK * wholeMass) / step);
+    if (damping.kind === 'full') return;
+    w[at + FIELD.STOREY_DASHPOT] = damping.storey[i];
+    w[at + FIELD.TANGENT_FACTOR] = prepared.arrays.isolated && i === 0 ? 0 : damping.tangentFactor;
+    if (damping.against === 'ground') w[at + FIELD.FLOOR_DASHPOT] = damping.floor[i];
+  });
+  const sums = new Float64Array(SUM.SUMS);
+  sums[SUM.CULPRIT] = -1;
+  const work: NonlinearWork = {
+    n,
+    w,
+    now: nowOf(am, af, beta, gamma, step),
+    h: step,
+    full: fullWork(prepared, w, -ground[0]),
+    sums,
+  };
+  if (!refactor(work, 0)) throw new RangeError("march: the step's matrix is not positive definite");
+  return { records: w, sums, advance: (from, to) => yieldTo(work, ground, residualFrom, from, to) };
+}
+
+/** At rest a damper with an exponent under 1 sticks; the others start on their tangent at zero velocity. */
+function setDamper(w: Float64Array, at: number, { damper }: Storey, stick: number): void {
+  if (!damper) return;
+  w[at + FIELD.DAMPER] = damper.coefficient;
+  w[at + FIELD.EXPONENT] = damper.exponent;
+  w[at + FIELD.STICK] = stick;
+  const { coefficient, exponent } = damper;
+  w[at + FIELD.DAMPER_SLOPE] = exponent === 1 ? coefficient : exponent < 1 && coefficient > 0 ? stick : 0;
+}
+
+/** For damping that is not tridiagonal: C, and the inverse of the step's matrix; C a at the start, a being `uniform`. */
+function fullWork({ arrays, modes, damping }: PreparedFrame, w: Float64Array, uniform: number): FullWork | null {
+  if (damping.kind === 'banded' && damping.against === 'ground') return null;
+  const { n } = arrays;
+  const c = fullDamping(damping, arrays, modes);
+  for (let i = 0; i < n; i++) {
+    let sum = 0;
+    for (let j = 0; j < n; j++) sum += c[i * n + j];
+    w[i * FIELD.STRIDE + FIELD.DAMPING_RATE] = sum * uniform;
+  }
+  const scratch = () => new Float64Array(n);
+  return {
+    damping: c,
+    inverse: new Float64Array(n * n),
+    side: scratch(),
+    column: scratch(),
+    updates: new Int32Array(1),
+  };
+}
