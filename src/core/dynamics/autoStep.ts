@@ -9,6 +9,8 @@ export const AIM = 0.01;
 /** Steps a period for each mode needed for so much of the mass. Common practice; project-file page. */
 export const STEPS_A_PERIOD = 20;
 export const MASS_COVERED = 0.95;
+/** Steps of one run: the ground motion at each of them takes 160 MB. */
+export const MOST_STEPS = 2e7;
 
 /** The first number of parts that may be tried at all, and what asked for it. */
 export interface LeastParts {
@@ -45,6 +47,13 @@ export function leastParts(modes: readonly Mode[], choice: MethodChoice, interva
   return { parts, why: bySteps > 1 ? { kind: 'steps-a-period', mode } : { kind: 'interval' }, enough };
 }
 
+/** MOST_PARTS, or fewer where the run at half the step would not be held: samples x 2 x parts must stay under MOST_STEPS. */
+export function mostParts(samples: number, interval: number, tail: number): number {
+  let parts = MOST_PARTS;
+  while (parts > 1 && 2 * parts * (samples + tail / interval) > MOST_STEPS) parts /= 2;
+  return parts;
+}
+
 /** How far the search for a step has come: a run is missing, or it is over. */
 export type AutoStep =
   | { readonly kind: 'ask'; readonly parts: number }
@@ -54,7 +63,7 @@ export type AutoStep =
       readonly run: Run;
       /** null: the run ended early, at this step as at half of it. */
       readonly stepError: number | null;
-      /** False: MOST_PARTS were not enough. */
+      /** False: the most parts that are tried were not enough. */
       readonly converged: boolean;
     };
 
@@ -62,16 +71,17 @@ export type AutoStep =
  * The halving rule: from `first` on, the first number of parts whose run is confirmed by the one at half the step. Each run at
  * half the step is the next candidate, so none is wasted.
  *
+ * @param most   the most parts that are tried (`mostParts`)
  * @param runAt  the run at so many parts of the interval; undefined where it has not been run
  */
-export function autoStep(first: number, runAt: (parts: number) => Run | undefined): AutoStep {
+export function autoStep(first: number, most: number, runAt: (parts: number) => Run | undefined): AutoStep {
   for (let parts = first; ; parts *= 2) {
     const run = runAt(parts);
     if (!run) return { kind: 'ask', parts };
     const half = runAt(2 * parts);
     if (!half) return { kind: 'ask', parts: 2 * parts };
     const converged = confirms(run, half);
-    if (converged || parts >= MOST_PARTS)
+    if (converged || parts >= most)
       return { kind: 'settled', parts, run, stepError: errorBetween(run, half), converged };
   }
 }

@@ -1,5 +1,4 @@
 import type { PreparedFrame } from '../frame/prepare.ts';
-import type { LeastParts } from './autoStep.ts';
 import { methodOf } from './methods.ts';
 import { type Accuracy, modeAccuracy } from './modeAccuracy.ts';
 import type { Run } from './run.ts';
@@ -12,8 +11,9 @@ export interface Evidence {
   readonly parts: number;
   /** How `step: "auto"` came to it; null where the step was typed. */
   readonly auto: {
-    readonly least: LeastParts;
-    /** null while it is not known: the run at half the step is still out. */
+    /** "4 parts of the interval of 0.01 s, the first with a step error under 1 %" */
+    readonly why: string;
+    /** False: the most parts that are tried were not enough; null while the run at half the step is out. */
     readonly converged: boolean | null;
   } | null;
   /** Estimated error of the peak drifts [-]; null while it is not known, and where the run ended early. */

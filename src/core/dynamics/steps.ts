@@ -16,14 +16,14 @@ export interface Step {
 
 /**
  * The step of a motion: a typed step must be a whole part of the interval (fault `not-a-part` with the nearest ones named);
- * `parts` divides it. `auto` is not available yet.
+ * `parts` divides it. `auto` names a search (autoStep.ts) and no step: a run is asked with the parts that it came to.
  */
 export function stepOf(step: StepChoice, interval: number): Result<Step> {
   if (step === 'auto') {
     return refused(
-      'not-available-yet',
-      'a step chosen by halving ("auto") is not available yet',
-      'Type a step, or parts of the interval',
+      'not-chosen-yet',
+      'a step chosen by halving ("auto") is known once it was searched',
+      'Ask the run with parts of the interval',
     );
   }
   if (typeof step === 'object') {
