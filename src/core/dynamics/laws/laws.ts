@@ -1,8 +1,11 @@
 import type { Law } from '../../frame/frame.ts';
 import { FIELD } from '../record.ts';
 import * as bilinear from './bilinear.ts';
+import * as boucWen from './boucWen.ts';
 import * as elastic from './elastic.ts';
+import * as flag from './flag.ts';
 import type { LawBehaviour } from './law.ts';
+import * as peakOriented from './peakOriented.ts';
 
 const { LAW, K, K_YIELD, STRENGTH, LAW_P, LAW_Q, LAW_R } = FIELD;
 const { LAW_A, LAW_B, LAW_C, LAW_D, DRIFT, FORCE, WORK } = FIELD;
@@ -23,7 +26,13 @@ const NUMBERS: { readonly [kind in Law['kind']]: number } = {
 };
 
 /** The laws by number. */
-export const LAWS: readonly LawBehaviour[] = [elastic.elastic, bilinear.bilinear];
+export const LAWS: readonly LawBehaviour[] = [
+  elastic.elastic,
+  bilinear.bilinear,
+  peakOriented.peakOriented,
+  boucWen.boucWen,
+  flag.flag,
+];
 
 /** The number of a law's kind. */
 export function numberOf(law: Law): number {
@@ -35,11 +44,9 @@ export function numberOf(law: Law): number {
  * drift, force and work, and the law's own state.
  *
  * @param stiffness initial stiffness [N/m], > 0
- * @throws RangeError for a law that is not in the list
  */
 export function setLaw(w: Float64Array, at: number, law: Law, stiffness: number): void {
   const number = numberOf(law);
-  if (LAWS[number] === undefined) throw new RangeError(`law ${law.kind}: not in the list of laws`);
   w[at + LAW] = number;
   w[at + K] = stiffness;
   w[at + K_YIELD] = law.kind === 'elastic' ? stiffness : law.hardening * stiffness;
@@ -60,6 +67,15 @@ export function trialOf(w: Float64Array, at: number): void {
     case BILINEAR:
       bilinear.trial(w, at);
       break;
+    case PEAK_ORIENTED:
+      peakOriented.trial(w, at);
+      break;
+    case BOUC_WEN:
+      boucWen.trial(w, at);
+      break;
+    case FLAG:
+      flag.trial(w, at);
+      break;
   }
 }
 
@@ -71,6 +87,15 @@ export function commitOf(w: Float64Array, at: number): void {
       break;
     case BILINEAR:
       bilinear.commit(w, at);
+      break;
+    case PEAK_ORIENTED:
+      peakOriented.commit(w, at);
+      break;
+    case BOUC_WEN:
+      boucWen.commit(w, at);
+      break;
+    case FLAG:
+      flag.commit(w, at);
       break;
   }
 }
