@@ -2,14 +2,15 @@ import type { Statistic } from '../checks/statistic.ts';
 import { endingWords } from '../checks/verdict.ts';
 import type { Ending, Run } from '../dynamics/run.ts';
 import type { Storey } from '../frame/frame.ts';
-import type { ReportRun, ReportSource } from './source.ts';
+import { type ReportRun, type ReportSource, yields } from './source.ts';
 
 const RESPONSE_FORMAT = 'swaybook-response';
 const RESPONSE_VERSION = 1;
 
 /**
  * The response file: plain SI numbers, ground up, under the keys of the project-file page. Null wherever the suite is not
- * complete; `ductility` arrives with storeys that yield and is absent for elastic ones.
+ * complete; `ductility` is absent for elastic storeys. An isolator has its own limit, a displacement [m]: its `limit` and `ratio`
+ * are of `envelope.floors[0].displacement`, null where none is typed.
  */
 export function responseOf({ prepared, runs, envelope }: Pick<ReportSource, 'prepared' | 'runs' | 'envelope'>) {
   const { frame, modes } = prepared;
@@ -32,11 +33,11 @@ export function responseOf({ prepared, runs, envelope }: Pick<ReportSource, 'pre
           mean: drift.mean,
           median: drift.median,
           max: drift.max,
-          limit: envelope.limit,
-          ratio: envelope.ratio === null ? null : envelope.ratio[i],
+          ...limitOf(envelope, i),
           governing: drift.governing,
           shear: at(envelope.shear, i),
           overturning: at(envelope.overturning, i),
+          ...(yields(frame.storeys[i]) ? { ductility: at(envelope.ductility, i) } : {}),
           residualDrift: at(envelope.residualDrift, i),
         };
       }),
@@ -62,13 +63,14 @@ function runOf({ motion, run, stepError }: ReportRun, storeys: readonly Storey[]
     steps,
     completed: ending === null,
     ...(ending === null ? {} : { reason: reasonOf(run, ending) }),
-    storeys: storeys.map((_, i) => ({
+    storeys: storeys.map((storey, i) => ({
       peakDrift: answers.peakDrift[i],
       peakDriftRatio: answers.peakDriftRatio[i],
       peakTime: answers.peakTime[i],
       residualDrift: answers.residualDrift[i],
       peakShear: answers.peakShear[i],
       peakOverturning: answers.peakOverturning[i],
+      ...(yields(storey) ? { ductility: answers.ductility[i] } : {}),
       dissipated: answers.dissipated[i],
     })),
     floors: storeys.map((_, i) => ({
@@ -89,6 +91,12 @@ function reasonOf(run: Run, ending: Ending) {
     time: ending.time,
     why: endingWords(run),
   };
+}
+
+/** What a storey is compared with: the drift limit, or an isolator's own. */
+function limitOf({ limit, ratio, isolator }: ReportSource['envelope'], i: number) {
+  if (i === 0 && isolator !== null) return isolator;
+  return { limit, ratio: ratio === null ? null : ratio[i] };
 }
 
 /** One place of a statistic, with the governing motion by name; nulls where there is none. */

@@ -1,6 +1,7 @@
 import type { Envelope } from '../checks/envelope.ts';
 import type { Limits } from '../checks/limits.ts';
 import type { Analysis, Run } from '../dynamics/run.ts';
+import type { Storey } from '../frame/frame.ts';
 import type { PreparedFrame } from '../frame/prepare.ts';
 import type { Origin } from '../motion/motion.ts';
 
@@ -36,4 +37,9 @@ export interface ReportRun {
   readonly run: Run;
   /** Estimated error of the peak drifts from the step [-]; null where it is not known. */
   readonly stepError: number | null;
+}
+
+/** Whether a storey can yield: it then has a yield drift, and a ductility. */
+export function yields({ law }: Storey): boolean {
+  return law.kind !== 'elastic';
 }

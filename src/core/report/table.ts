@@ -23,7 +23,10 @@ export interface Table {
   readonly columns: readonly Column[];
 }
 
-/** Values of ground-up arrays from the roof down, as the sheet shows them; nulls where there is none. */
-export function roofFirst(values: ArrayLike<number> | null | undefined, n: number): Cell[] {
-  return Array.from({ length: n }, (_, row) => values?.[n - 1 - row] ?? null);
+/** Values of ground-up arrays from the roof down, as the sheet shows them; nulls where there is none (NaN, what is not finite). */
+export function roofFirst(values: ArrayLike<number | null> | null | undefined, n: number): Cell[] {
+  return Array.from({ length: n }, (_, row) => {
+    const value = values?.[n - 1 - row] ?? null;
+    return Number.isFinite(value) ? value : null;
+  });
 }

@@ -14,6 +14,24 @@ const frame: Frame = {
   damping: { kind: 'rayleigh', modes: [1, 2], ratios: [0.05, 0.04] },
   pDelta: true,
 };
+/** The same on an isolator with a damper, over two storeys that yield. */
+const isolated: Frame = {
+  storeys: [
+    {
+      name: 'Isolators',
+      height: 1.5,
+      mass: 500_000,
+      stiffness: 4e7,
+      law: { kind: 'bilinear', strength: 8e5, hardening: 0.3 },
+      damper: { coefficient: 4e5, exponent: 1 },
+      role: 'isolator',
+    },
+    { ...frame.storeys[0], law: { kind: 'bilinear', strength: 8e5, hardening: 0.03 } },
+    { ...frame.storeys[1], law: { kind: 'elastic' } },
+  ],
+  damping: { kind: 'rayleigh', modes: [1, 2], ratios: [0.05, 0.05], stiffness: 'tangent' },
+  pDelta: true,
+};
 const analysis: Analysis = {
   method: { kind: 'newmark', beta: 0.25, gamma: 0.5 },
   step: { parts: 2 },
@@ -24,6 +42,15 @@ const limits: Limits = { drift: 0.02, factor: 1.25, source: 'clause 4.2 of the b
 
 /** Three storeys under two short motions, really computed; `strength` scales the ground so that a run can be made to stop. */
 export function exampleSource({ strength = 1, histories = false } = {}): ReportSource {
+  return sourceOf(frame, limits, strength, histories);
+}
+
+/** Three rows that yield, the lowest an isolator; without a limit of its own where none is given [m]. */
+export function isolatedSource({ limit, strength = 0.4 }: { limit?: number; strength?: number } = {}): ReportSource {
+  return sourceOf(isolated, limit === undefined ? limits : { ...limits, isolator: limit }, strength, true);
+}
+
+function sourceOf(frame: Frame, limits: Limits, strength: number, histories: boolean): ReportSource {
   const prepared = prepareFrame(frame);
   if (!prepared.ok) throw new Error('the example must stand');
   const motions = [

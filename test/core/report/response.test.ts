@@ -1,6 +1,6 @@
 import { describe, expect, test } from 'vitest';
 import { responseOf } from '../../../src/core/report/response.ts';
-import { exampleSource } from './example.ts';
+import { exampleSource, isolatedSource } from './example.ts';
 
 describe('[FILE-2] the response file carries the keys of the project-file page', () => {
   const source = exampleSource();
@@ -84,4 +84,63 @@ test('[FILE-2] a suite with a run that ended early has no statistics and says wh
     expect(storey.limit).toBe(0.02);
     expect(storey.shear).toEqual({ mean: null, median: null, max: null, governing: null });
   }
+});
+
+describe('[FILE-3] the response of storeys that yield, dampers and an isolator', () => {
+  const source = isolatedSource({ limit: 0.25 });
+  const response = responseOf(source);
+  const [run] = response.runs;
+  const computed = source.runs[0].run;
+
+  test('ductility stands where a storey can yield and is absent for elastic ones', () => {
+    expect(run.storeys.map(({ ductility }) => ductility)).toEqual([
+      ...computed.storeys.ductility.slice(0, 2),
+      undefined,
+    ]);
+    expect(run.storeys[2]).not.toHaveProperty('ductility');
+    const [isolator, ground, top] = response.envelope.storeys;
+    expect(isolator.ductility?.max).toBe(source.envelope.ductility?.max[0]);
+    expect(ground.ductility?.governing).toMatch(/^[AB]$/);
+    expect(top).not.toHaveProperty('ductility');
+  });
+
+  test('energies of dampers and hysteresis are those of the run', () => {
+    expect(run.energy.dampers).toBeGreaterThan(0);
+    expect(run.energy.hysteretic).toBeGreaterThan(0);
+    const dissipated = run.storeys.reduce((sum, storey) => sum + storey.dissipated, 0);
+    expect(dissipated / run.energy.hysteretic).toBeCloseTo(1, 9);
+  });
+
+  test('an isolator is compared by its displacement, in m and without the factor on drifts', () => {
+    const [isolator, ground] = response.envelope.storeys;
+    expect(isolator.limit).toBe(0.25);
+    expect(isolator.ratio).toBe(Number(response.envelope.floors[0].displacement.max) / 0.25);
+    expect(ground.limit).toBe(0.02);
+    expect(ground.ratio).toBeCloseTo((1.25 * Number(ground.max)) / 0.02, 12);
+    expect(responseOf(isolatedSource()).envelope.storeys[0]).toMatchObject({ limit: null, ratio: null });
+  });
+
+  test('survives JSON without losing a digit', () => expect(JSON.parse(JSON.stringify(response))).toEqual(response));
+
+  test('a collapse names storey, time and why, and leaves no statistic', () => {
+    const stopped = responseOf(isolatedSource({ limit: 0.25, strength: 40 }));
+    expect(stopped.runs[0].completed).toBe(false);
+    expect(stopped.runs[0].reason?.storey).toBeGreaterThanOrEqual(1);
+    expect(stopped.runs[0].reason?.why).toMatch(/^storey \d passed the drift at which a run is stopped/);
+    expect(stopped.envelope.incomplete).toContain('A');
+    const none = { mean: null, median: null, max: null, governing: null };
+    expect(stopped.envelope.storeys[0]).toMatchObject({ ...none, limit: 0.25, ratio: null, ductility: none });
+  });
+});
+
+test('[FILE-2] a step that does not converge is named with its storey', () => {
+  const source = isolatedSource();
+  const [first, second] = source.runs;
+  const ending = { status: 'not-converged', storey: 1, time: 2.35 } as const;
+  const { runs } = responseOf({ ...source, runs: [{ ...first, run: { ...first.run, ending } }, second] });
+  expect(runs[0].reason).toEqual({
+    storey: 2,
+    time: 2.35,
+    why: 'storey 2 found no equilibrium at 2.35 s, however short the step',
+  });
 });

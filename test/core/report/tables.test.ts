@@ -2,10 +2,12 @@ import { describe, expect, test } from 'vitest';
 import { historiesTable } from '../../../src/core/report/histories.ts';
 import type { Cell, Table } from '../../../src/core/report/table.ts';
 import { tablesOf } from '../../../src/core/report/tables.ts';
-import { exampleSource } from './example.ts';
+import { exampleSource, isolatedSource } from './example.ts';
 
 const source = exampleSource();
 const tables = tablesOf(source);
+const yielding = isolatedSource({ limit: 0.25 });
+const yieldingTables = tablesOf(yielding);
 const { runs, envelope, prepared } = source;
 
 function tableOf(id: string, among: readonly Table[] = tables): Table {
@@ -21,7 +23,7 @@ function cells(id: string, key: string, among?: readonly Table[]): readonly Cell
 }
 
 describe('[TAB-1] every table', () => {
-  test.each(tables.map((table) => [table.id, table] as const))(
+  test.each([...tables, ...yieldingTables].map((table) => [table.id, table] as const))(
     '%s has equal columns and its own keys',
     (id, { columns }) => {
       expect(id).toMatch(/^[a-z-]+$/);
@@ -117,4 +119,94 @@ test('[TAB-4] histories have a row a step and agree with the peaks', () => {
   expect(largest(column('acceleration2'))).toBe(run.floors.peakAcceleration[1]);
   expect(column('input').at(-1)).toBe(run.energy.input);
   expect(() => historiesTable('A', runs[0].run)).toThrow(RangeError);
+});
+
+describe('[TAB-5] storeys that yield, dampers and an isolator', () => {
+  const here = (id: string, key: string) => cells(id, key, yieldingTables);
+  const keysOf = (id: string, among: readonly Table[]) => tableOf(id, among).columns.map(({ key }) => key);
+
+  test('inputs show the law, its numbers, its yield drift and the damper; a linear frame has no such columns', () => {
+    expect(here('storeys', 'role')).toEqual(['storey', 'storey', 'isolator']);
+    expect(here('storeys', 'law')).toEqual(['elastic', 'bilinear', 'bilinear']);
+    expect(here('storeys', 'strength')).toEqual([null, 8e5, 8e5]);
+    expect(here('storeys', 'hardening')).toEqual([null, 0.03, 0.3]);
+    expect(here('storeys', 'yieldDrift')).toEqual([null, 8e5 / 1.85e8, 8e5 / 4e7]);
+    expect(here('storeys', 'damperCoefficient')).toEqual([null, null, 4e5]);
+    expect(here('storeys', 'damperExponent')).toEqual([null, null, 1]);
+    expect(keysOf('storeys', yieldingTables)).not.toContain('beta');
+    expect(keysOf('storeys', tables)).toEqual(['storey', 'name', 'height', 'mass', 'stiffness', 'law', 'gravity']);
+    expect(here('analysis', 'damping')).toEqual(['Rayleigh on the tangent stiffness, 5 % in mode 1 and 5 % in mode 2']);
+    expect(here('analysis', 'isolatorLimit')).toEqual([0.25]);
+  });
+
+  test('ductility is that of the runs, and none stands on the row of an elastic storey', () => {
+    const { ductility } = yielding.envelope;
+    expect(here('storey-response', 'ductilityMax')).toEqual([null, ductility?.max[1], ductility?.max[0]]);
+    expect(ductility?.max[0]).toBeGreaterThan(1);
+    const [{ run }] = yielding.runs;
+    expect(here('storey-response-by-motion', 'ductility').slice(0, 3)).toEqual([
+      null,
+      run.storeys.ductility[1],
+      run.storeys.ductility[0],
+    ]);
+    expect(here('storey-response-by-motion', 'firstYield')[2]).toBe(run.storeys.firstYield[0]);
+    expect(keysOf('storey-response', tables)).not.toContain('ductilityMax');
+    expect(keysOf('storey-response-by-motion', tables)).not.toContain('firstYield');
+  });
+
+  test('residual drift stands in length and as a share of the height', () => {
+    const heights = [3.6, 4.2, 1.5];
+    for (const key of ['Mean', 'Median', 'Max']) {
+      const drift = here('storey-response', `residualDrift${key}`).map(Number);
+      expect(here('storey-response', `residualDriftRatio${key}`)).toEqual(drift.map((d, row) => d / heights[row]));
+    }
+    expect(here('storey-response-by-motion', 'residualDriftRatio').slice(0, 3)).toEqual(
+      here('storey-response-by-motion', 'residualDrift')
+        .slice(0, 3)
+        .map((drift, row) => Number(drift) / heights[row]),
+    );
+  });
+
+  test('an isolator has no drift compared; its displacement stands against its own limit, without the factor', () => {
+    for (const key of ['comparedDriftRatio', 'limit', 'factor']) expect(here('storey-response', key)[2]).toBeNull();
+    expect(here('storey-response-by-motion', 'comparedDriftRatio').filter((value) => value === null)).toHaveLength(2);
+    const displacement = yielding.envelope.displacement?.max[0];
+    expect(here('storey-response', 'comparedDisplacement')).toEqual([null, null, displacement]);
+    expect(here('storey-response', 'isolatorLimit')).toEqual([null, null, 0.25]);
+    expect(here('storey-response', 'ofLimit')[2]).toBeCloseTo(Number(displacement) / 0.25, 14);
+    const free = tablesOf(isolatedSource());
+    expect(cells('storey-response', 'ofLimit', free)[2]).toBeNull();
+    expect(cells('storey-response', 'isolatorLimit', free)).toEqual([null, null, null]);
+  });
+
+  test('energies of storeys add up to those of the run; the marching is counted', () => {
+    yielding.runs.forEach(({ run }, r) => {
+      const sum = (key: string) =>
+        here('storey-response-by-motion', key)
+          .slice(3 * r, 3 * r + 3)
+          .reduce<number>((total, value) => total + Number(value), 0);
+      expect(sum('dissipated') / run.energy.hysteretic).toBeCloseTo(1, 9);
+      expect(sum('damperWork') / run.energy.dampers).toBeCloseTo(1, 9);
+      expect(run.energy.dampers).toBeGreaterThan(0);
+      expect(here('energy', 'solves')[r]).toBeGreaterThanOrEqual(run.steps);
+      expect(here('energy', 'mostSolves')[r]).toBe(run.marching.mostSolves);
+      expect(here('energy', 'halvings')[r]).toBe(run.marching.halvings);
+      expect(here('energy', 'baseDampingForce')[r]).toBe(run.base.peakDampingForce);
+    });
+    expect(cells('energy', 'solves')).toEqual(runs.map(({ run }) => run.steps));
+  });
+
+  test('histories show damper forces and when a storey is past yield; those of a linear frame do not', () => {
+    const [{ motion, run }] = yielding.runs;
+    const table = historiesTable(motion, run);
+    const column = (key: string) => cells('histories', key, [table]).map(Number);
+    const yielded = column('yielding1');
+    expect(new Set(yielded)).toEqual(new Set([0, 1]));
+    expect(column('time')[yielded.indexOf(1)]).toBeGreaterThanOrEqual(run.storeys.firstYield[0] - run.step);
+    expect(Math.max(...column('yielding3'))).toBe(0);
+    expect(Math.max(...column('damperForce1'))).toBeGreaterThan(0);
+    expect(Math.max(...column('damperForce2').map(Math.abs))).toBe(0);
+    const linear = exampleSource({ histories: true }).runs[0];
+    expect(historiesTable(linear.motion, linear.run).columns.some(({ key }) => key.startsWith('yielding'))).toBe(false);
+  });
 });

@@ -1,28 +1,42 @@
 import type { Run } from '../../dynamics/run.ts';
 import type { Quantity } from '../../units/quantities.ts';
-import type { ReportSource } from '../source.ts';
+import { type ReportSource, yields } from '../source.ts';
 import { type Cell, type Column, roofFirst, type Table } from '../table.ts';
 import { storeyColumns } from './storeyColumns.ts';
 
 /** What each storey answers to each motion: a block of rows a motion, roof first. Peaks of a run that ended early count so far. */
 export function storeyResponseByMotion(source: ReportSource): Table {
-  const { factor } = source.envelope;
+  const { factor, isolator } = source.envelope;
+  const { storeys } = source.prepared.frame;
   const answer = answersOf(source);
+  const compared = (ratio: number, i: number) => (i === 0 && isolator !== null ? Number.NaN : factor * ratio);
   return {
     id: 'storey-response-by-motion',
     title: 'Storey response to each motion',
     columns: [
       ...headColumns(source),
-      answer('peakDrift', 'Peak drift', 'drift', ({ storeys }) => storeys.peakDrift),
-      answer('peakDriftRatio', 'Peak drift ratio', 'percent', ({ storeys }) => storeys.peakDriftRatio),
-      answer('comparedDriftRatio', 'Drift ratio compared', 'percent', ({ storeys }) =>
-        storeys.peakDriftRatio.map((value) => factor * value),
+      answer('peakDrift', 'Peak drift', 'drift', (run) => run.storeys.peakDrift),
+      answer('peakDriftRatio', 'Peak drift ratio', 'percent', (run) => run.storeys.peakDriftRatio),
+      answer('comparedDriftRatio', 'Drift ratio compared', 'percent', (run) =>
+        run.storeys.peakDriftRatio.map(compared),
       ),
-      answer('peakTime', 'Time of peak drift', 'time', ({ storeys }) => storeys.peakTime),
-      answer('residualDrift', 'Residual drift', 'drift', ({ storeys }) => storeys.residualDrift),
-      answer('peakShear', 'Peak shear', 'force', ({ storeys }) => storeys.peakShear),
-      answer('peakOverturning', 'Peak overturning', 'moment', ({ storeys }) => storeys.peakOverturning),
-      answer('dissipated', 'Dissipated energy', 'energy', ({ storeys }) => storeys.dissipated),
+      answer('peakTime', 'Time of peak drift', 'time', (run) => run.storeys.peakTime),
+      ...(storeys.some(yields)
+        ? [
+            answer('ductility', 'Ductility', 'ratio', (run) => run.storeys.ductility),
+            answer('firstYield', 'Time of first yield', 'time', (run) => run.storeys.firstYield),
+          ]
+        : []),
+      { ...answer('residualDrift', 'Residual drift', 'drift', (run) => run.storeys.residualDrift), decimals: 1 },
+      answer('residualDriftRatio', 'Residual drift ratio', 'percent', (run) =>
+        run.storeys.residualDrift.map((drift, i) => drift / storeys[i].height),
+      ),
+      answer('peakShear', 'Peak shear', 'force', (run) => run.storeys.peakShear),
+      answer('peakOverturning', 'Peak overturning', 'moment', (run) => run.storeys.peakOverturning),
+      answer('dissipated', 'Dissipated energy', 'energy', (run) => run.storeys.dissipated),
+      ...(storeys.some(({ damper }) => damper !== undefined)
+        ? [answer('damperWork', 'Energy of the damper', 'energy', (run) => run.storeys.damperWork)]
+        : []),
     ],
   };
 }

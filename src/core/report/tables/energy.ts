@@ -1,9 +1,9 @@
 import { endingWords } from '../../checks/verdict.ts';
-import type { ReportRun, ReportSource } from '../source.ts';
+import { type ReportRun, type ReportSource, yields } from '../source.ts';
 import type { Cell, Column, Table } from '../table.ts';
 
 /** Energies at the end of each run, of relative motion, with the evidence that the step was small enough. */
-export function energyBalance({ runs }: ReportSource): Table {
+export function energyBalance({ prepared, runs }: ReportSource): Table {
   const column = (key: string, name: string, quantity: Column['quantity'], of: (run: ReportRun) => Cell): Column => ({
     key,
     name,
@@ -24,6 +24,16 @@ export function energyBalance({ runs }: ReportSource): Table {
       column('imbalance', 'Largest imbalance', 'percent', ({ run }) => run.energy.imbalance),
       column('step', 'Step', 'time', ({ run }) => run.step),
       column('steps', 'Steps', 'count', ({ run }) => run.steps),
+      column('solves', 'Solves of all steps', 'count', ({ run }) => run.marching.solves),
+      column('mostSolves', 'Most solves of one step', 'count', ({ run }) => run.marching.mostSolves),
+      column('halvings', 'Steps halved', 'count', ({ run }) => run.marching.halvings),
+      ...(prepared.frame.storeys.some(yields)
+        ? [
+            column('baseDampingForce', 'Damping force at the base past yield', 'force', ({ run }) =>
+              Number.isFinite(run.base.peakDampingForce) ? run.base.peakDampingForce : null,
+            ),
+          ]
+        : []),
       column('stepError', 'Step error', 'percent', ({ stepError }) => stepError),
       column('ending', 'Ending', 'text', ({ run }) => (run.ending === null ? 'completed' : endingWords(run))),
     ],

@@ -1,53 +1,70 @@
 import { methodOf } from '../../dynamics/methods.ts';
 import type { StepChoice } from '../../dynamics/run.ts';
 import { never } from '../../fault.ts';
-import type { Damping } from '../../frame/frame.ts';
+import type { Damping, Storey } from '../../frame/frame.ts';
 import { STANDARD_GRAVITY } from '../../units/constants.ts';
+import type { Quantity } from '../../units/quantities.ts';
 import type { ReportMotion, ReportSource } from '../source.ts';
 import { type Cell, type Column, roofFirst, type Table } from '../table.ts';
 import { storeyColumns } from './storeyColumns.ts';
 
-/** The storeys as they were computed, roof first. */
+/** The storeys as they were computed, roof first. What no storey of the frame has is left out. */
 export function storeyInputs({ prepared }: ReportSource): Table {
   const { storeys } = prepared.frame;
   const n = storeys.length;
-  const gravity = storeys.map((storey) => storey.gravity ?? storey.mass * STANDARD_GRAVITY);
+  const column = (
+    key: string,
+    name: string,
+    quantity: Quantity,
+    of: (storey: Storey) => number | null | undefined,
+  ): Column => ({
+    key,
+    name,
+    quantity,
+    values: roofFirst(
+      storeys.map((storey) => of(storey) ?? null),
+      n,
+    ),
+  });
+  const lawNumber = (key: string, name: string, quantity: Quantity, of: (law: Yielding) => number | undefined) =>
+    column(key, name, quantity, ({ law }) => (law.kind === 'elastic' ? null : of(law)));
   return {
     id: 'storeys',
     title: 'Storeys',
     columns: [
       ...storeyColumns(storeys),
-      {
-        key: 'height',
-        name: 'Height',
-        quantity: 'length',
-        values: roofFirst(
-          storeys.map((s) => s.height),
-          n,
+      ...(storeys.some(({ role }) => role === 'isolator')
+        ? [{ key: 'role', name: 'Role', quantity: 'text', values: storeys.map(roleOf).reverse() } as const]
+        : []),
+      column('height', 'Height', 'length', ({ height }) => height),
+      column('mass', 'Weight', 'weight', ({ mass }) => mass),
+      column('stiffness', 'Stiffness', 'stiffness', ({ stiffness }) => stiffness),
+      { key: 'law', name: 'Law', quantity: 'text', values: storeys.map(({ law }) => law.kind).reverse() },
+      ...[
+        lawNumber('strength', 'Strength', 'force', ({ strength }) => strength),
+        lawNumber('hardening', 'Hardening', 'percent', ({ hardening }) => hardening),
+        column('yieldDrift', 'Yield drift', 'drift', ({ law, stiffness }) =>
+          law.kind === 'elastic' ? null : law.strength / stiffness,
         ),
-      },
-      {
-        key: 'mass',
-        name: 'Weight',
-        quantity: 'weight',
-        values: roofFirst(
-          storeys.map((s) => s.mass),
-          n,
-        ),
-      },
-      {
-        key: 'stiffness',
-        name: 'Stiffness',
-        quantity: 'stiffness',
-        values: roofFirst(
-          storeys.map((s) => s.stiffness),
-          n,
-        ),
-      },
-      { key: 'law', name: 'Law', quantity: 'text', values: storeys.map((s) => s.law.kind).reverse() },
-      { key: 'gravity', name: 'Gravity load for P-Delta', quantity: 'force', values: roofFirst(gravity, n) },
+        lawNumber('exponent', 'Bouc-Wen exponent', 'ratio', (law) => ('exponent' in law ? law.exponent : undefined)),
+        lawNumber('beta', 'Bouc-Wen beta', 'ratio', (law) => ('beta' in law ? law.beta : undefined)),
+        lawNumber('gamma', 'Bouc-Wen gamma', 'ratio', (law) => ('gamma' in law ? law.gamma : undefined)),
+        lawNumber('flag', 'Flag height over strength', 'ratio', (law) => ('ratio' in law ? law.ratio : undefined)),
+        // The coefficient's own unit depends on the exponent; its value in SI is this force.
+        column('damperCoefficient', 'Damper force at 1 m/s', 'force', ({ damper }) => damper?.coefficient),
+        column('damperExponent', 'Damper exponent', 'ratio', ({ damper }) => damper?.exponent),
+      ]
+        .filter(({ values }) => values.some((value) => value !== null))
+        .map((one) => (one.key === 'yieldDrift' ? { ...one, decimals: 1 } : one)),
+      column('gravity', 'Gravity load for P-Delta', 'force', ({ gravity, mass }) => gravity ?? mass * STANDARD_GRAVITY),
     ],
   };
+}
+
+type Yielding = Exclude<Storey['law'], { readonly kind: 'elastic' }>;
+
+function roleOf({ role }: Storey): string {
+  return role ?? 'storey';
 }
 
 /** The motions with their scales, those left out as well, and where each came from. */
@@ -110,6 +127,16 @@ export function analysisInputs({ title, prepared, analysis, limits, envelope }: 
       text('damping', 'Damping', dampingWords(frame.damping)),
       text('pDelta', 'P-Delta', frame.pDelta ? 'on' : 'off'),
       { key: 'limit', name: 'Allowable drift ratio', quantity: 'percent', values: [envelope.limit] },
+      ...(envelope.isolator === null
+        ? []
+        : [
+            {
+              key: 'isolatorLimit',
+              name: 'Allowable isolator displacement',
+              quantity: 'displacement',
+              values: [envelope.isolator.limit],
+            } as const,
+          ]),
       text('measure', 'Measure of the suite', envelope.measure),
       { key: 'factor', name: 'Factor on drift', quantity: 'ratio', values: [envelope.factor] },
       text('limitSource', 'Source of the limit', limits.source),
@@ -131,7 +158,8 @@ function dampingWords(damping: Damping): string {
     case 'rayleigh': {
       const [i, j] = damping.modes;
       const [first, second] = damping.ratios;
-      return `Rayleigh, ${percent(first)} in mode ${i} and ${percent(second)} in mode ${j}`;
+      const on = damping.stiffness === 'tangent' ? ' on the tangent stiffness' : '';
+      return `Rayleigh${on}, ${percent(first)} in mode ${i} and ${percent(second)} in mode ${j}`;
     }
     case 'modal':
       return `modal, ${damping.ratios.map(percent).join(', ')}, the last repeated`;
