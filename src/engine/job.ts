@@ -8,9 +8,13 @@ import type { Turns } from './turns.ts';
 
 /** A slice ends after so many milliseconds at the first chance; with a chunk of steps on top it stays under 20. */
 const SLICE = 12;
-/** The march is left at least so often to look at the clock [ms]. */
+/**
+ * The march is left about so often to look at the clock [ms]. Steps of a frame that begins to yield cost several times what they
+ * did before, so the next chunk is as long as the last one allows, and grows by no more than GROWTH.
+ */
 const CHUNK = 4;
-const FIRST_STEPS = 256;
+const GROWTH = 4;
+const FIRST_STEPS = 64;
 /** A sign of life at least so often while a job is under way [ms]. */
 const SIGN_OF_LIFE = 100;
 /** Shorter arrays are cheaper to copy than to transfer [bytes]. */
@@ -22,6 +26,8 @@ interface RunUnderHand {
   march: RunUnderWay | null;
   /** Steps of the next chunk. */
   steps: number;
+  /** [ms] so far. */
+  took: number;
 }
 type UnderHand = RunUnderHand | { readonly job: Exclude<WorkerJob, RunJob> };
 
@@ -59,7 +65,7 @@ export function jobs(
   function underHand(job: RunJob): RunUnderHand {
     if (job.frame) frame = job.frame;
     if (!frame) throw new TypeError('a run without its frame, and none was sent before');
-    return { job, frame, march: null, steps: FIRST_STEPS };
+    return { job, frame, march: null, steps: FIRST_STEPS, took: 0 };
   }
 
   function turn(): void {
@@ -93,26 +99,30 @@ export function jobs(
     try {
       if (!('march' in under)) {
         const { file, bytes, answers } = under.job;
+        const before = performance.now();
         const value = readFile(file, new Uint8Array(bytes), answers);
         transfer.push(...buffersOf(value));
-        return { id, kind: 'read', value };
+        return { id, kind: 'read', value, took: performance.now() - before };
       }
       const run = marchOn(under);
       if (!run) return null;
       if (run.histories) transfer.push(...buffersOf(run.histories));
-      return { id, kind: 'run', value: run };
+      return { id, kind: 'run', value: run, took: under.took };
     } catch (error) {
       return { id, kind: 'failed', message: error instanceof Error ? error.message : String(error) };
     }
   }
 
   function marchOn(under: RunUnderHand): Run | null {
-    under.march ??= start(under);
     const before = performance.now();
+    under.march ??= start(under);
+    const begun = performance.now();
     const over = under.march.advance(under.steps);
-    const took = performance.now() - before;
+    const end = performance.now();
+    const took = end - begun;
+    under.took += end - before;
     // The clock may be as coarse as 0.1 ms: grow until the chunk is long enough to be measured.
-    under.steps = Math.max(1, Math.ceil(under.steps * Math.min(4, CHUNK / Math.max(took, 1e-3))));
+    under.steps = Math.max(1, Math.ceil(under.steps * Math.min(GROWTH, CHUNK / Math.max(took, 1e-3))));
     return over ? under.march.finish() : null;
   }
 

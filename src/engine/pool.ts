@@ -1,5 +1,6 @@
 import type { Run } from '../core/dynamics/run.ts';
 import type { Endpoint, Engine, FromWorker, Outcome, ReadAnswer, Reply, RunRequest, WorkerJob } from './protocol.ts';
+import { weightOf } from './weight.ts';
 
 /** A worker that has a job and says nothing for so long is taken for dead [ms]. */
 const SILENT = 2000;
@@ -80,7 +81,7 @@ export function createPool({ size, make, fallback, silent = SILENT }: PoolOption
       const settle = (outcome: Outcome | 'superseded') => {
         if (open.get(question)?.id === id) open.delete(question);
         if (outcome === 'superseded') resolve({ status: 'superseded' });
-        else if (outcome.kind === kind) resolve({ status: 'done', value: outcome.value as T });
+        else if (outcome.kind === kind) resolve({ status: 'done', value: outcome.value as T, took: outcome.took });
         else
           resolve({ status: 'failed', message: outcome.kind === 'failed' ? outcome.message : 'a wrong answer came' });
       };
@@ -297,11 +298,4 @@ function loadBefore(slot: Slot, priority: number): number {
   let load = 0;
   for (const job of slot.jobs.values()) if (job.priority <= priority) load += job.weight;
   return load;
-}
-
-/** About so many storey-steps. */
-function weightOf({ frame, analysis, motion }: RunRequest, count: number): number {
-  const { step } = analysis;
-  const parts = step === 'auto' ? 1 : typeof step === 'number' ? motion.interval / step : step.parts;
-  return Math.max(1, frame.storeys.length * count * parts);
 }

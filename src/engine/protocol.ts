@@ -18,7 +18,8 @@ export interface RunRequest {
 }
 
 export type Reply<T> =
-  | { readonly status: 'done'; readonly value: T }
+  /** took: time that the job had of its worker [ms]. */
+  | { readonly status: 'done'; readonly value: T; readonly took: number }
   /** A newer job for the same question took its place, or it was cancelled. */
   | { readonly status: 'superseded' }
   /** The job threw, or its worker died twice. */
@@ -94,10 +95,10 @@ export type ToWorker =
   | { readonly kind: 'forget'; readonly digest: string }
   | { readonly kind: 'work'; readonly drop: readonly number[]; readonly jobs: readonly WorkerJob[] };
 
-/** What became of a job: its value, or why it failed. */
+/** What became of a job: its value and the time that it had of the worker [ms], or why it failed. */
 export type Outcome =
-  | { readonly id: number; readonly kind: 'run'; readonly value: Run }
-  | { readonly id: number; readonly kind: 'read'; readonly value: ReadAnswer }
+  | { readonly id: number; readonly kind: 'run'; readonly value: Run; readonly took: number }
+  | { readonly id: number; readonly kind: 'read'; readonly value: ReadAnswer; readonly took: number }
   | { readonly id: number; readonly kind: 'failed'; readonly message: string };
 
 /** From a worker: that it is there; or one message a slice with all that came of it. */

@@ -36,7 +36,7 @@ beforeEach(() => {
   startImports({
     read: (question, file, bytes, answers) =>
       new Promise((resolve) => {
-        const go = () => resolve({ status: 'done', value: readFile(file, new Uint8Array(bytes), answers) });
+        const go = () => resolve({ status: 'done', value: readFile(file, new Uint8Array(bytes), answers), took: 0 });
         waiting.push({ question, go });
       }),
     cancel: () => {},

@@ -71,7 +71,7 @@ describe('readRecordFile', () => {
     startImports({
       async read(question, file) {
         asked.push(`${question} of ${file}`);
-        return { status: 'done', value: answerOf(file, null) };
+        return { status: 'done', value: answerOf(file, null), took: 0 };
       },
       cancel: (question) => asked.push(`cancel ${question}`),
     });
