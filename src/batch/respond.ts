@@ -1,6 +1,6 @@
 import { envelopeOf } from '../core/checks/envelope.ts';
 import { endingWords } from '../core/checks/verdict.ts';
-import { measuresOf, type PreparedFrame, startRun, stepErrorOf } from '../core/doors.ts';
+import { measuresOf, type PreparedFrame, runAtAutoStep, startRun, stepErrorOf } from '../core/doors.ts';
 import type { Run, RunCase } from '../core/dynamics/run.ts';
 import { csvOf, PLAIN_CSV } from '../core/report/csv.ts';
 import { historiesTable } from '../core/report/histories.ts';
@@ -48,7 +48,7 @@ function answer(file: string, read: OpenedProject, asked: Case, folder: OutFolde
       analysis,
       motion: { interval, scale, acceleration: samplesOf(read, motion.samples) },
     };
-    const run = wholeRun(asked.prepared, runCase, histories);
+    const { run, stepError, stepWhy } = answeredRun(asked.prepared, runCase, histories);
     if (run.histories !== null) {
       folder.write(`histories-${names[m]}.csv`, csvOf(historiesTable(name, run), PLAIN_CSV));
       if (run.histories.every > 1) {
@@ -57,8 +57,9 @@ function answer(file: string, read: OpenedProject, asked: Case, folder: OutFolde
         );
       }
     }
+    if (stepWhy !== undefined) messages.push(`${file}: motion ${name}: step ${shortest(run.step)} s: ${stepWhy}`);
     if (run.ending !== null) messages.push(`${file}: motion ${name}: did not finish: ${endingWords(run)}`);
-    return { motion: name, run: { ...run, histories: null }, stepError: stepErrorAt(asked.prepared, runCase, run) };
+    return { motion: name, run: { ...run, histories: null }, stepError, ...(stepWhy === undefined ? {} : { stepWhy }) };
   });
   const source = sourceOf(read, asked, runs);
   for (const table of tablesOf(source)) folder.write(`${table.id}.csv`, csvOf(table, PLAIN_CSV));
@@ -67,6 +68,20 @@ function answer(file: string, read: OpenedProject, asked: Case, folder: OutFolde
   return folder.faults.length > 0
     ? { exit: 1, messages: [...messages, ...folder.faults] }
     : { exit: 0, output: response.envelope, messages };
+}
+
+/** The run at the step that is typed, or at the one that halving comes to. */
+function answeredRun(
+  prepared: PreparedFrame,
+  runCase: RunCase,
+  histories: boolean,
+): Pick<ReportRun, 'run' | 'stepError' | 'stepWhy'> {
+  if (runCase.analysis.step === 'auto') {
+    const { run, stepError, why } = runAtAutoStep(prepared, runCase, { histories });
+    return { run, stepError, stepWhy: why };
+  }
+  const run = wholeRun(prepared, runCase, histories);
+  return { run, stepError: stepErrorAt(prepared, runCase, run) };
 }
 
 function wholeRun(prepared: PreparedFrame, runCase: RunCase, histories: boolean): Run {
@@ -98,6 +113,11 @@ function sourceOf(read: OpenedProject, asked: Case, runs: readonly ReportRun[]):
     analysis: asked.analysis,
     limits: asked.limits,
   };
+}
+
+/** Without the last bits that a part of an interval gets wrong. */
+function shortest(seconds: number): string {
+  return String(Number(seconds.toPrecision(12)));
 }
 
 function samplesOf({ samples }: OpenedProject, digest: string): Float64Array {

@@ -1,48 +1,53 @@
-import { MOST_PARTS } from '../core/dynamics/autoStep.ts';
-import type { Analysis, StepChoice } from '../core/dynamics/run.ts';
+import { leastParts, MOST_PARTS, MOST_STEPS } from '../core/dynamics/autoStep.ts';
+import type { Analysis } from '../core/dynamics/run.ts';
 import { stabilityFault, stepOf } from '../core/dynamics/steps.ts';
 import type { Fault } from '../core/fault.ts';
 import type { PreparedFrame } from '../core/frame/prepare.ts';
 import type { MotionEntry } from './project.ts';
 
-/** Steps of one run: the ground motion at each of them takes 160 MB. */
-const MOST_STEPS = 2e7;
-
 type Timed = Pick<MotionEntry, 'name' | 'interval' | 'count'>;
 
 /**
  * What is wrong with the step for the motions alone: no whole part of an interval, or more steps than a run can hold. A step that
- * is chosen by halving begins at the whole interval.
+ * is chosen by halving is tried at the whole interval and at half of it at least.
  */
 export function partFaults(motions: readonly Timed[], { step, tail }: Analysis): Fault[] {
-  return once(motions, ({ interval, count }) => {
-    const fitted = stepOf(chosen(step, 1), interval);
-    if (!fitted.ok) return fitted.faults;
-    const { size, parts } = fitted.value;
-    const during = (count - 1) * parts;
-    if (during + tail / size <= MOST_STEPS) return [];
-    const where = during > MOST_STEPS ? 'analysis.step' : 'analysis.tail';
-    const message = `makes more than ${MOST_STEPS / 1e6} million steps of one run`;
-    const mend = during > MOST_STEPS ? 'Take a longer step' : 'Take a shorter time after the record';
-    return [{ code: 'too-many-steps', where, message, mend }];
+  return once(motions, (motion) => {
+    if (step === 'auto') return countFaults(motion, 2, tail);
+    const fitted = stepOf(step, motion.interval);
+    return fitted.ok ? countFaults(motion, fitted.value.parts, tail) : fitted.faults;
   });
 }
 
 /** Where the step, or the shortest that halving comes to, is beyond the stability limit of the scheme in this frame. */
 export function stabilityFaults(
   motions: readonly Timed[],
-  { step, method }: Analysis,
+  { step, method, tail }: Analysis,
   { modes }: PreparedFrame,
 ): Fault[] {
-  return once(motions, ({ interval }) => {
-    const fitted = stepOf(chosen(step, MOST_PARTS), interval);
+  return once(motions, (motion) => {
+    const { interval } = motion;
+    if (step === 'auto') {
+      const unstable = stabilityFault(modes, method, interval / MOST_PARTS);
+      if (unstable !== null) {
+        const message = `halving stops at ${MOST_PARTS} parts of the interval, and ${unstable.message}`;
+        return [{ ...unstable, message, mend: 'Take a scheme that is stable at any step, or type a shorter step' }];
+      }
+      return countFaults(motion, 2 * leastParts(modes, method, interval).parts, tail);
+    }
+    const fitted = stepOf(step, interval);
     const unstable = fitted.ok ? stabilityFault(modes, method, fitted.value.size) : null;
     return unstable === null ? [] : [unstable];
   });
 }
 
-function chosen(step: StepChoice, parts: number): Exclude<StepChoice, 'auto'> {
-  return step === 'auto' ? { parts } : step;
+function countFaults({ interval, count }: Timed, parts: number, tail: number): Fault[] {
+  const during = (count - 1) * parts;
+  if (during + (tail * parts) / interval <= MOST_STEPS) return [];
+  const where = during > MOST_STEPS ? 'analysis.step' : 'analysis.tail';
+  const message = `makes more than ${MOST_STEPS / 1e6} million steps of one run`;
+  const mend = during > MOST_STEPS ? 'Take a longer step' : 'Take a shorter time after the record';
+  return [{ code: 'too-many-steps', where, message, mend }];
 }
 
 /** Each fault once, with the motions it comes from. */

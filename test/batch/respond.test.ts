@@ -8,6 +8,45 @@ const respond = (folder: string, ...more: string[]) =>
   batch(folder, 'respond', 'p.swaybook.json', '--out', 'out', ...more);
 const read = (folder: string, name: string) => readFileSync(join(folder, 'out', name), 'utf8');
 
+const folderOf = (project: object) => folderWith({ 'p.swaybook.json': project });
+
+/** An isolator with a damper, one storey of each law that yields, and an elastic one. */
+const yieldingStoreys = [
+  {
+    name: 'Isolators',
+    height: 1.5,
+    mass: 4e5,
+    stiffness: 6e7,
+    law: { kind: 'bilinear', strength: 1e6, hardening: 0.3 },
+    damper: { coefficient: 2e5, exponent: 0.5 },
+    role: 'isolator',
+  },
+  { name: 'A', height: 4, mass: 2e5, stiffness: 2e8, law: { kind: 'peak-oriented', strength: 4e5, hardening: 0.05 } },
+  {
+    name: 'B',
+    height: 4,
+    mass: 2e5,
+    stiffness: 2e8,
+    law: { kind: 'bouc-wen', strength: 4e5, hardening: 0.05, exponent: 2, beta: 0.6, gamma: 0.4 },
+  },
+  { name: 'C', height: 4, mass: 2e5, stiffness: 1e8, law: { kind: 'flag', strength: 2e5, hardening: 0.1, ratio: 0.8 } },
+  { name: 'D', height: 4, mass: 2e5, stiffness: 2e8, law: { kind: 'elastic' } },
+];
+const yieldingFrame = {
+  storeys: yieldingStoreys,
+  damping: { kind: 'rayleigh', modes: [1, 3], ratios: [0.05, 0.05], stiffness: 'tangent' },
+  pDelta: true,
+};
+
+/** The frame with its stiffnesses so many times as large. */
+const stiffer = (frame: { storeys: object[] }, times: number) => ({
+  ...frame,
+  storeys: frame.storeys.map((storey) => ({
+    ...storey,
+    stiffness: times * (storey as { stiffness: number }).stiffness,
+  })),
+});
+
 describe('[BATCH-4] respond', () => {
   test('writes the response file and the tables, and prints the envelope', () => {
     const folder = folderWith({ 'p.swaybook.json': projectOf() });
@@ -67,6 +106,73 @@ describe('[BATCH-4] respond', () => {
     expect(JSON.parse(stdout)).toMatchObject({ incomplete: ['Motion A'], storeys: [{ mean: null }, { mean: null }] });
   });
 
+  test('a frame made to collapse under its own weight: the storey and the time are named', () => {
+    const { frame } = projectOf() as { frame: { storeys: object[] } };
+    // After yield the ground storey has 0.5 % of its stiffness, less than P/h takes away.
+    const storeys = [
+      { ...frame.storeys[0], law: { kind: 'peak-oriented', strength: 4e5, hardening: 0.005 } },
+      frame.storeys[1],
+    ];
+    const [motion] = (projectOf() as { motions: object[] }).motions;
+    const project = projectOf({ frame: { ...frame, storeys }, motions: [{ ...motion, scale: 3 }] });
+    const folder = folderOf(project);
+    const { status, stdout, lines } = respond(folder);
+    expect(status).toBe(0);
+    expect(lines).toHaveLength(1);
+    expect(lines[0]).toMatch(
+      /did not finish: storey 1 passed the drift at which a run is stopped at \d\.\d\d s, drift 10\.\d %$/,
+    );
+    const response = JSON.parse(read(folder, 'response.json'));
+    const [run] = response.runs;
+    expect(run).toMatchObject({ completed: false, stepError: null, reason: { storey: 1 } });
+    expect(run.reason.time).toBeGreaterThan(0);
+    expect(run.reason.time).toBeLessThan(run.step * run.steps);
+    expect(run.storeys[0].peakDriftRatio).toBeGreaterThan(0.1);
+    expect(JSON.parse(stdout).incomplete).toEqual(['Motion A']);
+    for (const storey of JSON.parse(stdout).storeys) {
+      expect(storey).toMatchObject({ mean: null, median: null, max: null, ratio: null, governing: null });
+    }
+    const still = projectOf({ frame: { ...frame, storeys, pDelta: false }, motions: [motion] });
+    expect(respond(folderOf(still)).lines).toEqual([]);
+  });
+
+  test('every law, a damper and an isolator, at a step chosen by halving', () => {
+    const { analysis } = projectOf() as { analysis: object };
+    const project = projectOf({
+      version: 2,
+      frame: yieldingFrame,
+      analysis: { ...analysis, step: 'auto' },
+      limits: { drift: 0.02, source: 'the clause', isolator: 0.3 },
+    });
+    const folder = folderOf(project);
+    const { status, lines } = respond(folder, '--histories');
+    expect(status).toBe(0);
+    expect(lines).toHaveLength(1);
+    expect(lines[0]).toMatch(
+      /^p\.swaybook\.json: motion Motion A: step 0\.0\d+ s: (the whole|\d+ parts of the) interval of 0\.02 s, /,
+    );
+    const { runs, envelope } = JSON.parse(read(folder, 'response.json'));
+    const [run] = runs;
+    expect(run.stepError).toBeLessThan(0.01);
+    expect(Math.log2(0.02 / run.step) % 1).toBeCloseTo(0, 9);
+    const ductile = run.storeys.map((storey: { ductility?: number }) => storey.ductility !== undefined);
+    expect(ductile).toEqual([true, true, true, true, false]);
+    expect(
+      Math.max(...run.storeys.slice(1, 4).map((storey: { ductility: number }) => storey.ductility)),
+    ).toBeGreaterThan(1);
+    const { input, kinetic, strain, damping, dampers, hysteretic, imbalance } = run.energy;
+    expect(dampers).toBeGreaterThan(0);
+    expect(hysteretic).toBeGreaterThan(0);
+    expect(Math.abs(input - kinetic - strain - damping - dampers - hysteretic) / input).toBeLessThan(0.01);
+    expect(imbalance).toBeLessThan(0.01);
+    expect(envelope.storeys[0].ratio).toBe(envelope.floors[0].displacement.max / 0.3);
+    expect(envelope.storeys[0].limit).toBe(0.3);
+    const [heads, row] = read(folder, 'energy.csv').split('\r\n');
+    expect(heads).toContain(',Why this step,');
+    expect(row).toContain('interval of 0.02 s');
+    expect(read(folder, 'histories-Motion-A.csv').split('\r\n')[0]).toContain(',Damper force of storey 1 [N],');
+  });
+
   test('`npm run --silent batch` is the same command', () => {
     const folder = folderWith({ 'p.swaybook.json': projectOf() });
     const args = [
@@ -121,11 +227,45 @@ describe('[BATCH-5] a project at fault ends with 1, all its faults listed, and w
     }
   });
 
-  test('what a later version brings is refused with a word', () => {
-    const { frame } = projectOf() as { frame: { storeys: object[] } };
-    const storeys = [{ ...frame.storeys[0], law: { kind: 'bilinear', strength: 1e6, hardening: 0.02 } }];
-    const lines = faultsOf(projectOf({ frame: { ...frame, storeys, damping: { kind: 'none' } } }));
-    expect(lines).toMatch(/frame\.storeys\[0\]\.law.*not available yet/);
+  test('numbers that no law, damper or isolator takes, each at its cell with the limit named', () => {
+    const law = (i: number, kind: object) => ({ ...yieldingStoreys[i], law: kind });
+    const storeys = [
+      { ...yieldingStoreys[0], damper: { coefficient: -1, exponent: 0.1 } },
+      law(1, { kind: 'peak-oriented', strength: 0, hardening: 1 }),
+      law(2, { kind: 'bouc-wen', strength: 1e6, hardening: 0.02, exponent: 0.5, beta: 0.4, gamma: 0.6 }),
+      { ...law(3, { kind: 'flag', strength: -1, hardening: 0.1, ratio: 0.95 }), role: 'isolator' },
+    ];
+    const limits = { drift: 0.02, source: 'the clause', isolator: 0 };
+    const lines = faultsOf(projectOf({ frame: { ...yieldingFrame, storeys }, limits }));
+    for (const fault of [
+      'frame.storeys[0].damper.coefficient: is -1, must be at least 0',
+      'frame.storeys[0].damper.exponent: is 0.1, must be at least 0.15',
+      'frame.storeys[1].law.strength: is 0, must be above 0',
+      'frame.storeys[1].law.hardening: is 1, must be below 1',
+      'frame.storeys[2].law.exponent: is 0.5, must be at least 1',
+      'frame.storeys[2].law.beta: is 0.4, must be at least 0.5',
+      'frame.storeys[3].law.strength: is -1, must be above 0',
+      'frame.storeys[3].law.ratio: is 0.95, must be at most 1 - hardening = 0.9',
+      'frame.storeys[3].role: only the first storey can be an isolator',
+      'limits.isolator: is 0, must be above 0',
+    ]) {
+      expect(lines).toContain(fault);
+    }
+  });
+
+  test('a frame that cannot carry its gravity, and a step that its scheme cannot take, even by halving', () => {
+    const { frame, analysis } = projectOf() as { frame: { storeys: object[] }; analysis: object };
+    const soft = [frame.storeys[0], { ...frame.storeys[1], stiffness: 9e5 }];
+    expect(faultsOf(projectOf({ frame: { ...frame, storeys: soft } }))).toMatch(
+      /frame\.storeys\[1\]\.stiffness: storey 2 is unstable under gravity: .* P\/h = 1\.035e\+6 N\/m/,
+    );
+    const explicit = { ...analysis, method: { kind: 'central-difference' } };
+    expect(faultsOf(projectOf({ analysis: { ...explicit, step: 0.1 / 5 }, frame: stiffer(frame, 1e3) }))).toMatch(
+      /analysis\.step: a step of 0\.02 s is beyond the stability limit of 0\.00\d+ s/,
+    );
+    expect(faultsOf(projectOf({ analysis: { ...explicit, step: 'auto' }, frame: stiffer(frame, 1e5) }))).toMatch(
+      /analysis\.step: halving stops at 64 parts .* stability limit of 0\.000\d+ s/,
+    );
   });
 
   test('records that are not there, and a unit that contradicts the file', () => {

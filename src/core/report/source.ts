@@ -37,6 +37,8 @@ export interface ReportRun {
   readonly run: Run;
   /** Estimated error of the peak drifts from the step [-]; null where it is not known. */
   readonly stepError: number | null;
+  /** Why the step is what it is, in words, where it was chosen by halving. */
+  readonly stepWhy?: string;
 }
 
 /** Whether a storey can yield: it then has a yield drift, and a ductility. */

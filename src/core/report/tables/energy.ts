@@ -23,6 +23,9 @@ export function energyBalance({ prepared, runs }: ReportSource): Table {
       column('hysteretic', 'Hysteretic', 'energy', ({ run }) => run.energy.hysteretic),
       column('imbalance', 'Largest imbalance', 'percent', ({ run }) => run.energy.imbalance),
       column('step', 'Step', 'time', ({ run }) => run.step),
+      ...(runs.some(({ stepWhy }) => stepWhy !== undefined)
+        ? [column('stepWhy', 'Why this step', 'text', ({ stepWhy }) => stepWhy ?? null)]
+        : []),
       column('steps', 'Steps', 'count', ({ run }) => run.steps),
       column('solves', 'Solves of all steps', 'count', ({ run }) => run.marching.solves),
       column('mostSolves', 'Most solves of one step', 'count', ({ run }) => run.marching.mostSolves),
