@@ -4,10 +4,14 @@ import { caseOf } from '../../src/document/case.ts';
 import {
   addMotions,
   addStorey,
+  clearDamper,
   growTo,
   makeEqualStoreys,
   moveStorey,
   removeStorey,
+  setDamper,
+  setLaw,
+  setRole,
   useMotion,
 } from '../../src/document/edits.ts';
 import { emptyProject } from '../../src/document/empty.ts';
@@ -107,6 +111,57 @@ describe('[DOC-4] the case of a document', () => {
   });
 });
 
+describe('[DOC-4] a step chosen by halving', () => {
+  const auto = (project: Project): Project => ({ ...project, analysis: { ...project.analysis, step: 'auto' } });
+  test('passes as it is: the run is asked with the parts that it comes to', () => {
+    const made = caseOf(auto(addMotions(three(), [entry, { ...entry, interval: 0.013 }])));
+    expect(made.ok && made.value.analysis.step).toBe('auto');
+  });
+  test('is refused where even the most parts are beyond the stability limit, and where they are more steps than are held', () => {
+    const project = auto(addMotions(three(), [entry]));
+    const explicit = (stiffness: number): Project => {
+      const stiff = writeAt(project, 'frame.storeys[0].stiffness', stiffness);
+      return { ...stiff, analysis: { ...stiff.analysis, method: { kind: 'central-difference' } } };
+    };
+    // limit about 2 / sqrt(k / m): 0.0006 s is above 0.02 / 64 s, 0.0002 s is not
+    expect(faults(explicit(2e12))).toEqual([]);
+    expect(faults(explicit(2e13))).toEqual(['analysis.step beyond-stability-limit']);
+    // Mode 2 (0.16 s) wants 4 parts of 0.02 s for its 20 steps, so a run at 8 parts is made: 2e7 steps are 5e4 s.
+    expect(faults(writeAt(project, 'analysis.tail', 4.9e4))).toEqual([]);
+    expect(faults(writeAt(project, 'analysis.tail', 5.1e4))).toEqual(['analysis.tail too-many-steps']);
+    // Mode 3, a third of the mass on a stiff storey, wants the most parts, 64: 128 x 50 steps a second.
+    expect(faults(writeAt(explicit(2e12), 'analysis.tail', 3.1e3))).toEqual([]);
+    expect(faults(writeAt(explicit(2e12), 'analysis.tail', 3.2e3))).toEqual(['analysis.tail too-many-steps']);
+    // Whatever the frame, the whole interval and its half are run.
+    const open = writeAt(project, 'frame.storeys[0].mass', null);
+    expect(faults(writeAt(open, 'analysis.tail', 1.9e5))).toEqual(['frame.storeys[0].mass not-typed']);
+    expect(faults(writeAt(open, 'analysis.tail', 2.1e5))).toContain('analysis.tail too-many-steps');
+  });
+});
+
+describe('[DOC-4] an isolator', () => {
+  test('stands under the first storey only', () => {
+    expect(faults(setRole(three(), 0, 'isolator'))).toEqual([]);
+    const floating = setRole(three(), 2, 'isolator');
+    expect(faults(floating)).toEqual(['frame.storeys[2].role isolator-not-first']);
+    expect(faults(moveStorey(floating, 2, 0))).toEqual([]);
+    expect(setRole(floating, 2, 'storey')).toEqual(three());
+  });
+  test('its copies are storeys, and a frame of equal storeys is not made of it', () => {
+    const project = setRole(writeAt(three(), 'frame.storeys[1].mass', 3e5), 0, 'isolator');
+    expect(addStorey(project, 1, 0).frame.storeys.map(({ role }) => role)).toEqual([
+      'isolator',
+      undefined,
+      undefined,
+      undefined,
+    ]);
+    expect(makeEqualStoreys(project, 2, 3).frame.storeys.map(({ role, mass }) => [role, mass])).toEqual([
+      [undefined, 3e5],
+      [undefined, 3e5],
+    ]);
+  });
+});
+
 describe('[DOC-9] numbers that no building has', () => {
   test('whatever numbers stand in the cells, there is a case or there are faults, never a crash', () => {
     let [whole, refused] = [0, 0];
@@ -183,5 +238,76 @@ describe('[DOC-5] edits', () => {
     expect('gravity' in writeAt(loaded, 'frame.storeys[1].gravity', null).frame.storeys[1]).toBe(false);
     expect(() => fieldOf('frame.colour')).toThrow(RangeError);
     expect(() => writeAt(project, 'frame.storeys[9].mass', 1)).toThrow(RangeError);
+  });
+});
+
+describe('[DOC-10] laws and dampers by edits', () => {
+  const kinds = ['elastic', 'bilinear', 'peak-oriented', 'bouc-wen', 'flag'] as const;
+  test.each(kinds)('%s runs as it is given, from every other law', (kind) => {
+    for (const before of kinds) {
+      const project = setLaw(setLaw(three(), [0, 1, 2], before), [0, 2], kind);
+      expect(faults(project)).toEqual([]);
+      expect(project.frame.storeys.map(({ law }) => law.kind)).toEqual([kind, before, kind]);
+    }
+  });
+  test('a storey starts to yield at 0.5 % of its height, two figures; strength and hardening are kept from then on', () => {
+    let project = setLaw(writeAt(three(), 'frame.storeys[1].stiffness', 4.55e8), [1], 'peak-oriented');
+    expect(project.frame.storeys[1].law).toEqual({ kind: 'peak-oriented', strength: 8.2e6, hardening: 0.03 });
+    project = writeAt(writeAt(project, 'frame.storeys[1].law.strength', 9.03e6), 'frame.storeys[1].law.hardening', 0.6);
+    expect(setLaw(project, [1], 'bilinear').frame.storeys[1].law).toEqual({
+      kind: 'bilinear',
+      strength: 9.03e6,
+      hardening: 0.6,
+    });
+    // More than 1 - hardening would not re-centre.
+    const flag = setLaw(project, [1], 'flag');
+    expect(flag.frame.storeys[1].law).toEqual({ kind: 'flag', strength: 9.03e6, hardening: 0.6, ratio: 0.4 });
+    expect(setLaw(flag, [1], 'bouc-wen').frame.storeys[1].law).toMatchObject({ exponent: 2, beta: 0.5, gamma: 0.5 });
+    const typed = writeAt(flag, 'frame.storeys[1].law.ratio', 0.2);
+    expect(setLaw(typed, [1], 'flag')).toEqual(typed);
+  });
+  test('without a stiffness there is no strength to start from, and the cell says so', () => {
+    const bare = setLaw(writeAt(three(), 'frame.storeys[0].stiffness', null), [0], 'bilinear');
+    expect(faults(bare)).toEqual(['frame.storeys[0].stiffness not-typed', 'frame.storeys[0].law.strength not-typed']);
+  });
+  test('a damper comes with a start near 5 % of critical, keeps what is typed, and goes', () => {
+    const project = setDamper(three(), [1]);
+    expect(project.frame.storeys[1].damper).toEqual({ coefficient: 9.5e5, exponent: 1 });
+    expect(faults(project)).toEqual([]);
+    const typed = writeAt(project, 'frame.storeys[1].damper.exponent', 0.3);
+    expect(setDamper(typed, [1, 2]).frame.storeys.map(({ damper }) => damper?.exponent)).toEqual([undefined, 0.3, 1]);
+    expect(setDamper(typed, [1], { coefficient: 5, exponent: 2 }).frame.storeys[1].damper?.coefficient).toBe(5);
+    expect(clearDamper(typed, [1])).toEqual(three());
+  });
+  test('cells make and take out their part: a damper by its coefficient, a yielding storey by its strength', () => {
+    const damper = (value: number | null, project = three()) =>
+      writeAt(project, 'frame.storeys[0].damper.coefficient', value);
+    expect(damper(1e6).frame.storeys[0].damper).toEqual({ coefficient: 1e6, exponent: 1 });
+    expect(damper(null, damper(1e6))).toEqual(three());
+    const half = writeAt(three(), 'frame.storeys[0].damper.exponent', 0.5);
+    expect(faults(half)).toEqual(['frame.storeys[0].damper.coefficient not-typed']);
+    expect(writeAt(three(), 'frame.storeys[0].damper.exponent', null)).toEqual(three());
+    const strong = writeAt(three(), 'frame.storeys[0].law.strength', 2e6);
+    expect(strong.frame.storeys[0].law).toEqual({ kind: 'bilinear', strength: 2e6, hardening: 0.03 });
+    expect(writeAt(three(), 'frame.storeys[0].law.strength', null)).toEqual(three());
+    expect(readAt(three(), 'frame.storeys[0].law.strength')).toBeNull();
+    for (const path of ['law.ratio', 'law.kind', 'damper.stroke']) {
+      expect(() => writeAt(strong, `frame.storeys[0].${path}`, 1), path).toThrow(RangeError);
+    }
+    expect(() => writeAt(strong, 'frame.storeys[7].law.strength', 1)).toThrow(RangeError);
+  });
+  test('every cell has a label and a hint with its usual range', () => {
+    const said = (path: string) => [fieldOf(path).label(three()), fieldOf(path).hint('si')];
+    expect(said('frame.storeys[1].law.strength')[0]).toBe('Storey 2, strength');
+    expect(said('frame.storeys[1].law.hardening')).toEqual([
+      'Storey 2, hardening',
+      'stiffness after yield over the initial one, usually 0 to 10 %',
+    ]);
+    expect(said('frame.storeys[1].damper.coefficient')[0]).toBe('Storey 2, damper force at 1 m/s');
+    expect(said('limits.isolator')[1]).toBe(
+      'of the isolator row; not compared where left empty, usually 200 to 600 mm',
+    );
+    const limited = writeAt(three(), 'limits.isolator', 0.4);
+    expect('isolator' in writeAt(limited, 'limits.isolator', null).limits).toBe(false);
   });
 });

@@ -2,7 +2,7 @@ import fc from 'fast-check';
 import { describe, expect, test } from 'vitest';
 import { readQuantity } from '../../src/core/units/read.ts';
 import { caseOf } from '../../src/document/case.ts';
-import { makeEqualStoreys, removeStorey } from '../../src/document/edits.ts';
+import { addStorey, makeEqualStoreys, removeStorey, setDamper, setLaw, setRole } from '../../src/document/edits.ts';
 import { emptyProject } from '../../src/document/empty.ts';
 import { fieldOf, readAt, writeAt } from '../../src/document/fields.ts';
 import { readProject, readProjectOnItsWay, writeProject } from '../../src/document/file.ts';
@@ -21,6 +21,15 @@ const CELLS = [
   'analysis.method.beta',
   'limits.drift',
   'limits.factor',
+  'limits.isolator',
+  'frame.storeys[0].law.strength',
+  'frame.storeys[1].law.hardening',
+  'frame.storeys[1].law.exponent',
+  'frame.storeys[1].law.beta',
+  'frame.storeys[1].law.gamma',
+  'frame.storeys[2].law.ratio',
+  'frame.storeys[0].damper.coefficient',
+  'frame.storeys[0].damper.exponent',
 ];
 
 function three(): Project {
@@ -29,6 +38,8 @@ function three(): Project {
     project = writeAt(project, `frame.storeys[${i}].mass`, 2e5);
     project = writeAt(project, `frame.storeys[${i}].stiffness`, 2e8);
   }
+  project = setLaw(setLaw(setLaw(project, [0], 'bilinear'), [1], 'bouc-wen'), [2], 'flag');
+  project = setDamper(setRole(project, 0, 'isolator'), [0]);
   return {
     ...project,
     frame: { ...project.frame, damping: { kind: 'rayleigh', modes: [1, 3], ratios: [0.05, 0.05] } },
@@ -87,6 +98,9 @@ describe('[DOC-8] a document on its way', () => {
     const lost = removeStorey(three(), 0);
     expect(reopened(lost)).toEqual(lost);
     expect(reopened(removeStorey(lost, 0))).toEqual(removeStorey(lost, 0));
+    const lifted = addStorey(three(), 0, 1);
+    expect(placesOf(lifted)).toEqual(['frame.storeys[1].role']);
+    expect(reopened(lifted)).toEqual(lifted);
   });
 
   test('the batch command refuses it with the list that the browser shows', () => {
