@@ -1,4 +1,4 @@
-/** Milliseconds a storey-step on the whole pool before anything was measured: about 10 ns on each of two workers. */
+/** Milliseconds a storey-step of a linear frame on the whole pool before anything was measured: about 10 ns on each of two workers. */
 const FIRST_RATE = 5e-6;
 /** Rounds of fewer storey-steps measure the messages rather than the march. */
 const MEASURABLE = 5e5;
@@ -18,4 +18,14 @@ export function expectedTime(): Expected {
       if (weight >= MEASURABLE) rate = (rate + took / weight) / 2;
     },
   };
+}
+
+/** One a kind of frame: what a storey that yields costs says nothing about one that does not. */
+export interface ExpectedByKind {
+  readonly linear: Expected;
+  readonly nonlinear: Expected;
+}
+
+export function expectedTimes(): ExpectedByKind {
+  return { linear: expectedTime(), nonlinear: expectedTime() };
 }

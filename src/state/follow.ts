@@ -1,18 +1,22 @@
-import { stepErrorOf } from '../core/doors.ts';
 import type { Run } from '../core/dynamics/run.ts';
 import type { Fault } from '../core/fault.ts';
 import { type Case, caseOf } from '../document/case.ts';
 import type { Project } from '../document/project.ts';
-import type { Engine, Reply, RunRequest } from '../engine/protocol.ts';
-import { answersOf } from './answer.ts';
+import type { Engine } from '../engine/protocol.ts';
+import { isNonlinear } from '../engine/weight.ts';
+import { answersOf, type FoundRun, stepErrorsOf } from './answer.ts';
 import { type MotionRun, type ResultsState, resultsStore } from './answers.ts';
+import { behindTheAnswer } from './behind.ts';
 import { changedSince } from './changed.ts';
 import { chosenMotionOf } from './chosen.ts';
 import { documentStore, effectiveProject } from './document.ts';
-import { expectedTime } from './expected.ts';
-import { type Ask, atHalfStep, type Question, questionOf, withHistories } from './question.ts';
+import { expectedTimes } from './expected.ts';
+import { jobsWith } from './jobs.ts';
+import { lendingTo } from './lending.ts';
+import { type Ask, type Question, questionOf, type RunAsk, withHistories } from './question.ts';
 import { recentRuns } from './recent.ts';
 import { sessionStore } from './session.ts';
+import { stepSearch } from './stepSearch.ts';
 import { timer } from './timer.ts';
 
 /** Waiting times [ms]; the tests choose their own. */
@@ -32,8 +36,6 @@ export interface Pace {
 
 const PACE: Pace = { quick: 50, pause: 120, long: 3000, shown: 400, evidence: 200, typing: 800 };
 
-const EVIDENCE_PRIORITY = 10;
-
 export interface Follower {
   runNow(): void;
   stop(): void;
@@ -50,10 +52,11 @@ export function follow(
   pace: Pace = PACE,
 ): Follower {
   const runs = recentRuns<Run>();
-  const errors = recentRuns<number>();
-  const expected = expectedTime();
-  /** Jobs with the engine: name of the job -> key of the run, and how far it is. */
-  const underWay = new Map<string, { readonly key: string; share: number }>();
+  const search = stepSearch(runs);
+  const times = expectedTimes();
+  const jobs = jobsWith(engine, tick);
+  const lending = lendingTo(engine, samplesOf);
+  const behind = behindTheAnswer({ jobs, runs, search, lending, roundOver });
   const failures = new Map<string, Fault>();
   let project: Project | null = null;
   let question: Question | null = null;
@@ -74,6 +77,7 @@ export function follow(
     timers.evidence.clear();
     timers.pause.clear();
     failures.clear();
+    search.forgetFailures();
     const nothing = now.frame.storeys.length === 0 || !now.motions.some((motion) => motion.used);
     question = result.ok && !nothing ? questionOf(result.value) : null;
     modes = result.ok && now.frame.storeys.length > 0 ? result.value.prepared.modes : null;
@@ -86,12 +90,24 @@ export function follow(
     if (question && !publish()) plan(question);
   }
 
+  /** The run of a motion that is shown: at its step, or at the one that the search for a step has come to. */
+  function shownOf(ask: Ask): RunAsk {
+    return ask.at(search.shown(ask));
+  }
+
+  function missingOf({ asks }: Question): { readonly ask: Ask; readonly one: RunAsk }[] {
+    return asks.map((ask) => ({ ask, one: shownOf(ask) })).filter(({ one }) => !runs.has(one.key));
+  }
+
+  function expected({ case: { frame } }: Question) {
+    return times[isNonlinear(frame) ? 'nonlinear' : 'linear'];
+  }
+
   /** Runs at once, after a pause in the typing, or not before F9. */
   function plan(asking: Question): void {
-    const missing = asking.asks.filter((ask) => !runs.has(ask.key));
-    const time = expected.of(missing.reduce((sum, ask) => sum + ask.weight, 0));
+    const time = expected(asking).of(missingOf(asking).reduce((sum, { one }) => sum + one.weight, 0));
     if (time > pace.long && resultsStore.getState().answers) {
-      cancelAll();
+      jobs.keep(() => false);
       rest({ status: 'stale', waits: true, faults: [] });
       return;
     }
@@ -103,7 +119,7 @@ export function follow(
     else timers.pause.set(pace.pause, () => submit(asking));
   }
 
-  function begin({ asks }: Question): void {
+  function begin(asking: Question): void {
     if (startedAt === null) {
       startedAt = Date.now();
       timers.shown.set(pace.shown, () => {
@@ -111,53 +127,46 @@ export function follow(
         showProgress();
       });
     }
-    const progress = { done: doneOf(asks), of: asks.length, startedAt };
+    const progress = { done: doneOf(asking), of: asking.asks.length, startedAt };
     set({ status: 'running', waits: false, faults: [], changed: changedSince(), progress, modes });
   }
 
   function submit(asking: Question): void {
-    const missing = asking.asks.filter((ask) => !runs.has(ask.key));
-    const lost = missing.filter((ask) => !ready(ask));
+    const missing = missingOf(asking);
+    const lost = missing.filter(({ one }) => !lending.ready(one.request.motion.samples));
     if (lost.length > 0) {
-      rest({ status: 'stale', faults: lost.map(samplesLost) });
+      rest({ status: 'stale', faults: lost.map(({ ask }) => samplesLost(ask)) });
       return;
     }
-    asked = { at: performance.now(), weight: missing.reduce((sum, ask) => sum + ask.weight, 0) };
+    asked = { at: performance.now(), weight: missing.reduce((sum, { one }) => sum + one.weight, 0) };
     const chosen = chosenMotionOf(documentStore.getState(), sessionStore.getState(), resultsStore.getState());
     // Histories come after the answers: a run that keeps them takes twice as long, and only the panels wait for it.
-    for (const ask of missing) send(`run ${ask.motion}`, ask, ask.request, 0, (run) => take(ask, run));
+    for (const { ask, one } of missing) {
+      jobs.send(
+        `run ${ask.motion}`,
+        one,
+        0,
+        (run) => take(one, run),
+        (why) => failed(ask, one, why),
+      );
+    }
     const first = asking.asks.find((ask) => ask.motion === chosen);
-    if (first && runs.has(first.key)) askHistories(first);
+    if (first && runs.has(shownOf(first).key)) askHistories(first);
   }
 
-  /** Sends a job, unless the same one is under way; what comes for a question that has passed is kept but shows nowhere. */
-  function send(job: string, ask: Ask, request: RunRequest, priority: number, done: (run: Run) => void): void {
-    if (underWay.get(job)?.key === ask.key) return;
-    const own = { key: ask.key, share: 0 };
-    underWay.set(job, own);
-    const onProgress = (share: number) => {
-      own.share = share;
-      tick();
-    };
-    void engine.run(job, request, { priority, onProgress }).then((reply: Reply<Run>) => {
-      if (underWay.get(job) === own) underWay.delete(job);
-      if (reply.status === 'done') done(reply.value);
-      else if (reply.status === 'failed') failed(ask, reply.message);
-    });
-  }
-
-  function take(ask: Ask, run: Run): void {
-    if (run.histories) full = { key: ask.key, run };
-    runs.set(ask.key, run.histories ? { ...run, histories: null } : run);
+  /** What comes for a question that has passed is kept but shows nowhere. */
+  function take({ key }: RunAsk, run: Run): void {
+    if (run.histories) full = { key, run };
+    runs.set(key, run.histories ? { ...run, histories: null } : run);
     tick();
     settle();
   }
 
-  function failed(ask: Ask, message: string): void {
-    failures.set(ask.key, {
+  function failed({ motion }: Ask, { key }: RunAsk, message: string): void {
+    failures.set(key, {
       code: 'run-failed',
-      where: `motions.${ask.motion}`,
-      message: `the run under ${ask.motion} failed: ${message}`,
+      where: `motions.${motion}`,
+      message: `the run under ${motion} failed: ${message}`,
       mend: 'Run it again with F9; keep the project in a file first',
     });
     settle();
@@ -166,41 +175,57 @@ export function follow(
   /** The question is over when each of its runs is in or has failed. */
   function settle(): void {
     if (!question || resultsStore.getState().status !== 'running') return;
-    const open = question.asks.filter((ask) => !runs.has(ask.key) && !failures.has(ask.key));
+    const open = missingOf(question).filter(({ one }) => !failures.has(one.key));
     if (open.length > 0 || publish()) return;
-    const faults = question.asks.flatMap((ask) => failures.get(ask.key) ?? []);
+    const faults = question.asks.flatMap((ask) => failures.get(shownOf(ask).key) ?? []);
     if (faults.length > 0) rest({ status: 'stale', waits: true, faults });
   }
 
   /** The whole answer in one update; false while a run is missing. The histories of the chosen motion may still be on their way. */
   function publish(): boolean {
     if (!question) return false;
-    const found: MotionRun[] = [];
-    for (const { motion, key } of question.asks) {
-      const run = runs.get(key);
-      if (!run) return false;
-      found.push({ motion, run });
-    }
-    const stepErrors = errorsOf(question);
+    const found = foundOf(question);
+    if (!found) return false;
     const took = asked.weight > 0 ? performance.now() - asked.at : (resultsStore.getState().answers?.took ?? 0);
-    const answers = answersOf(question, { runs: found, stepErrors, samplesOf, took, at: Date.now() });
+    const answers = answersOf(question, { runs: found, samplesOf, took, at: Date.now() });
     const ask = chosenAsk(answers.envelope);
-    expected.learn(asked.weight, took);
+    expected(question).learn(asked.weight, took);
     asked = { at: 0, weight: 0 };
+    const stepErrors = stepErrorsOf(found);
     rest({ status: 'current', answers, faults: [], changed: null, stepErrors, chosen: chosenRun(ask) });
     forgetMotions(question.case);
     if (ask) askHistories(ask);
-    timers.evidence.set(documentStore.getState().draft === null ? pace.evidence : pace.typing, gatherEvidence);
+    gatherSoon();
     return true;
+  }
+
+  /** All runs of the question with what is known behind them; null while one is missing. */
+  function foundOf({ asks }: Question): FoundRun[] | null {
+    const found: FoundRun[] = [];
+    for (const ask of asks) {
+      const run = runs.get(shownOf(ask).key);
+      if (!run) return null;
+      const confirmed = search.confirmed(ask);
+      const { stepError = null, half = null } = confirmed ?? {};
+      found.push({ motion: ask.motion, run, stepError, half, auto: search.auto(ask) });
+    }
+    return found;
   }
 
   /** False where they cannot come: the histories failed before. */
   function askHistories(ask: Ask): boolean {
-    if (full?.key === ask.key || failures.has(ask.key) || !ready(ask)) return false;
-    send('histories', ask, withHistories(ask), 0, (run) => {
-      take(ask, run);
-      chosenChanged();
-    });
+    const one = shownOf(ask);
+    if (full?.key === one.key || failures.has(one.key) || !lending.ready(one.request.motion.samples)) return false;
+    jobs.send(
+      'histories',
+      { ...one, request: withHistories(one.request) },
+      0,
+      (run) => {
+        take(one, run);
+        chosenChanged();
+      },
+      (why) => failed(ask, one, why),
+    );
     return true;
   }
 
@@ -211,54 +236,39 @@ export function follow(
   }
 
   function chosenRun(ask: Ask | undefined): MotionRun | null {
-    return ask && full?.key === ask.key ? { motion: ask.motion, run: full.run } : null;
+    return ask && full?.key === shownOf(ask).key ? { motion: ask.motion, run: full.run } : null;
   }
 
   /** Another motion was chosen, or its histories came. */
   function chosenChanged(): void {
     const { status, chosen } = resultsStore.getState();
-    if (status !== 'current') return;
+    if (status !== 'current' || !question) return;
     const ask = chosenAsk();
     const run = chosenRun(ask);
     if (run) {
       if (run.run !== chosen?.run || run.motion !== chosen.motion) set({ chosen: run });
-    } else if (ask && askHistories(ask) && expected.of(ask.weight) > pace.quick) {
+    } else if (ask && askHistories(ask) && expected(question).of(shownOf(ask).weight) > pace.quick) {
       set({ chosen: null });
     }
   }
 
-  /** Half-step runs behind the answer, for the step errors. */
-  function gatherEvidence(): void {
-    for (const ask of question?.asks ?? []) {
-      const run = runs.get(ask.key);
-      const half = atHalfStep(ask);
-      if (!run || run.ending || !half || errors.has(ask.key) || !ready(ask)) continue;
-      send(`half ${ask.motion}`, ask, half, EVIDENCE_PRIORITY, (finer) => {
-        errors.set(ask.key, finer.ending ? Number.NaN : stepErrorOf(run, finer));
-        evidenceCame();
-      });
-    }
+  function gatherSoon(): void {
+    const editing = documentStore.getState().draft !== null;
+    timers.evidence.set(editing ? pace.typing : pace.evidence, () => question && behind.gather(question, editing));
   }
 
-  function evidenceCame(): void {
+  /** What a round behind the answer has brought, in one update: step errors, and finer runs where the search went on. */
+  function roundOver(): void {
     const { status, answers } = resultsStore.getState();
     if (status !== 'current' || !question || !answers) return;
-    const stepErrors = errorsOf(question);
-    if (!stepErrors) return;
-    const { runs: found, took, at } = answers;
-    set({ stepErrors, answers: answersOf(question, { runs: found, stepErrors, samplesOf, took, at }) });
-  }
-
-  /** Step error a motion, once all that ran to their end have one. */
-  function errorsOf({ asks }: Question): Readonly<Record<string, number>> | null {
-    const known: Record<string, number> = {};
-    for (const { key, motion } of asks) {
-      if (runs.get(key)?.ending) continue;
-      const error = errors.get(key);
-      if (error === undefined) return null;
-      known[motion] = error;
-    }
-    return known;
+    const found = foundOf(question);
+    if (!found) return;
+    const { took, at } = answers;
+    const now = answersOf(question, { runs: found, samplesOf, took, at });
+    const ask = chosenAsk(now.envelope);
+    set({ stepErrors: stepErrorsOf(found), answers: now, chosen: chosenRun(ask) });
+    if (ask) askHistories(ask);
+    behind.gather(question, documentStore.getState().draft !== null);
   }
 
   /** Nothing is under way any more: the state in which the store rests. */
@@ -277,51 +287,26 @@ export function follow(
 
   function showProgress(): void {
     if (!question || startedAt === null) return;
-    const arrived = question.asks.flatMap(({ motion, key }) => {
-      const run = runs.get(key);
-      return run ? [{ motion, run }] : [];
+    const arrived = question.asks.flatMap((ask) => {
+      const run = runs.get(shownOf(ask).key);
+      return run ? [{ motion: ask.motion, run }] : [];
     });
-    set({ arrived, progress: { done: doneOf(question.asks), of: question.asks.length, startedAt } });
+    set({ arrived, progress: { done: doneOf(question), of: question.asks.length, startedAt } });
   }
 
-  function doneOf(asks: readonly Ask[]): number {
-    const share = ({ key, motion }: Ask) => (runs.has(key) ? 1 : (underWay.get(`run ${motion}`)?.share ?? 0));
+  function doneOf({ asks }: Question): number {
+    const share = (ask: Ask) => (runs.has(shownOf(ask).key) ? 1 : jobs.share(`run ${ask.motion}`));
     return asks.reduce((sum, ask) => sum + share(ask), 0);
   }
 
-  /** The engine has the samples, or is given them now. */
-  function ready({ request }: Ask): boolean {
-    const digest = request.motion.samples;
-    if (engine.hasMotion(digest)) return true;
-    const samples = samplesOf(digest);
-    if (samples) engine.putMotion(digest, samples);
-    given.add(digest);
-    return samples !== undefined;
-  }
-  const given = new Set<string>();
-
-  /** The engine lets go of samples that are in the document no more; undo gives them again. */
+  /** The engine lets go of samples that are in the document no more. */
   function forgetMotions({ motions }: Case): void {
-    const kept = new Set(project?.motions.map((motion) => motion.samples) ?? motions.map((motion) => motion.samples));
-    for (const digest of given) {
-      if (kept.has(digest)) continue;
-      engine.dropMotion(digest);
-      given.delete(digest);
-    }
+    lending.keepOnly(new Set((project?.motions ?? motions).map((motion) => motion.samples)));
   }
 
   function cancelUnwanted(): void {
-    const wanted = new Set(question?.asks.map((ask) => ask.key));
-    for (const [job, { key }] of underWay) {
-      if (wanted.has(key) && !job.startsWith('half ')) continue;
-      underWay.delete(job);
-      engine.cancel(job);
-    }
-  }
-
-  function cancelAll(): void {
-    for (const job of underWay.keys()) engine.cancel(job);
-    underWay.clear();
+    const wanted = new Set(question?.asks.map((ask) => shownOf(ask).key));
+    jobs.keep((name, key) => wanted.has(key) && !behind.isBehind(name));
   }
 
   const leave = [
@@ -343,13 +328,13 @@ export function follow(
     },
     stop() {
       if (resultsStore.getState().status !== 'running') return;
-      cancelAll();
+      jobs.keep(() => false);
       rest({ status: 'stale', waits: true });
     },
     end() {
       for (const off of leave) off();
       for (const one of Object.values(timers)) one.clear();
-      cancelAll();
+      jobs.keep(() => false);
     },
   };
 }

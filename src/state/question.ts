@@ -1,15 +1,28 @@
 import { digestOfText } from '../core/digest.ts';
-import type { Analysis } from '../core/dynamics/run.ts';
+import { type LeastParts, leastParts, mostParts } from '../core/dynamics/autoStep.ts';
 import { stepOf } from '../core/dynamics/steps.ts';
 import type { Case } from '../document/case.ts';
 import type { RunRequest } from '../engine/protocol.ts';
+import { weightOf } from '../engine/weight.ts';
 
-/** One run that a question needs. */
+/** One motion of a question: its run at each number of parts of the interval that may be asked. */
 export interface Ask {
   readonly motion: string;
+  /** Names the motion, whatever the frame: the number of parts that did for it is remembered under it. */
+  readonly record: string;
+  /** Parts of the step as typed, or where the search for one begins. */
+  readonly first: number;
+  /** The most parts that the search tries; `first` where the step was typed. */
+  readonly most: number;
+  /** What asked for `first`; null where the step was typed. */
+  readonly least: LeastParts | null;
+  at(parts: number): RunAsk;
+}
+
+export interface RunAsk {
   /** What the run is computed from: equal keys, equal bits. */
   readonly key: string;
-  /** Storey-steps, for the expected time. */
+  /** Storey-steps of a linear frame, for the expected time. */
   readonly weight: number;
   readonly request: RunRequest;
 }
@@ -23,39 +36,44 @@ export interface Question {
 
 export function questionOf(from: Case): Question {
   const frameKey = digestOfText(JSON.stringify(from.frame, (name, value) => (name === 'name' ? undefined : value)));
-  const asks = from.motions.map(({ name, samples, interval, scale, count }): Ask => {
-    const request: RunRequest = {
-      frameKey,
-      frame: from.frame,
-      analysis: from.analysis,
-      motion: { samples, interval, scale },
-      want: { histories: false },
-    };
-    return { motion: name, request, key: keyOf(request), weight: weightOf(request, count) };
-  });
-  return { key: digestOfText(asks.map((ask) => ask.key).join()), case: from, asks };
+  const asks = from.motions.map((motion) => askOf(from, motion, frameKey));
+  const step = from.analysis.step === 'auto' ? 'auto' : 'typed';
+  return { key: digestOfText(`${step} ${asks.map((ask) => ask.at(ask.first).key).join()}`), case: from, asks };
 }
 
 /** The same run with its histories kept. */
-export function withHistories({ request }: Ask): RunRequest {
+export function withHistories(request: RunRequest): RunRequest {
   return { ...request, want: { histories: true } };
 }
 
-/** The same run at half the step, for the step error; null where the step is no number yet. */
-export function atHalfStep({ request }: Ask): RunRequest | null {
-  const { analysis } = request;
-  const { step } = analysis;
-  if (step === 'auto') return null;
-  const half: Analysis = { ...analysis, step: typeof step === 'number' ? step / 2 : { parts: 2 * step.parts } };
-  return { ...request, analysis: half };
-}
+function askOf({ frame, prepared, analysis }: Case, motion: Case['motions'][number], frameKey: string): Ask {
+  const { name, samples, interval, scale, count } = motion;
+  const { method, step, tail, stopDrift } = analysis;
+  const range = rangeOf();
+  return {
+    motion: name,
+    record: JSON.stringify([name, samples, interval]),
+    ...range,
+    at(parts) {
+      const request: RunRequest = {
+        frameKey,
+        frame,
+        analysis: { ...analysis, step: { parts } },
+        motion: { samples, interval, scale },
+        want: { histories: false },
+      };
+      const key = JSON.stringify([frameKey, method, tail, stopDrift, samples, interval, scale, parts]);
+      return { key, request, weight: weightOf(request, count) };
+    },
+  };
 
-function keyOf({ frameKey, analysis, motion }: RunRequest): string {
-  return JSON.stringify([frameKey, analysis, motion.samples, motion.interval, motion.scale]);
-}
-
-function weightOf({ frame, analysis, motion }: RunRequest, count: number): number {
-  const step = stepOf(analysis.step, motion.interval);
-  const parts = step.ok ? step.value.parts : 1;
-  return frame.storeys.length * (count * parts + (analysis.tail / motion.interval) * parts);
+  function rangeOf(): Pick<Ask, 'first' | 'most' | 'least'> {
+    if (step === 'auto') {
+      const least = leastParts(prepared.modes, method, interval);
+      return { first: least.parts, most: Math.max(least.parts, mostParts(count, interval, tail)), least };
+    }
+    const typed = stepOf(step, interval);
+    const parts = typed.ok ? typed.value.parts : 1;
+    return { first: parts, most: parts, least: null };
+  }
 }

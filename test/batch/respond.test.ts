@@ -101,7 +101,7 @@ describe('[BATCH-4] respond', () => {
     expect(status).toBe(0);
     expect(lines).toHaveLength(1);
     expect(lines[0]).toMatch(
-      /^p\.swaybook\.json: motion Motion A: did not finish: storey \d passed the drift .* at \d\.\d\d s/,
+      /^p\.swaybook\.json: motion Motion A: did not finish: storey \d lost its stability at \d\.\d\d s/,
     );
     expect(JSON.parse(stdout)).toMatchObject({ incomplete: ['Motion A'], storeys: [{ mean: null }, { mean: null }] });
   });
@@ -120,7 +120,7 @@ describe('[BATCH-4] respond', () => {
     expect(status).toBe(0);
     expect(lines).toHaveLength(1);
     expect(lines[0]).toMatch(
-      /did not finish: storey 1 passed the drift at which a run is stopped at \d\.\d\d s, drift 10\.\d %$/,
+      /did not finish: storey 1 lost its stability at \d\.\d\d s, drift 10\.\d %$/,
     );
     const response = JSON.parse(read(folder, 'response.json'));
     const [run] = response.runs;

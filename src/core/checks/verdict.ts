@@ -18,21 +18,41 @@ export function verdictOf(
   envelope: Envelope,
   runs: readonly { readonly motion: string; readonly run: Run }[],
 ): Verdict {
-  const { drift, ratio, governingStorey: at, measure, factor, limit, leftOut, motions } = envelope;
+  const { drift, ratio, governingStorey: at, leftOut, motions, isolator } = envelope;
   if (drift === null || ratio === null) return unfinished(envelope, runs);
   const of = leftOut.length > 0 ? `, ${motions.length} of ${motions.length + leftOut.length} motions` : '';
-  const percent = (value: number) => printQuantity(value, 'percent', 'si', 2);
-  const computed = drift[measure][at];
-  const factored = factor === 1 ? '' : ` × ${factor} = ${percent(factor * computed)} %`;
+  const without = leftOut.length > 0 ? `left out: ${leftOut.join(', ')}` : '';
+  const storeys = at < 0 ? null : storeyWords(envelope, drift[envelope.measure][at]);
+  const apart = isolator?.ratio ?? null;
+  if (apart !== null && !(at >= 0 && ratio[at] >= apart)) {
+    const detail = at < 0 ? '' : `storey ${at + 1} at ${printRatio(ratio[at])}: ${storeys}`;
+    return {
+      over: apart > 1,
+      headline: `The isolator governs: ${printRatio(apart)} of its limit${of}`,
+      detail: joined(detail, without),
+    };
+  }
+  if (storeys === null) return { over: false, headline: 'No storey is compared with a limit', detail: without };
   const next = secondLargest(ratio, at);
-  const who = motions.length === 1 ? '' : `${worded(measure)} `;
-  const then = next < 0 ? '' : `; next, storey ${next + 1} at ${printRatio(ratio[next])}`;
-  const without = leftOut.length > 0 ? `; left out: ${leftOut.join(', ')}` : '';
+  const then = next < 0 ? '' : `next, storey ${next + 1} at ${printRatio(ratio[next])}`;
+  const under = apart === null ? '' : `isolator at ${printRatio(apart)} of its limit`;
   return {
     over: ratio[at] > 1,
     headline: `Storey ${at + 1} governs: ${printRatio(ratio[at])} of the limit${of}`,
-    detail: `${who}${percent(computed)} %${factored}, limit ${percent(limit)} %${then}${without}`,
+    detail: joined(storeys, then, under, without),
   };
+}
+
+function joined(...words: readonly string[]): string {
+  return words.filter((part) => part !== '').join('; ');
+}
+
+/** "mean 1.60 % × 0.5 = 0.80 %, limit 1.50 %" */
+function storeyWords({ measure, factor, limit, motions }: Envelope, computed: number): string {
+  const percent = (value: number) => printQuantity(value, 'percent', 'si', 2);
+  const factored = factor === 1 ? '' : ` × ${factor} = ${percent(factor * computed)} %`;
+  const who = motions.length === 1 ? '' : `${worded(measure)} `;
+  return `${who}${percent(computed)} %${factored}, limit ${percent(limit)} %`;
 }
 
 function unfinished(
@@ -50,7 +70,7 @@ export function endingWords({ ending, storeys }: Run): string {
   const time = printQuantity(ending.time, 'time', 'si', 2);
   switch (ending.status) {
     case 'collapsed':
-      return `storey ${ending.storey + 1} passed the drift at which a run is stopped at ${time} s, drift ${printQuantity(storeys.peakDriftRatio[ending.storey], 'percent', 'si', 1)} %`;
+      return `storey ${ending.storey + 1} lost its stability at ${time} s, drift ${printQuantity(storeys.peakDriftRatio[ending.storey], 'percent', 'si', 1)} %`;
     case 'diverged':
       return `the numbers left the finite range at ${time} s`;
     case 'not-converged':
@@ -63,7 +83,7 @@ export function endingWords({ ending, storeys }: Run): string {
 function secondLargest(ratio: Float64Array, largest: number): number {
   let next = -1;
   for (let i = 0; i < ratio.length; i++) {
-    if (i !== largest && (next < 0 || ratio[i] > ratio[next])) next = i;
+    if (i !== largest && !Number.isNaN(ratio[i]) && (next < 0 || ratio[i] > ratio[next])) next = i;
   }
   return next;
 }

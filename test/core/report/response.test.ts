@@ -75,7 +75,7 @@ test('[FILE-2] a suite with a run that ended early has no statistics and says wh
   const { envelope, runs } = responseOf(exampleSource({ strength: 100 }));
   const [first] = runs;
   expect(first.completed).toBe(false);
-  expect(first.reason?.why).toMatch(/^storey \d passed the drift at which a run is stopped at \d\.\d\d s/);
+  expect(first.reason?.why).toMatch(/^storey \d lost its stability at \d\.\d\d s/);
   expect(first.reason?.time).toBeGreaterThan(0);
   expect(first.reason?.storey).toBeGreaterThanOrEqual(1);
   expect(envelope.incomplete).toEqual(['A']);
@@ -126,7 +126,7 @@ describe('[FILE-3] the response of storeys that yield, dampers and an isolator',
     const stopped = responseOf(isolatedSource({ limit: 0.25, strength: 40 }));
     expect(stopped.runs[0].completed).toBe(false);
     expect(stopped.runs[0].reason?.storey).toBeGreaterThanOrEqual(1);
-    expect(stopped.runs[0].reason?.why).toMatch(/^storey \d passed the drift at which a run is stopped/);
+    expect(stopped.runs[0].reason?.why).toMatch(/^storey \d lost its stability/);
     expect(stopped.envelope.incomplete).toContain('A');
     const none = { mean: null, median: null, max: null, governing: null };
     expect(stopped.envelope.storeys[0]).toMatchObject({ ...none, limit: 0.25, ratio: null, ductility: none });
