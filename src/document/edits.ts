@@ -93,6 +93,14 @@ export function useMotion(project: Project, at: number, used: boolean, reason?: 
   };
 }
 
+/** Half the step, where one is typed in seconds or in parts; a step that is chosen by halving stays so. */
+export function halvedStep(project: Project): Project {
+  const { step } = project.analysis;
+  if (typeof step !== 'number' && (typeof step !== 'object' || step === null)) return project;
+  const half = typeof step === 'number' ? step / 2 : { parts: 2 * step.parts };
+  return { ...project, analysis: { ...project.analysis, step: half } };
+}
+
 /** Without its role: one isolator is all that a frame can have. */
 function plain(row: StoreyRow): StoreyRow {
   const { role, ...rest } = row;

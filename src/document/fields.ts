@@ -292,6 +292,11 @@ function writePart(
     if (row.damper === undefined && value === null) return project;
     return setDamper(project, [index], { ...(row.damper ?? NO_DAMPER), [key]: value });
   }
+  if (row.law.kind === 'bouc-wen' && (key === 'beta' || key === 'gamma') && typeof value === 'number') {
+    // They make 1: the one that is typed settles the other. Rounded, so that 1 - 0.9 is 0.1.
+    const other = path.replace(/\w+$/, key === 'beta' ? 'gamma' : 'beta');
+    return write(write(project, path, value), other, Number((1 - value).toPrecision(12)));
+  }
   if (key !== 'kind' && key in row.law) return write(project, path, value);
   if (row.law.kind !== 'elastic' || (key !== 'strength' && key !== 'hardening')) {
     throw new RangeError(`writeAt: ${path}, the ${row.law.kind} law has no ${key}`);

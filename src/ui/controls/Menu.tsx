@@ -10,6 +10,8 @@ export interface MenuItem {
   readonly disabled?: boolean;
   /** Set on items that are switches. */
   readonly checked?: boolean;
+  /** Stands apart from what is above it. */
+  readonly apart?: boolean;
   readonly run: () => void;
 }
 
@@ -149,9 +151,17 @@ function MenuList({ id, anchor, label, items, align, onClose }: MenuListProps) {
 
 function MenuRow({ item, onChoose }: { readonly item: MenuItem; readonly onChoose: () => void }) {
   const keys = item.keys !== undefined && <span className="menu-keys">{item.keys}</span>;
+  const className = item.apart ? 'apart' : undefined;
   if (item.checked === undefined) {
     return (
-      <button type="button" role="menuitem" aria-disabled={item.disabled} tabIndex={-1} onClick={onChoose}>
+      <button
+        type="button"
+        role="menuitem"
+        className={className}
+        aria-disabled={item.disabled}
+        tabIndex={-1}
+        onClick={onChoose}
+      >
         <span>{item.label}</span>
         {keys}
       </button>
@@ -161,6 +171,7 @@ function MenuRow({ item, onChoose }: { readonly item: MenuItem; readonly onChoos
     <button
       type="button"
       role="menuitemcheckbox"
+      className={className}
       aria-checked={item.checked}
       aria-disabled={item.disabled}
       tabIndex={-1}

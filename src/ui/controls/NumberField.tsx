@@ -18,6 +18,8 @@ export interface NumberFieldProps {
   readonly words?: boolean;
   readonly className?: string;
   readonly disabled?: boolean;
+  /** Makes what was typed a step; default: of this field alone. */
+  readonly onCommit?: (path: string) => void;
 }
 
 /**
@@ -32,8 +34,10 @@ export function NumberField({
   words = true,
   className = '',
   disabled = false,
+  onCommit,
 }: NumberFieldProps) {
   const system = useSession((state) => state.system);
+  const commit = () => (onCommit === undefined ? commitField(path, system) : onCommit(path));
   const project = useDocument(effectiveProject);
   const typed = useDocument((state) => (state.draft?.path === path ? state.draft.text : null));
   const fault = useResults((state) => state.faults.find((entry) => entry.where === path));
@@ -55,10 +59,10 @@ export function NumberField({
         onFocus={(event) => event.target.select()}
         onChange={(event) => typeField(path, event.target.value, system)}
         onBlur={(event) => {
-          if (document.activeElement !== event.target) commitField(path, system);
+          if (document.activeElement !== event.target) commit();
         }}
         onKeyDown={(event) => {
-          if (event.key === 'Enter') commitField(path, system);
+          if (event.key === 'Enter') commit();
           else if (event.key === 'Escape' && typed !== null) giveUpField(path);
           else return;
           // Esc gives up the edit, and not the dialog around it.

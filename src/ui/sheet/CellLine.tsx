@@ -1,11 +1,23 @@
 import type { Fault } from '../../core/fault.ts';
-import { printQuantity, printRatio, type System, unitOf } from '../../core/units/quantities.ts';
+import { printQuantity, type System, unitOf } from '../../core/units/quantities.ts';
+import { cellFacts } from '../../document/cellFacts.ts';
 import { fieldOf, readAt } from '../../document/fields.ts';
 import type { Project } from '../../document/project.ts';
-import { useDocument } from '../../state/document.ts';
+import { documentStore, useDocument } from '../../state/document.ts';
 import { Button } from '../controls/Button.tsx';
-import { quantityOf, readingsOf, shownText, takeReading, wordsOf } from '../controls/field.ts';
-import { COLUMN_NAMES, cellPath, isInput, isTyped } from './columns.ts';
+import { quantityOf, readingsOf, takeReading, wordsOf } from '../controls/field.ts';
+import { fullText } from './cellText.ts';
+import {
+  COLUMN_NAMES,
+  COLUMN_QUANTITIES,
+  cellOf,
+  cellPath,
+  type InputColumn,
+  isInput,
+  isTyped,
+  takes,
+} from './columns.ts';
+import { LAWS } from './lawWords.ts';
 
 export interface CellLineProps {
   readonly project: Project;
@@ -24,19 +36,45 @@ export function CellLine({ project, system, cell, faults, onEdit }: CellLineProp
     return <span className="quiet">Storey {storey + 1}</span>;
   }
   const name = COLUMN_NAMES[column];
-  const exists = storey < project.frame.storeys.length;
+  const row = project.frame.storeys[storey];
+  const exists = row !== undefined;
+  const place = (
+    <span className="quiet">
+      Storey {storey + 1}, {name}
+    </span>
+  );
   if (!isTyped(column)) {
+    const fault = faults.find(({ where }) => where.startsWith(path) && cellOf(where)?.column === 'law');
     return (
       <>
-        <span className="quiet">
-          Storey {storey + 1}, {name}
-        </span>
-        <span className="fact">elastic: laws that yield come with a later version</span>
+        {place}
+        <Button size="medium" className="cell-echo law-echo" tabIndex={-1} onClick={onEdit}>
+          {LAWS.find(({ kind }) => kind === row?.law.kind)?.name ?? 'Elastic'}
+        </Button>
+        {fault === undefined ? (
+          <span className="fact">{cellFacts(project, path, system) || 'Enter chooses another law'}</span>
+        ) : (
+          <span className="wrong">
+            {fault.message}: {fault.mend}
+          </span>
+        )}
+      </>
+    );
+  }
+  if (exists && !takes(row, column)) {
+    const why =
+      column === 'hardening'
+        ? 'the storey is elastic: type a strength first'
+        : 'no damper: type its force at 1 m/s first';
+    return (
+      <>
+        {place}
+        <span className="fact">none; {why}</span>
       </>
     );
   }
   const quantity = exists ? quantityOf(path) : null;
-  const text = !exists ? '' : (draft?.text ?? shownText(project, path, system));
+  const text = !exists ? '' : (draft?.text ?? fullText(row, column, system));
   const fault = faults.find((entry) => entry.where === path);
   const readings = exists ? readingsOf(path, text, system) : [];
   const typed = exists && (draft !== null || readAt(project, path) !== null);
@@ -44,9 +82,7 @@ export function CellLine({ project, system, cell, faults, onEdit }: CellLineProp
   const unit = exists && quantity !== null ? unitOf(quantity, system) : unitOfColumn(column, system);
   return (
     <>
-      <span className="quiet">
-        Storey {storey + 1}, {name}
-      </span>
+      {place}
       <button
         type="button"
         className="field cell-echo"
@@ -80,14 +116,12 @@ export function CellLine({ project, system, cell, faults, onEdit }: CellLineProp
   );
 }
 
-function unitOfColumn(column: string, system: System): string | null {
-  if (column === 'height') return unitOf('length', system);
-  if (column === 'mass') return unitOf('weight', system);
-  if (column === 'stiffness') return unitOf('stiffness', system);
-  return column === 'gravity' ? unitOf('force', system) : null;
+function unitOfColumn(column: InputColumn, system: System): string | null {
+  const quantity = COLUMN_QUANTITIES[column];
+  return quantity === null ? null : unitOf(quantity, system);
 }
 
-/** One fact that follows from a cell; where the text is no plain number, first the value as it is read. */
+/** What follows from a cell; where the text is no plain number, first the value as it is read. */
 function factOf(project: Project, storey: number, column: string, system: System, typed: string | null): string {
   const path = cellPath(storey, column);
   if (storey >= project.frame.storeys.length) return fieldOf(path).hint(system);
@@ -97,28 +131,23 @@ function factOf(project: Project, storey: number, column: string, system: System
   if (typed !== null && typeof value === 'number' && quantity !== null && !/^[\d\s.,]*$/.test(typed)) {
     facts.push(`read as ${printQuantity(value, quantity, system)} ${unitOf(quantity, system)}`);
   }
-  if (typeof value === 'number' && column !== 'name') facts.push(comparison(project, storey, column, value, system));
-  if (value === null) facts.push(fieldOf(path).hint(system));
+  if (typed !== null && column === 'strength') facts.push(madeBilinear(project, storey));
+  if (typeof value === 'number') facts.push(cellFacts(project, path, system));
+  if (value === null) facts.push(hint(project, storey, column, system));
   return facts.filter((fact) => fact !== '').join('; ');
 }
 
-function comparison(project: Project, storey: number, column: string, value: number, system: System): string {
-  const { storeys } = project.frame;
-  if (column === 'height') {
-    let level = 0;
-    for (const row of storeys.slice(0, storey + 1)) level += typeof row.height === 'number' ? row.height : Number.NaN;
-    return Number.isFinite(level)
-      ? `its floor at +${printQuantity(level, 'length', system)} ${unitOf('length', system)}`
-      : '';
+function hint(project: Project, storey: number, column: string, system: System): string {
+  if (column === 'strength' && project.frame.storeys[storey]?.law.kind === 'elastic') {
+    return 'none: a strength makes the storey bilinear';
   }
-  const above = readOther(project, storey + 1, column);
-  if (above !== null) return `${printRatio(value / above)} of the storey above`;
-  const below = readOther(project, storey - 1, column);
-  return below === null ? '' : `${printRatio(value / below)} of the storey below`;
+  return fieldOf(cellPath(storey, column)).hint(system);
 }
 
-function readOther(project: Project, storey: number, column: string): number | null {
-  if (storey < 0 || storey >= project.frame.storeys.length) return null;
-  const value = readAt(project, cellPath(storey, column));
-  return typeof value === 'number' && value > 0 ? value : null;
+/** A strength typed into an elastic storey makes it yield: said while it is typed, with the hardening that comes with it. */
+function madeBilinear(project: Project, storey: number): string {
+  const before = documentStore.getState().project.frame.storeys[storey]?.law;
+  const law = project.frame.storeys[storey]?.law;
+  if (before?.kind !== 'elastic' || law === undefined || law.kind === 'elastic') return '';
+  return `makes it bilinear, hardening ${printQuantity(Number(law.hardening), 'percent', 'si', 0)} %`;
 }

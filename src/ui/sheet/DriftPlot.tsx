@@ -33,6 +33,7 @@ export function DriftPlot(props: DriftPlotProps) {
   const { span, rows, height, axis, answers, limit, standing, arrived, chosenMotion, storeyHeights, factor } = props;
   const scale = span.width / axis.end;
   const sky = height - rows.total;
+  const isolated = answers?.isolator != null;
   const marks = useRef<SVGGElement>(null);
   const limitX = limit === null ? null : limit * scale;
 
@@ -44,7 +45,7 @@ export function DriftPlot(props: DriftPlotProps) {
           const tall = storeyHeights[storey];
           const path = paths[storey];
           if (path === undefined) continue;
-          if (pose === null || pose.length !== paths.length || typeof tall !== 'number') {
+          if (pose === null || pose.length !== paths.length || typeof tall !== 'number' || (isolated && storey === 0)) {
             path.setAttribute('d', '');
             continue;
           }
@@ -54,10 +55,12 @@ export function DriftPlot(props: DriftPlotProps) {
           path.setAttribute('d', x > span.width + 2 ? '' : markPath(x, middle + half(rows.heights[storey] ?? 0) + 2));
         }
       }),
-    [rows, sky, scale, span.width, storeyHeights, factor],
+    [rows, sky, scale, span.width, storeyHeights, factor, isolated],
   );
 
   const current = standing === 'current' && answers !== null;
+  const first = isolated ? 1 : 0;
+  const overlay = { rows, sky, scale, width: span.width };
   return (
     <svg
       className="sheet-svg"
@@ -69,23 +72,34 @@ export function DriftPlot(props: DriftPlotProps) {
     >
       <Lines axis={axis} scale={scale} height={height} />
       {answers !== null &&
-        rows.heights.map((size, storey) => (
-          <DriftRow
-            key={storey}
-            middle={sky + (rows.tops[storey] ?? 0) + size / 2}
-            size={size}
-            width={span.width}
-            bar={answers.drift === null ? null : (answers.drift[storey] ?? 0) * scale}
-            limitX={limitX}
-            over={answers.over[storey] ?? false}
-            old={standing === 'old'}
-            ticks={ticksOf(arrived.length > 0 ? [] : answers.motions, storey, scale, chosenMotion)}
-            arrived={ticksOf(arrived, storey, scale, null)}
-            chosen={current ? placeOf(answers.motions, storey, scale, chosenMotion) : null}
-          />
-        ))}
+        rows.heights.map((size, storey) =>
+          isolated && storey === 0 ? null : (
+            <DriftRow
+              key={storey}
+              middle={sky + (rows.tops[storey] ?? 0) + size / 2}
+              size={size}
+              width={span.width}
+              bar={answers.drift === null ? null : (answers.drift[storey] ?? 0) * scale}
+              limitX={limitX}
+              over={answers.over[storey] ?? false}
+              old={standing === 'old'}
+              ticks={ticksOf(arrived.length > 0 ? [] : answers.motions, storey, scale, chosenMotion)}
+              arrived={ticksOf(arrived, storey, scale, null)}
+              chosen={current ? placeOf(answers.motions, storey, scale, chosenMotion) : null}
+            />
+          ),
+        )}
+      {answers?.isolator != null && (
+        <text
+          x="6"
+          y={sky + (rows.tops[0] ?? 0) + (rows.heights[0] ?? 0) / 2 + 4}
+          className={answers.isolator.over ? 'signal halo' : 'halo'}
+        >
+          {answers.isolator.words}
+        </text>
+      )}
       {answers !== null && current && <Failures {...props} answers={answers} scale={scale} sky={sky} />}
-      {answers !== null && <Lit motions={answers.motions} rows={rows} sky={sky} scale={scale} width={span.width} />}
+      {answers !== null && <Lit motions={answers.motions} first={first} {...overlay} />}
       <g ref={marks} fill="var(--accent)">
         {rows.heights.map((_, storey) => (
           <path key={storey} />
@@ -99,7 +113,7 @@ export function DriftPlot(props: DriftPlotProps) {
           strokeDasharray={answers === null ? '6 3' : undefined}
         />
       )}
-      {answers !== null && <Touch motions={answers.motions} rows={rows} sky={sky} scale={scale} width={span.width} />}
+      {answers !== null && <Touch motions={answers.motions} first={first} {...overlay} />}
     </svg>
   );
 }
@@ -214,7 +228,7 @@ function Failures({
   return answers.failed.map(({ motion, storey }) => {
     if (storey < 0) return null;
     const drift = answers.motions.find((entry) => entry.motion === motion)?.drift[storey] ?? 0;
-    const x = Math.min(drift * scale, span.width - 24);
+    const x = Math.min(drift * scale, span.width - 20);
     const y = sky + (rows.tops[storey] ?? 0) + (rows.heights[storey] ?? 0) / 2;
     return (
       <g key={motion}>
@@ -233,14 +247,17 @@ interface OverlayProps {
   readonly sky: number;
   readonly scale: number;
   readonly width: number;
+  /** The lowest storey whose drift is shown: not an isolator. */
+  readonly first: number;
 }
 
 /** The motion lit by hovering, in every row. */
-function Lit({ motions, rows, sky, scale, width }: OverlayProps) {
+function Lit({ motions, rows, sky, scale, width, first }: OverlayProps) {
   const lit = useSession((state) => state.lit);
   const found = motions.find(({ motion }) => motion === lit);
   if (found === undefined) return null;
   const path = rows.heights.map((size, storey) => {
+    if (storey < first) return '';
     const x = (found.drift[storey] ?? 0) * scale;
     const middle = sky + (rows.tops[storey] ?? 0) + size / 2;
     return x > width ? '' : ticksPath([x], middle - half(size) - 1, middle + half(size) + 1);
@@ -249,7 +266,7 @@ function Lit({ motions, rows, sky, scale, width }: OverlayProps) {
 }
 
 /** Hovering near a tick lights its motion everywhere; a click chooses it. */
-function Touch({ motions, rows, sky, scale, width }: OverlayProps) {
+function Touch({ motions, rows, sky, scale, width, first }: OverlayProps) {
   const near = useMemo(
     () => (event: PointerEvent<SVGRectElement>) => {
       const box = event.currentTarget.getBoundingClientRect();
@@ -259,7 +276,7 @@ function Touch({ motions, rows, sky, scale, width }: OverlayProps) {
       if (storey < 0) return null;
       let best: string | null = null;
       let least = 5;
-      for (const { motion, drift } of motions) {
+      for (const { motion, drift } of storey < first ? [] : motions) {
         const away = Math.abs((drift[storey] ?? 0) * scale - x);
         if (away < least) {
           least = away;
@@ -268,7 +285,7 @@ function Touch({ motions, rows, sky, scale, width }: OverlayProps) {
       }
       return { storey, motion: best };
     },
-    [motions, rows, sky, scale],
+    [motions, rows, sky, scale, first],
   );
   return (
     <rect

@@ -1,7 +1,7 @@
 import { useLayoutEffect, useMemo, useRef } from 'react';
 import { printQuantity, type System, unitOf } from '../../core/units/quantities.ts';
-import { followCursor } from './cursor.ts';
-import { columnPath, columnWidths, px } from './drawing.ts';
+import { followCursor, MARK } from './cursor.ts';
+import { bearingPath, columnPath, columnWidths, markPlaces, px } from './drawing.ts';
 import type { Span } from './layout.ts';
 import type { Rows } from './rows.ts';
 
@@ -15,6 +15,8 @@ export interface FrameDrawingProps {
   /** Storeys over the limit: their columns in the colour of the limit. */
   readonly over: readonly boolean[];
   readonly governing: number;
+  /** The first storey is an isolator: bearings stand in the place of its columns. */
+  readonly isolated: boolean;
   readonly sway: number;
   readonly system: System;
   /** The sheet is empty: three storeys that are not there yet, dashed. */
@@ -37,19 +39,20 @@ export function bayOf(
 
 /** The building through the rows: slabs on the row lines, columns in double curvature, swaying at the cursor. */
 export function FrameDrawing(props: FrameDrawingProps) {
-  const { span, rows, height, heights, stiffnesses, over, governing, sway, system, ghost } = props;
+  const { span, rows, height, heights, stiffnesses, over, governing, isolated, sway, system, ghost } = props;
   const sky = height - rows.total;
   const gutter = span.width < 190 ? 16 : 24;
   const { left, right } = bayOf(span.width, gutter);
   const columns = useRef<SVGGElement>(null);
   const slabs = useRef<SVGGElement>(null);
+  const dots = useRef<SVGGElement>(null);
   const roof = useRef<SVGGElement>(null);
   const widths = useMemo(() => columnWidths(stiffnesses), [stiffnesses]);
   const floors = useMemo(() => [height, ...rows.tops.map((top) => sky + top)], [rows, sky, height]);
 
   useLayoutEffect(
     () =>
-      followCursor((pose) => {
+      followCursor((pose, marks) => {
         const count = rows.heights.length;
         const known = pose !== null && pose.length === count;
         const reach = span.width;
@@ -64,16 +67,19 @@ export function FrameDrawing(props: FrameDrawingProps) {
           const head = at(storey + 1);
           const low = floors[storey] ?? 0;
           const high = floors[storey + 1] ?? 0;
+          const path = isolated && storey === 0 ? bearingPath : columnPath;
           paths[storey]?.setAttribute(
             'd',
-            columnPath(left + foot, low, left + head, high) + columnPath(right + foot, low, right + head, high),
+            path(left + foot, low, left + head, high) + path(right + foot, low, right + head, high),
           );
           plates[storey]?.setAttribute('x', px(left - 9 + head));
+          const mark = marks.length === count ? (marks[storey] ?? MARK.none) : MARK.none;
+          writeDots(dots.current?.children[storey], mark, left, right, foot, head, low, high);
         }
         const displaced = known ? (pose[count - 1] ?? 0) : 0;
         writeRoof(roof.current, left, at(count), floors[count] ?? 0, known ? displaced : null, system);
       }),
-    [rows, floors, left, right, sway, span.width, system],
+    [rows, floors, left, right, sway, span.width, system, isolated],
   );
 
   if (ghost) return <GhostFrame span={span} rows={rows} height={height} left={left} right={right} />;
@@ -106,7 +112,7 @@ export function FrameDrawing(props: FrameDrawingProps) {
           <path
             key={storey}
             className={over[storey] && storey === governing ? 's-signal' : 's-ink'}
-            strokeWidth={Math.round(width * 100) / 100}
+            strokeWidth={isolated && storey === 0 ? 1.4 : Math.round(width * 100) / 100}
           />
         ))}
       </g>
@@ -116,6 +122,15 @@ export function FrameDrawing(props: FrameDrawingProps) {
         ))}
       </g>
       <path d={`M${left - 6} ${height - 3}h12v5h-12zM${right - 6} ${height - 3}h12v5h-12z`} className="f-ink" />
+      <g ref={dots} strokeWidth="1.2">
+        {rows.heights.map((size, storey) => (
+          <g key={storey} className={over[storey] && storey === governing ? 'dots s-signal' : 'dots s-ink'}>
+            {[0, 1, 2, 3].map((end) => (
+              <circle key={end} r={size < 28 ? 2 : 2.9} />
+            ))}
+          </g>
+        ))}
+      </g>
       <g>
         {floors.map((y, floor) => (
           <g key={floor}>
@@ -137,6 +152,34 @@ export function FrameDrawing(props: FrameDrawingProps) {
 function levelText(level: number, floor: number, system: System): string {
   if (floor === 0) return `±${printQuantity(0, 'length', system)}`;
   return Number.isFinite(level) ? `+${printQuantity(level, 'length', system)}` : '';
+}
+
+/** The dots at a storey's column ends: none before it yields, open once it has, filled while it is past yield. */
+function writeDots(
+  group: Element | undefined,
+  mark: number,
+  left: number,
+  right: number,
+  foot: number,
+  head: number,
+  low: number,
+  high: number,
+): void {
+  if (group === undefined) return;
+  const before = group.getAttribute('data-mark');
+  if (before !== String(mark)) group.setAttribute('data-mark', String(mark));
+  if (mark === MARK.none) return;
+  const at = markPlaces(low, high);
+  const places = [
+    [left + foot, at.foot],
+    [left + head, at.head],
+    [right + foot, at.foot],
+    [right + head, at.head],
+  ] as const;
+  for (const [end, [x, y]] of places.entries()) {
+    group.children[end]?.setAttribute('cx', px(x));
+    group.children[end]?.setAttribute('cy', px(y));
+  }
 }
 
 /** The roof's way from rest, with its number; nothing while there is no history. */

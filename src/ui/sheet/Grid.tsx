@@ -1,11 +1,11 @@
 import { type ClipboardEvent, type KeyboardEvent, type PointerEvent, useLayoutEffect, useMemo, useRef } from 'react';
 import type { Fault } from '../../core/fault.ts';
 import type { System } from '../../core/units/quantities.ts';
-import type { Project } from '../../document/project.ts';
+import type { Project, StoreyRow as Row } from '../../document/project.ts';
 import { documentStore, useDocument } from '../../state/document.ts';
 import { sessionStore, setSession, useSession } from '../../state/session.ts';
 import type { AnswerRows } from './answerRows.ts';
-import { ANSWER_COLUMNS, COLUMN_NAMES, cellOf, type InputColumn } from './columns.ts';
+import { answerColumns, COLUMN_NAMES, cellOf, type InputColumn } from './columns.ts';
 import { choose, clear, ensureStorey, fill } from './commands.ts';
 import { copyBlock } from './copy.ts';
 import { type Keyboard, open, sheetKey } from './keys.ts';
@@ -17,7 +17,10 @@ export interface GridProps {
   readonly project: Project;
   readonly columns: readonly InputColumn[];
   readonly rows: Rows;
-  readonly narrow: boolean;
+  readonly lawNames: boolean;
+  readonly signs: Readonly<Partial<Record<InputColumn, number>>>;
+  /** Ductility and residual drift stand on the row. */
+  readonly yielding: boolean;
   readonly system: System;
   /** The chosen cell: the reader's, or where the sheet starts. */
   readonly cell: { readonly storey: number; readonly column: string };
@@ -27,23 +30,26 @@ export interface GridProps {
   readonly faults: readonly Fault[];
   readonly letters: Readonly<Record<string, string>>;
   readonly onPaste: (text: string) => void;
+  readonly onLaw: (storey: number) => void;
 }
 
 /** The storey table: one tab stop, every cell within reach of the keys. */
 export function Grid(props: GridProps) {
-  const { project, columns, rows, narrow, system, cell, chosenStorey, answers, old, faults, letters, onPaste } = props;
+  const { project, columns, rows, system, cell, chosenStorey, answers, old, faults, letters, yielding } = props;
+  const { lawNames, signs, onPaste, onLaw } = props;
   const grid = useRef<HTMLDivElement>(null);
   const wanted = useRef(false);
   const selection = useSession((state) => state.selection);
   const draft = useDocument((state) => state.draft);
   const edited = draft === null ? null : cellOf(draft.path);
-  const walked = useMemo(() => [...columns, ...ANSWER_COLUMNS], [columns]);
+  const walked = useMemo(() => [...columns, ...answerColumns(yielding)], [columns, yielding]);
   const storeys = project.frame.storeys;
   const keyboard: Keyboard = {
     ground: { storeys: Math.max(1, storeys.length), columns: walked },
     inputs: columns,
     cell,
     ensureStorey,
+    openLaw: onLaw,
   };
 
   // The focus follows the chosen cell wherever a key or the end of an edit left it; at first it starts there.
@@ -118,8 +124,13 @@ export function Grid(props: GridProps) {
       data-part="cells"
       onKeyDown={onKeyDown}
       onPointerDown={onPointerDown}
+      onClick={(event) => {
+        const place = placeOf(event.target);
+        if (place?.column === 'law' && !event.shiftKey) open({ ...keyboard, cell: place });
+      }}
       onDoubleClick={(event) => {
-        if (placeOf(event.target) !== null) open(keyboard);
+        const place = placeOf(event.target);
+        if (place !== null && place.column !== 'law') open(keyboard);
       }}
       onCopy={onCopy}
       onCut={onCopy}
@@ -131,20 +142,24 @@ export function Grid(props: GridProps) {
             {COLUMN_NAMES[column]}
           </span>
         ))}
-        <span role="columnheader">drift</span>
-        <span role="columnheader">shear</span>
-        <span role="columnheader">acceleration</span>
+        {answerColumns(yielding).map((column) => (
+          <span role="columnheader" key={column}>
+            {ANSWERED[column]}
+          </span>
+        ))}
       </div>
       {[...rows.heights.keys()].reverse().map((storey) => {
-        const row = storeys[storey] ?? EMPTY_ROW;
+        const row: Row = storeys[storey] ?? EMPTY_ROW;
         const failed = answers?.failed.filter((entry) => entry.storey === storey) ?? [];
         const governs = !old && answers !== null && answers.drift !== null && answers.governing === storey;
+        const isolator = storey === 0 && row.role === 'isolator';
+        const standing = [...(isolator ? ['isolator'] : []), ...(governs ? ['governs'] : [])].join(', ');
         const tag =
           failed.length > 0
-            ? `unstable in ${failed.map(({ motion }) => letters[motion] ?? motion).join(', ')}`
-            : governs
-              ? 'governs'
-              : null;
+            ? `${failed[0].how} ${failed.map(({ motion }) => letters[motion] ?? motion).join(', ')}`
+            : standing === ''
+              ? null
+              : standing;
         const inBlock = cover !== null && cover.columns.length * (cover.high - cover.low + 1) > 1;
         return (
           <StoreyRow
@@ -154,7 +169,8 @@ export function Grid(props: GridProps) {
             size={rows.heights[storey] ?? 0}
             system={system}
             columns={columns}
-            narrow={narrow}
+            lawNames={lawNames}
+            signs={signs}
             chosen={chosenStorey === storey}
             governs={governs}
             over={(answers?.over[storey] ?? false) && !old}
@@ -168,6 +184,9 @@ export function Grid(props: GridProps) {
             measure={answers?.measure ?? 'mean'}
             drift={answers?.print.drift[storey] ?? ''}
             ratio={answers?.print.ratio[storey] ?? ''}
+            ductility={yielding ? (answers?.print.ductility[storey] ?? '') : null}
+            residual={yielding ? (answers?.print.residual[storey] ?? '') : null}
+            isolator={isolator ? (answers?.isolator?.words ?? 'isolator') : null}
             shear={answers?.print.shear[storey] ?? ''}
             acceleration={answers?.print.acceleration[storey] ?? ''}
             old={old}
@@ -179,7 +198,15 @@ export function Grid(props: GridProps) {
   );
 }
 
-const EMPTY_ROW = { name: '', height: null, mass: null, stiffness: null, law: { kind: 'elastic' } } as const;
+const ANSWERED = {
+  drift: 'drift',
+  ductility: 'ductility',
+  residual: 'residual drift',
+  shear: 'shear',
+  acceleration: 'acceleration',
+} as const;
+
+const EMPTY_ROW = { name: '', height: null, mass: null, stiffness: null, law: { kind: 'elastic' } } satisfies Row;
 
 function faultyCells(faults: readonly Fault[]): ReadonlyMap<number, string> {
   const cells = new Map<number, string>();

@@ -11,6 +11,10 @@ export interface HeadsProps {
   readonly system: System;
   readonly sway: number | null;
   readonly toScale: boolean;
+  /** Ductility and residual drift stand on the row. */
+  readonly yielding: boolean;
+  /** Some storey has a typed strength. */
+  readonly strengths: boolean;
   /** "mean of 7"; null: no answers. */
   readonly suite: string | null;
   readonly statistic: string;
@@ -30,7 +34,11 @@ const HEADS: Readonly<Record<InputColumn, string>> = {
   mass: 'Weight',
   stiffness: 'Stiffness',
   law: 'Law',
-  gravity: 'Gravity load',
+  strength: 'Strength',
+  hardening: 'Hardening',
+  gravity: 'Gravity',
+  coefficient: 'At 1 m/s',
+  exponent: 'Exp.',
 };
 
 /** The heads of the columns in three tiers: caption, name, unit or axis numbers. For the eye: the grid names its own columns. */
@@ -51,7 +59,7 @@ export function Heads(props: HeadsProps) {
       </div>
       <div className="tier1" style={{ left: answers.x, width: answers.width }}>
         <span>{narrow ? 'Answers' : 'The storey answers'}</span>
-        {suite !== null && <Legend suite={suite} letter={letter} />}
+        {suite !== null && <Legend suite={suite} letter={letter} strengths={props.strengths && shear !== null} />}
       </div>
       <div className="tier-cells" style={{ left: inputs.x }}>
         {columns.map((column) => {
@@ -62,8 +70,8 @@ export function Heads(props: HeadsProps) {
               className={`head-cell ${quantity === null ? 'words' : ''}`}
               style={{ gridColumn: column, gridRow: 1 }}
             >
-              <span>{narrow && column === 'gravity' ? 'Gravity' : HEADS[column]}</span>
-              <span className="unit">{quantity === null ? '' : unit(quantity)}</span>
+              <span>{HEADS[column]}</span>
+              <span className="unit">{quantity === null ? '' : column === 'exponent' ? 'damper' : unit(quantity)}</span>
             </div>
           );
         })}
@@ -71,6 +79,12 @@ export function Heads(props: HeadsProps) {
         <HeadCell column="drift" kind="plot" name={`${narrow ? 'Peak drift' : 'Peak drift ratio'}${times}, %`} />
         <HeadCell column="mean" kind="result" name={statistic} unit={unit('percent')} />
         <HeadCell column="ratio" kind="result" name="Of limit" unit="ratio" />
+        {props.yielding && (
+          <>
+            <HeadCell column="ductility" kind="result" name="Ductility" unit="ratio" />
+            <HeadCell column="residual" kind="result" name="Resid." unit={unit('percent')} />
+          </>
+        )}
         {!narrow && <HeadCell column="shear" kind="plot" name="Storey shear" />}
         <HeadCell column="force" kind="result" name={narrow ? 'Shear' : statistic} unit={unit('force')} />
         {!narrow && (
@@ -132,7 +146,13 @@ function decimalsIn(value: number): number {
   return point < 0 ? 0 : text.length - point - 1;
 }
 
-function Legend({ suite, letter }: { readonly suite: string; readonly letter: string | null }) {
+interface LegendProps {
+  readonly suite: string;
+  readonly letter: string | null;
+  readonly strengths: boolean;
+}
+
+function Legend({ suite, letter, strengths }: LegendProps) {
   return (
     <>
       <span className="key">
@@ -163,6 +183,14 @@ function Legend({ suite, letter }: { readonly suite: string; readonly letter: st
             {letter} at the cursor
           </span>
         </>
+      )}
+      {strengths && (
+        <span className="key">
+          <svg aria-hidden="true" width="7" height="11" viewBox="0 0 7 11">
+            <path d="M.5.6h4v10h-4" className="s-accent" strokeWidth="1.3" />
+          </svg>
+          strength typed
+        </span>
       )}
     </>
   );

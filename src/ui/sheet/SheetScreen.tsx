@@ -1,4 +1,4 @@
-import { lazy, useLayoutEffect, useMemo, useRef, useState } from 'react';
+import { lazy, useCallback, useLayoutEffect, useMemo, useRef, useState } from 'react';
 import { toDisplay } from '../../core/units/quantities.ts';
 import { effectiveProject, useDocument } from '../../state/document.ts';
 import { useResults } from '../../state/results.ts';
@@ -9,7 +9,7 @@ import { letterOf } from '../controls/letters.ts';
 import { answerRowsOf, motionDrifts } from './answerRows.ts';
 import { CellLine } from './CellLine.tsx';
 import { CellTools } from './CellTools.tsx';
-import { ANSWER_COLUMNS } from './columns.ts';
+import { answerColumns } from './columns.ts';
 import { ensureStorey } from './commands.ts';
 import { DriftPlot } from './DriftPlot.tsx';
 import { swayFactor } from './drawing.ts';
@@ -24,6 +24,7 @@ import { PasteDialog } from './PasteDialog.tsx';
 import { rowsOf } from './rows.ts';
 import { AccelerationPlot, ShearPlot } from './SidePlots.tsx';
 import { SpokenVerdict } from './SpokenVerdict.tsx';
+import { type Choice, shownOf } from './shown.ts';
 import { useAxes } from './useAxes.ts';
 import { useCursorAtPeak } from './useCursorAtPeak.ts';
 import { useLayout } from './useLayout.ts';
@@ -35,6 +36,7 @@ import './grid.css';
 import './drawing.css';
 
 const GroundStack = lazy(() => import('../strip/GroundStack.tsx').then((module) => ({ default: module.GroundStack })));
+const LawPanel = lazy(() => import('./LawPanel.tsx').then((module) => ({ default: module.LawPanel })));
 const SquarePanels = lazy(() =>
   import('../plots/SquarePanels.tsx').then((module) => ({ default: module.SquarePanels })),
 );
@@ -59,10 +61,15 @@ export function SheetScreen({ onOpen, onExample }: SheetScreenProps) {
   const chosenStorey = useChosenStorey();
   const chosenMotion = useChosenMotion();
   const [pasted, setPasted] = useState<string | null>(null);
-  const typedGravity = project.frame.storeys.some(({ gravity }) => gravity !== undefined);
-  const [gravityShown, setGravityShown] = useState<boolean | null>(null);
-  const gravity = project.frame.pDelta && (gravityShown ?? typedGravity);
-  const { layout, columns, free } = useLayout(page, gravity);
+  const [choice, setChoice] = useState<Choice>({});
+  const { frame } = project;
+  const show = useCallback(
+    (narrow: boolean, roomy: boolean) => shownOf({ frame }, faults, choice, narrow, roomy),
+    [frame, faults, choice],
+  );
+  const { layout, columns, shown, free } = useLayout(page, show);
+  const [lawOf, setLawOf] = useState<number | null>(null);
+  const closeLaw = useCallback(() => setLawOf(null), []);
 
   const { storeys } = project.frame;
   const empty = storeys.length === 0;
@@ -103,10 +110,11 @@ export function SheetScreen({ onOpen, onExample }: SheetScreenProps) {
   }, [found, rows.scale, layout]);
   const edit = () =>
     open({
-      ground: { storeys: rows.heights.length, columns: [...columns, ...ANSWER_COLUMNS] },
+      ground: { storeys: rows.heights.length, columns: [...columns, ...answerColumns(shown.answers)] },
       inputs: columns,
       cell: shownCell,
       ensureStorey,
+      openLaw: setLawOf,
     });
   const statistic = { mean: 'Mean', median: 'Median', max: 'Largest' }[answers?.measure ?? 'mean'];
   const tall = rows.total > free + 40;
@@ -121,7 +129,7 @@ export function SheetScreen({ onOpen, onExample }: SheetScreenProps) {
   return (
     <div
       ref={page}
-      className={`page ${layout.narrow ? 'narrow' : ''} ${tall ? 'tall' : ''}`}
+      className={`page ${layout.narrow ? 'narrow' : ''} ${layout.sideways ? 'sideways' : ''} ${tall ? 'tall' : ''}`}
       onScroll={(event) => event.currentTarget.classList.toggle('scrolled', event.currentTarget.scrollTop > 0)}
     >
       <div
@@ -144,7 +152,12 @@ export function SheetScreen({ onOpen, onExample }: SheetScreenProps) {
             }}
           >
             <CellLine project={project} system={system} cell={shownCell} faults={faults} onEdit={edit} />
-            <CellTools storey={shownCell.storey} empty={empty} gravity={gravity} onGravity={setGravityShown} />
+            <CellTools
+              storey={shownCell.storey}
+              empty={empty}
+              shown={shown}
+              onShow={(column, on) => setChoice({ ...choice, [column]: on })}
+            />
           </div>
           <div
             className="verdict-place"
@@ -163,6 +176,8 @@ export function SheetScreen({ onOpen, onExample }: SheetScreenProps) {
             system={system}
             sway={sway}
             toScale={rows.toScale}
+            yielding={shown.answers}
+            strengths={answers?.strengths.some((strength) => strength !== null) ?? false}
             suite={
               answers === null || found === null
                 ? null
@@ -199,7 +214,9 @@ export function SheetScreen({ onOpen, onExample }: SheetScreenProps) {
               project={project}
               columns={columns}
               rows={rows}
-              narrow={layout.narrow}
+              lawNames={layout.lawNames}
+              signs={layout.signs}
+              yielding={shown.answers}
               system={system}
               cell={shownCell}
               chosenStorey={empty ? -1 : chosenStorey}
@@ -208,6 +225,7 @@ export function SheetScreen({ onOpen, onExample }: SheetScreenProps) {
               faults={faults}
               letters={letters}
               onPaste={setPasted}
+              onLaw={setLawOf}
             />
           </div>
           <FrameDrawing
@@ -218,6 +236,7 @@ export function SheetScreen({ onOpen, onExample }: SheetScreenProps) {
             stiffnesses={empty ? [null] : stiffnesses}
             over={old ? [] : (answers?.over ?? [])}
             governing={answers?.governing ?? -1}
+            isolated={storeys[0]?.role === 'isolator'}
             sway={sway ?? 1}
             system={system}
             ghost={empty}
@@ -263,6 +282,11 @@ export function SheetScreen({ onOpen, onExample }: SheetScreenProps) {
           </div>
         </div>
       </div>
+      {lawOf !== null && lawOf < storeys.length && (
+        <Boundary part="The law">
+          <LawPanel storey={lawOf} onClose={closeLaw} />
+        </Boundary>
+      )}
       {pasted !== null && (
         <PasteDialog text={pasted} cell={shownCell} columns={columns} system={system} onClose={() => setPasted(null)} />
       )}

@@ -14,7 +14,7 @@ export interface SidePlotProps {
   readonly old: boolean;
 }
 
-/** Storey shear of the suite, one bar a row. */
+/** Storey shear of the suite, one bar a row; the typed strength as a bracket on it. */
 export const ShearPlot = memo(function ShearPlot({ span, rows, height, axis, answers, old }: SidePlotProps) {
   const scale = span.width / axis.end;
   const sky = height - rows.total;
@@ -48,9 +48,35 @@ export const ShearPlot = memo(function ShearPlot({ span, rows, height, axis, ans
             </g>
           );
         })}
+      {answers !== null && (
+        <path
+          d={answers.strengths
+            .map((strength, storey) => bracket(strength, storey, rows, sky, scale, span.width))
+            .join('')}
+          className="s-accent"
+          strokeWidth="1.3"
+          opacity={old ? 0.45 : undefined}
+        />
+      )}
     </svg>
   );
 });
+
+/** The strength of a storey as a bracket that holds its bar; nothing where it lies beyond the axis. */
+function bracket(
+  strength: number | null,
+  storey: number,
+  rows: Rows,
+  sky: number,
+  scale: number,
+  width: number,
+): string {
+  if (strength === null || strength * scale > width) return '';
+  const size = rows.heights[storey] ?? 0;
+  const reach = size < 28 ? 7 : 11;
+  const top = sky + (rows.tops[storey] ?? 0) + size / 2 - reach;
+  return `M${px(strength * scale - 4)} ${px(top)}h4v${2 * reach}h-4`;
+}
 
 /** Total floor acceleration as a line through the floor lines: each motion, the chosen one, the suite. */
 export const AccelerationPlot = memo(function AccelerationPlot({

@@ -4,9 +4,10 @@ import type { StoreyRow as Row } from '../../document/project.ts';
 import { Icon } from '../controls/Icon.tsx';
 import { Menu } from '../controls/Menu.tsx';
 import { CellInput } from './CellInput.tsx';
-import { cellText } from './cellText.ts';
+import { cellText, isNone } from './cellText.ts';
 import { COLUMN_NAMES, cellPath, type InputColumn } from './columns.ts';
-import { add, move, remove } from './commands.ts';
+import { add, isolate, move, remove, toggleDamper } from './commands.ts';
+import { LawGlyph } from './LawGlyph.tsx';
 
 export interface StoreyRowProps {
   readonly storey: number;
@@ -14,12 +15,15 @@ export interface StoreyRowProps {
   readonly size: number;
   readonly system: System;
   readonly columns: readonly InputColumn[];
-  readonly narrow: boolean;
+  /** Whether the name of a law stands beside its glyph. */
+  readonly lawNames: boolean;
+  /** Signs a column has room for. */
+  readonly signs: Readonly<Partial<Record<InputColumn, number>>>;
   /** The storey whose histories are shown. */
   readonly chosen: boolean;
   readonly governs: boolean;
   readonly over: boolean;
-  /** What stands under the name: "governs", "unstable in E"; null: nothing. */
+  /** What stands under the name: "governs", "unstable in E", "isolator"; null: nothing. */
   readonly tag: string | null;
   readonly failed: boolean;
   /** Column of the chosen cell where it stands in this row. */
@@ -34,15 +38,20 @@ export interface StoreyRowProps {
   readonly measure: string;
   readonly drift: string;
   readonly ratio: string;
+  /** Ductility and residual drift; null: not shown. */
+  readonly ductility: string | null;
+  readonly residual: string | null;
   readonly shear: string;
   readonly acceleration: string;
+  /** What an isolator's row says in the place of a drift; null: it is a storey. */
+  readonly isolator: string | null;
   readonly old: boolean;
   readonly fillHandle: boolean;
 }
 
 /** One storey: what is typed at the left, what it answers at the right. */
 export const StoreyRow = memo(function StoreyRow(props: StoreyRowProps) {
-  const { storey, row, size, chosen, governs, over, tag, failed, cell, columns, editing, text, system, narrow } = props;
+  const { storey, row, size, chosen, governs, over, tag, failed, cell, columns, editing, text, system } = props;
   const classes = ['storey'];
   if (chosen) classes.push('chosen');
   if (governs) classes.push('governs');
@@ -83,7 +92,7 @@ export const StoreyRow = memo(function StoreyRow(props: StoreyRowProps) {
           )}
         </span>
         {shown && <span className={`tag ${failed ? 'failed' : ''}`}>{tag}</span>}
-        <RowMenu storey={storey} name={row.name} />
+        <RowMenu storey={storey} row={row} />
       </div>
       {columns.slice(1).map((column, index) => (
         <InputCell
@@ -94,8 +103,10 @@ export const StoreyRow = memo(function StoreyRow(props: StoreyRowProps) {
           className={state(column)}
           chosen={cell === column}
           editing={editing === column}
-          text={editing === column ? text : cellText(row, column, system)}
-          narrow={narrow}
+          text={editing === column ? text : cellText(row, column, system, props.signs[column])}
+          none={isNone(row, column)}
+          law={column === 'law' ? row.law.kind : null}
+          named={props.lawNames}
           unread={faulty.includes(column)}
           fillHandle={props.fillHandle && cell === column}
         />
@@ -113,13 +124,17 @@ interface InputCellProps {
   readonly chosen: boolean;
   readonly editing: boolean;
   readonly text: string;
-  readonly narrow: boolean;
+  /** The storey has no such part. */
+  readonly none: boolean;
+  /** Kind of law in the cell of the law. */
+  readonly law: Row['law']['kind'] | null;
+  readonly named: boolean;
   readonly unread: boolean;
   readonly fillHandle: boolean;
 }
 
 const InputCell = memo(function InputCell(props: InputCellProps) {
-  const { storey, column, last, className, chosen, editing, text, narrow, unread, fillHandle } = props;
+  const { storey, column, last, className, chosen, editing, text, none, law, named, unread, fillHandle } = props;
   const label = `Storey ${storey + 1}, ${COLUMN_NAMES[column]}`;
   return (
     <div
@@ -129,29 +144,33 @@ const InputCell = memo(function InputCell(props: InputCellProps) {
       data-cell={column}
       tabIndex={chosen && !editing ? 0 : -1}
       aria-selected={chosen}
-      aria-label={editing ? undefined : `${label}, ${text === '' ? 'not typed' : text}`}
+      aria-label={editing ? undefined : `${label}, ${none ? 'none' : text === '' ? 'not typed' : text}`}
+      aria-haspopup={law === null ? undefined : 'dialog'}
       aria-invalid={unread}
     >
-      {column === 'law' ? (
+      {law !== null ? (
         <>
-          <ElasticGlyph />
-          {!narrow && <span>{text}</span>}
+          <LawGlyph kind={law} />
+          {named && <span>{text}</span>}
         </>
       ) : editing ? (
         <CellInput path={cellPath(storey, column)} text={text} unread={unread} label={label} />
+      ) : none ? (
+        <span className="none">none</span>
       ) : (
         <span>{text}</span>
       )}
-      {fillHandle && !editing && column !== 'law' && <i className="fill-handle" data-fill="" />}
+      {fillHandle && !editing && <i className="fill-handle" data-fill="" />}
     </div>
   );
 });
 
-function RowMenu({ storey, name }: { readonly storey: number; readonly name: string }) {
+function RowMenu({ storey, row }: { readonly storey: number; readonly row: Row }) {
+  const { name, role, damper } = row;
   return (
     <Menu
       className="icon-button low row-menu"
-      label={`Storey ${storey + 1}${name === '' ? '' : `, ${name}`}: add, move, remove`}
+      label={`Storey ${storey + 1}${name === '' ? '' : `, ${name}`}: add, move, remove, damper`}
       tabIndex={-1}
       items={[
         { id: 'above', label: 'Add a storey above', keys: 'Alt+↑', run: () => add(storey, 'above') },
@@ -159,6 +178,10 @@ function RowMenu({ storey, name }: { readonly storey: number; readonly name: str
         { id: 'up', label: 'Move up', keys: 'Alt+Shift+↑', run: () => move(storey, true) },
         { id: 'down', label: 'Move down', keys: 'Alt+Shift+↓', run: () => move(storey, false) },
         { id: 'remove', label: 'Remove', keys: 'Alt+Delete', run: () => remove(storey) },
+        { id: 'damper', label: 'Damper', checked: damper !== undefined, run: () => toggleDamper(storey) },
+        ...(storey === 0
+          ? [{ id: 'isolator', label: 'Isolator', checked: role === 'isolator', run: () => isolate(storey) }]
+          : []),
       ]}
     >
       <Icon name="more" />
@@ -166,20 +189,15 @@ function RowMenu({ storey, name }: { readonly storey: number; readonly name: str
   );
 }
 
-function ElasticGlyph() {
-  return (
-    <svg width="18" height="12" viewBox="0 0 18 12" aria-hidden="true">
-      <path d="M2 11 16 1" fill="none" stroke="currentColor" strokeWidth="1.2" strokeLinecap="round" />
-    </svg>
-  );
-}
-
 function Answers(props: StoreyRowProps) {
-  const { storey, measure, drift, ratio, shear, acceleration, over, cell } = props;
+  const { storey, measure, drift, ratio, ductility, residual, shear, acceleration, over, cell } = props;
   const none = drift === 'none';
-  const says = none
-    ? `Storey ${storey + 1}, no answer`
-    : `Storey ${storey + 1}, ${measure} drift ${drift} percent, ${ratio} of the limit${over ? ', over' : ''}${props.old ? ', out of date' : ''}`;
+  const says =
+    props.isolator !== null
+      ? `Storey ${storey + 1}, isolator, ${props.isolator}, ${ratio} of its limit${over ? ', over' : ''}${props.old ? ', out of date' : ''}`
+      : none
+        ? `Storey ${storey + 1}, no answer`
+        : `Storey ${storey + 1}, ${measure} drift ${drift} percent, ${ratio} of the limit${over ? ', over' : ''}${props.old ? ', out of date' : ''}`;
   const past = over ? 'past' : '';
   const quiet = none ? 'none' : '';
   return (
@@ -197,6 +215,30 @@ function Answers(props: StoreyRowProps) {
       <div className={`answer ratio ${past} ${quiet}`} style={{ gridColumn: 'ratio' }} aria-hidden="true">
         {ratio}
       </div>
+      {ductility !== null && (
+        <div
+          role="gridcell"
+          className={`answer second ${ductility === 'none' ? 'none' : ''}`}
+          style={{ gridColumn: 'ductility' }}
+          data-cell="ductility"
+          tabIndex={cell === 'ductility' ? 0 : -1}
+          aria-label={`Storey ${storey + 1}, ductility ${ductility}`}
+        >
+          {ductility}
+        </div>
+      )}
+      {residual !== null && (
+        <div
+          role="gridcell"
+          className={`answer second ${quiet}`}
+          style={{ gridColumn: 'residual' }}
+          data-cell="residual"
+          tabIndex={cell === 'residual' ? 0 : -1}
+          aria-label={`Storey ${storey + 1}, residual drift ${residual === '' ? 'not compared' : `${residual} percent`}`}
+        >
+          {residual}
+        </div>
+      )}
       <div
         role="gridcell"
         className={`answer ${quiet}`}

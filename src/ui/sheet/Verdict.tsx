@@ -7,6 +7,7 @@ import { runNow, stop, useResults } from '../../state/results.ts';
 import { Button } from '../controls/Button.tsx';
 import { faultSentence } from '../controls/field.ts';
 import { CautionMark, Icon } from '../controls/Icon.tsx';
+import { Mends } from './Mends.tsx';
 
 export interface VerdictProps {
   readonly letters: Readonly<Record<string, string>>;
@@ -48,12 +49,9 @@ export function Verdict({ letters }: VerdictProps) {
   const failed = runs.find(({ run }) => run.ending !== null);
   const verdict = verdictOf(envelope, runs);
   if (failed !== undefined && envelope.incomplete.length > 0) {
-    const letter = letters[failed.motion] ?? failed.motion;
     return (
-      <Line kind="over" mark headline={verdict.headline} detail={verdict.detail}>
-        <Button size="medium" onClick={() => leaveOut(failed.motion)}>
-          Leave {letter} out
-        </Button>
+      <Line kind="over stopped" mark headline={verdict.headline} detail={verdict.detail}>
+        <Mends failed={failed} letter={letters[failed.motion] ?? failed.motion} why={verdict.detail} />
       </Line>
     );
   }
@@ -153,15 +151,6 @@ function Running() {
       </div>
     </>
   );
-}
-
-function leaveOut(name: string): void {
-  edit(`${name} left out`, (project) => ({
-    ...project,
-    motions: project.motions.map((motion) =>
-      motion.name === name ? { ...motion, used: false, reason: motion.reason ?? 'did not run to its end' } : motion,
-    ),
-  }));
 }
 
 function bringBack(name: string): void {

@@ -1,19 +1,57 @@
-import { printQuantity, type System } from '../../core/units/quantities.ts';
-import type { StoreyRow } from '../../document/project.ts';
+import { printQuantity, printTyped, type System } from '../../core/units/quantities.ts';
+import type { LawRow, StoreyRow, Typed } from '../../document/project.ts';
 import { typedText } from '../controls/field.ts';
 import { COLUMN_QUANTITIES, type InputColumn } from './columns.ts';
 
-/** Signs a cell has room for. */
+/** Signs a cell has room for where its column does not say. */
 const LONGEST = 8;
 
-/** What stands in a cell while it is not edited. */
-export function cellText(row: StoreyRow, column: InputColumn, system: System): string {
+/** The value of a cell; null where there is none. */
+export function cellValue(row: StoreyRow, column: Exclude<InputColumn, 'law'>): Typed {
+  switch (column) {
+    case 'strength':
+    case 'hardening':
+      return lawValue(row.law, column);
+    case 'coefficient':
+    case 'exponent':
+      return row.damper?.[column] ?? null;
+    default:
+      return row[column] ?? null;
+  }
+}
+
+function lawValue(law: LawRow, key: 'strength' | 'hardening'): Typed {
+  return law.kind === 'elastic' ? null : law[key];
+}
+
+/** What stands in a cell while it is not edited, in full. */
+export function fullText(row: StoreyRow, column: InputColumn, system: System): string {
   if (column === 'law') return row.law.kind;
-  if (column === 'name') return row.name;
-  const value = row[column] ?? null;
+  const value = cellValue(row, column);
+  // Hardening is a figure or two: 3, not 3.00.
+  if (column === 'hardening' && typeof value === 'number') return printTyped(value, 'percent', system);
+  return typedText(value, COLUMN_QUANTITIES[column], system);
+}
+
+/**
+ * The same in the room of the cell. A number typed in the other system has no short form: the cell rounds it, the line above and
+ * the edit show all of it.
+ */
+export function cellText(row: StoreyRow, column: InputColumn, system: System, signs = LONGEST): string {
+  const full = fullText(row, column, system);
+  if (column === 'law' || column === 'name' || full.length <= signs) return full;
+  const value = cellValue(row, column);
   const quantity = COLUMN_QUANTITIES[column];
-  const full = typedText(value, quantity, system);
-  // A number typed in the other system has no short form: the cell rounds it, the edit shows all of it.
-  if (typeof value !== 'number' || quantity === null || full.length <= LONGEST) return full;
-  return printQuantity(value, quantity, system, 2);
+  if (typeof value !== 'number' || quantity === null) return full;
+  for (const decimals of [2, 1]) {
+    const text = printQuantity(value, quantity, system, decimals);
+    if (text.length <= signs) return text;
+  }
+  return printQuantity(value, quantity, system, 0);
+}
+
+/** Whether a cell holds nothing because its storey has no such part: the cell says "none". */
+export function isNone(row: StoreyRow, column: InputColumn): boolean {
+  if (column === 'strength' || column === 'hardening') return row.law.kind === 'elastic';
+  return (column === 'coefficient' || column === 'exponent') && row.damper === undefined;
 }

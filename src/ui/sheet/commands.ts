@@ -1,10 +1,11 @@
-import { addStorey, moveStorey, removeStorey } from '../../document/edits.ts';
+import { addStorey, clearDamper, moveStorey, removeStorey, setDamper, setLaw, setRole } from '../../document/edits.ts';
 import { readAt, writeAt } from '../../document/fields.ts';
-import { MAX_STOREYS, type Project } from '../../document/project.ts';
+import { lawLike } from '../../document/lawLike.ts';
+import { MAX_STOREYS, type Project, type StoreyRow } from '../../document/project.ts';
 import { documentStore, edit } from '../../state/document.ts';
 import { sessionStore, setSession } from '../../state/session.ts';
 import { commitOpenDraft } from '../controls/field.ts';
-import { cellPath, isTyped } from './columns.ts';
+import { cellPath, isTyped, takes } from './columns.ts';
 import { coverOf, single } from './move.ts';
 
 /** Chooses a cell, and with it the storey whose histories are shown. */
@@ -51,6 +52,25 @@ export function move(storey: number, up: boolean): void {
   choose(to, column());
 }
 
+/** Gives a storey a damper, or takes it out. */
+export function toggleDamper(storey: number): void {
+  commitOpenDraft();
+  const has = documentStore.getState().project.frame.storeys[storey]?.damper !== undefined;
+  edit(`storey ${storey + 1} damper ${has ? 'taken out' : 'added'}`, (project) =>
+    has ? clearDamper(project, [storey]) : setDamper(project, [storey]),
+  );
+  if (!has) choose(storey, 'coefficient');
+}
+
+/** Makes a storey an isolator, or an isolator a storey again. */
+export function isolate(storey: number): void {
+  commitOpenDraft();
+  const is = documentStore.getState().project.frame.storeys[storey]?.role === 'isolator';
+  edit(`storey ${storey + 1} ${is ? 'a storey again' : 'made an isolator'}`, (project) =>
+    setRole(project, storey, is ? 'storey' : 'isolator'),
+  );
+}
+
 /** The chosen block: storeys from high to low, as they stand on the sheet, and its columns. */
 export function chosenBlock(
   columns: readonly string[],
@@ -73,7 +93,10 @@ export function clear(columns: readonly string[]): void {
     let next = project;
     for (const storey of block.storeys) {
       for (const key of block.columns) {
-        if (isTyped(key)) next = writeAt(next, cellPath(storey, key), key === 'name' ? '' : null);
+        if (key === 'law') next = setLaw(next, [storey], 'elastic');
+        else if (takes(next.frame.storeys[storey], key)) {
+          next = writeAt(next, cellPath(storey, key), key === 'name' ? '' : null);
+        }
       }
     }
     return next;
@@ -104,11 +127,20 @@ export function fill(columns: readonly string[], from: number, to: readonly numb
 function copied(project: Project, columns: readonly string[], from: number, to: readonly number[]): Project {
   let next = project;
   for (const key of columns) {
+    if (key === 'law') next = lawLike(next, from, to);
     if (!isTyped(key)) continue;
+    // A storey without a part has none to give, and one without it takes no number of it.
+    if (!holds(project.frame.storeys[from], key)) continue;
     const value = readAt(project, cellPath(from, key));
-    for (const storey of to) next = writeAt(next, cellPath(storey, key), value);
+    for (const storey of to) {
+      if (takes(next.frame.storeys[storey], key)) next = writeAt(next, cellPath(storey, key), value);
+    }
   }
   return next;
+}
+
+function holds(row: StoreyRow | undefined, key: string): boolean {
+  return key === 'strength' ? row?.law.kind !== 'elastic' : takes(row, key);
 }
 
 function blockLabel({ storeys }: { readonly storeys: readonly number[] }, done: string): string {

@@ -9,6 +9,38 @@ export function columnPath(xFoot: number, yFoot: number, xHead: number, yHead: n
   return `M${px(xFoot)} ${px(yFoot)}C${px(xFoot)} ${px(yFoot - reach)} ${px(xHead)} ${px(yHead + reach)} ${px(xHead)} ${px(yHead)}`;
 }
 
+/** Half the width of a bearing's plates and half its thickness [px]. */
+const PLATE = 11;
+const PAD = 7;
+
+/**
+ * A bearing between the ground and the floor it carries: a pad of layers between two plates, sheared by what the floor moves, on a
+ * pedestal, under a stub of the floor.
+ */
+export function bearingPath(xFoot: number, yFoot: number, xHead: number, yHead: number): string {
+  const middle = (yFoot + yHead) / 2;
+  const pad = Math.min(PAD, 0.3 * (yFoot - yHead));
+  const at = (share: number) => ({ x: xFoot + share * (xHead - xFoot), y: middle + pad - 2 * pad * share });
+  const layer = (share: number, half: number) => {
+    const { x, y } = at(share);
+    return `M${px(x - half)} ${px(y)}H${px(x + half)}`;
+  };
+  const sides = [-1, 1].map(
+    (side) =>
+      `M${px(xFoot + side * (PLATE - 3))} ${px(middle + pad)}L${px(xHead + side * (PLATE - 3))} ${px(middle - pad)}`,
+  );
+  const stands = `M${px(xFoot)} ${px(yFoot)}V${px(middle + pad)}M${px(xHead)} ${px(yHead)}V${px(middle - pad)}`;
+  return [layer(0, PLATE), layer(1, PLATE), layer(1 / 3, PLATE - 3), layer(2 / 3, PLATE - 3), ...sides, stands].join(
+    '',
+  );
+}
+
+/** Where the marks of a storey that yields stand on one of its columns, foot and head: as far inside the storey as its row allows. */
+export function markPlaces(yFoot: number, yHead: number): { readonly foot: number; readonly head: number } {
+  const inset = Math.min(6, (yFoot - yHead) / 5);
+  return { foot: yFoot - inset, head: yHead + inset };
+}
+
 /** Upright ticks of one row as one path. */
 export function ticksPath(xs: readonly number[], top: number, bottom: number): string {
   return xs.map((x) => `M${px(x)} ${px(top)}V${px(bottom)}`).join('');

@@ -2,7 +2,7 @@ import type { KeyboardEvent } from 'react';
 import { documentStore } from '../../state/document.ts';
 import { sessionStore, setSession } from '../../state/session.ts';
 import { commitField, giveUpField, isAmbiguous, openField, typeField } from '../controls/field.ts';
-import { cellOf, cellPath, isTyped } from './columns.ts';
+import { cellOf, cellPath, isTyped, takes } from './columns.ts';
 import { add, choose, clear, fillDown, move, remove } from './commands.ts';
 import { type Ground, moved, type Step } from './move.ts';
 
@@ -27,6 +27,8 @@ export interface Keyboard {
   readonly cell: { readonly storey: number; readonly column: string };
   /** Makes the first storey of an empty sheet; nothing where there is one. */
   readonly ensureStorey: () => void;
+  /** Opens the panel of a storey's law. */
+  readonly openLaw: (storey: number) => void;
 }
 
 /** Everything the keys do on the sheet. Returns true where the key is taken. */
@@ -85,7 +87,12 @@ function restingKey(event: KeyboardEvent, keyboard: Keyboard): boolean {
     if (key.toLowerCase() === 'a') {
       const { storeys } = keyboard.ground;
       setSession({
-        selection: { storey: storeys - 1, column: 'height', anchorStorey: 0, anchorColumn: 'stiffness' },
+        selection: {
+          storey: storeys - 1,
+          column: 'height',
+          anchorStorey: 0,
+          anchorColumn: keyboard.inputs.at(-1) ?? 'stiffness',
+        },
       });
       return true;
     }
@@ -96,7 +103,7 @@ function restingKey(event: KeyboardEvent, keyboard: Keyboard): boolean {
     case 'End':
       return go(keyboard, key === 'Home' ? 'first' : 'last', shiftKey);
     case 'Enter':
-      return go(keyboard, shiftKey ? 'up' : 'down', false);
+      return column === 'law' && !shiftKey ? open(keyboard) : go(keyboard, shiftKey ? 'up' : 'down', false);
     case 'Tab':
       return tab(event, keyboard, () => {});
     case 'F2':
@@ -109,27 +116,37 @@ function restingKey(event: KeyboardEvent, keyboard: Keyboard): boolean {
       choose(storey, column);
       return true;
     default:
+      if (column === 'law' && (key === ' ' || /^[a-z]$/i.test(key))) return open(keyboard);
       if (key.length !== 1 || key === ' ' || !isTyped(column)) return false;
       if ('[]?'.includes(key) && column !== 'name') return false;
-      begin(keyboard);
+      if (!begin(keyboard)) return true;
       typeField(cellPath(storey, column), key, sessionStore.getState().system);
       return true;
   }
 }
 
-/** Opens the chosen cell with its value. */
+/** Opens the chosen cell with its value, a law with its panel. */
 export function open(keyboard: Keyboard): boolean {
   const { storey, column } = keyboard.cell;
+  if (column === 'law') {
+    if (begin(keyboard)) keyboard.openLaw(storey);
+    return true;
+  }
   if (!isTyped(column)) return false;
-  begin(keyboard);
+  if (!begin(keyboard)) return true;
   openField(cellPath(storey, column), sessionStore.getState().system);
   return true;
 }
 
-/** An edit begins: the cell is the reader's own from here on, and on an empty sheet its storey is made. */
-function begin({ cell, ensureStorey }: Keyboard): void {
-  if (sessionStore.getState().selection === null) choose(cell.storey, cell.column);
+/**
+ * An edit begins: the cell is the reader's own from here on, and on an empty sheet its storey is made. False where the storey takes
+ * nothing there; the line above says why.
+ */
+function begin({ cell, ensureStorey }: Keyboard): boolean {
+  const { storey, column } = cell;
+  if (sessionStore.getState().selection === null) choose(storey, column);
   ensureStorey();
+  return column === 'law' || takes(documentStore.getState().project.frame.storeys[storey], column);
 }
 
 function altKeyOn(event: KeyboardEvent, storey: number): boolean {

@@ -5,8 +5,10 @@ export interface SheetLayout {
   /** Under 1200 px: the law is a glyph, shear and acceleration are numbers only. */
   readonly narrow: boolean;
   readonly margin: number;
-  /** Width of the page: the window's, or 900 px with a sideways scroll. */
+  /** Width of the page: the window's, or more with a sideways scroll where the columns ask for it. */
   readonly width: number;
+  /** Whether the page is wider than what is seen of it. */
+  readonly sideways: boolean;
   readonly inputs: Span;
   readonly frame: Span;
   /** The answer side: everything right of the gutter. */
@@ -15,6 +17,10 @@ export interface SheetLayout {
   /** Null where the plot is folded away and only its number stands. */
   readonly shear: Span | null;
   readonly acceleration: Span | null;
+  /** Whether the name of a law stands beside its glyph. */
+  readonly lawNames: boolean;
+  /** Signs a column has room for. */
+  readonly signs: Readonly<Partial<Record<InputColumn, number>>>;
   /** Tracks of a row as a CSS grid with named lines. */
   readonly tracks: string;
 }
@@ -24,8 +30,11 @@ export interface Span {
   readonly width: number;
 }
 
-const NARROW_UNDER = 1200;
+/** Window from which the wide form is shown. */
+export const WIDE_FROM = 1200;
 const SCROLLS_UNDER = 900;
+/** Window from which ductility and residual drift stand on the row by themselves. */
+export const ROOMY_FROM = 1560;
 
 interface Sizes {
   readonly inputs: number;
@@ -35,6 +44,8 @@ interface Sizes {
   readonly drift: number;
   readonly mean: number;
   readonly ratio: number;
+  readonly ductility: number;
+  readonly residual: number;
   readonly gap: number;
   readonly shear: number;
   readonly force: number;
@@ -51,6 +62,8 @@ const WIDE: Sizes = {
   drift: 270,
   mean: 46,
   ratio: 58,
+  ductility: 0,
+  residual: 0,
   gap: 22,
   shear: 86,
   force: 52,
@@ -66,6 +79,8 @@ const NARROW: Sizes = {
   drift: 202,
   mean: 44,
   ratio: 54,
+  ductility: 0,
+  residual: 0,
   gap: 14,
   shear: 0,
   force: 54,
@@ -73,15 +88,50 @@ const NARROW: Sizes = {
   g: 44,
 };
 
-/** Shares of the input side a column takes. */
-const SHARES: Readonly<Record<'wide' | 'narrow', Readonly<Record<InputColumn, number>>>> = {
-  wide: { name: 168, height: 76, mass: 92, stiffness: 104, law: 116, gravity: 96 },
-  narrow: { name: 112, height: 62, mass: 74, stiffness: 78, law: 34, gravity: 74 },
+/** Ductility and residual drift take their room from the plots beside them; the drift keeps what is left. */
+const YIELDING = { ductility: 44, residual: 46, gap: 18, shear: 70, acceleration: 52 };
+const LEAST_DRIFT = 140;
+const LEAST_FRAME = 150;
+
+/** Width of an input column: the least that its numbers fit in, and what it likes to have. The law: its glyph alone, with its name. */
+const COLUMNS: Readonly<Record<InputColumn, readonly [least: number, usual: number]>> = {
+  name: [84, 126],
+  height: [44, 52],
+  mass: [52, 64],
+  stiffness: [56, 72],
+  law: [34, 112],
+  strength: [54, 68],
+  hardening: [46, 62],
+  gravity: [58, 72],
+  coefficient: [58, 72],
+  exponent: [46, 56],
 };
+/** The name of a law is cut off below. */
+const NAMED_LAW = 104;
+/** Room beside the figures of a cell, and the width of a figure [px]. */
+const CELL_EDGE = 9;
+const FIGURE = 7.4;
 
 function total(sizes: Sizes): number {
-  const { inputs, gapFrame, frame, gutter, drift, mean, ratio, gap, shear, force, acceleration, g } = sizes;
-  return inputs + gapFrame + frame + gutter + drift + mean + ratio + gap + shear + force + gap + acceleration + g;
+  const { inputs, gapFrame, frame, gutter, drift, mean, ratio, ductility, residual, gap } = sizes;
+  const { shear, force, acceleration, g } = sizes;
+  return (
+    inputs +
+    gapFrame +
+    frame +
+    gutter +
+    drift +
+    mean +
+    ratio +
+    ductility +
+    residual +
+    gap +
+    shear +
+    force +
+    gap +
+    acceleration +
+    g
+  );
 }
 
 /** Whole pixels in proportion to the shares, rounded on the running sum. */
@@ -116,53 +166,97 @@ function between(share: number): Sizes {
   };
 }
 
+function formOf(narrow: boolean, room: number): Sizes {
+  if (narrow) return stretch(NARROW, room - total(NARROW));
+  if (room >= total(WIDE)) return stretch(WIDE, room - total(WIDE));
+  const share = Math.max(0, (room - total(TIGHT)) / (total(WIDE) - total(TIGHT)));
+  const mixed = between(share);
+  return { ...mixed, drift: room - total(mixed) };
+}
+
+/** The form with ductility and residual drift on the row, as wide as it was. */
+function withYielding(sizes: Sizes): Sizes {
+  const { ductility, residual, gap, shear, acceleration } = YIELDING;
+  const made = {
+    ...sizes,
+    ductility,
+    residual,
+    gap: Math.min(sizes.gap, gap),
+    shear: Math.min(sizes.shear, shear),
+    acceleration: Math.min(sizes.acceleration, acceleration),
+  };
+  return { ...made, drift: sizes.drift - (total(made) - total(sizes)) };
+}
+
+/** Widths of the input columns in a room, or in what they need at least. */
+function widthsOf(room: number, columns: readonly InputColumn[], narrow: boolean): number[] {
+  const sum = (all: readonly number[]) => all.reduce((a, b) => a + b, 0);
+  const least = (named: boolean) => columns.map((key) => (key === 'law' && named ? NAMED_LAW : COLUMNS[key][0]));
+  const named = !narrow && sum(least(true)) <= room;
+  const lows = least(named);
+  const usual = columns.map((key) => (key === 'law' && !named ? COLUMNS.law[0] : COLUMNS[key][1]));
+  const free = room - sum(lows);
+  if (free <= 0) return lows;
+  const wishes = usual.map((size, index) => size - lows[index]);
+  const wished = sum(wishes);
+  const grown = split(Math.min(free, wished), wishes).map((size, index) => size + lows[index]);
+  return free <= wished ? grown : split(free - wished, grown).map((size, index) => size + grown[index]);
+}
+
 /**
  * The layout of the sheet for a window of a width.
  *
  * @param available  width the page may take [px]
  * @param window     width of the window, which alone decides the form, so that a scroll bar cannot flip it [px]
  * @param columns    input columns shown, from left to right
+ * @param yielding   whether ductility and residual drift stand on the row
  */
-export function layoutOf(available: number, window: number, columns: readonly InputColumn[]): SheetLayout {
-  const narrow = window < NARROW_UNDER;
+export function layoutOf(
+  available: number,
+  window: number,
+  columns: readonly InputColumn[],
+  yielding = false,
+): SheetLayout {
+  const narrow = window < WIDE_FROM;
   const margin = narrow ? 16 : 24;
-  const width = Math.max(available, SCROLLS_UNDER);
-  const room = width - 2 * margin;
-  let sizes: Sizes;
-  if (narrow) sizes = stretch(NARROW, room - total(NARROW));
-  else if (room >= total(WIDE)) sizes = stretch(WIDE, room - total(WIDE));
-  else {
-    const share = Math.max(0, (room - total(TIGHT)) / (total(WIDE) - total(TIGHT)));
-    const mixed = between(share);
-    sizes = { ...mixed, drift: room - total(mixed) };
-  }
+  const form = formOf(narrow, Math.max(available, SCROLLS_UNDER) - 2 * margin);
+  const sizes = yielding ? withYielding(form) : form;
+  const widths = widthsOf(sizes.inputs, columns, narrow);
+  const taken = widths.reduce((sum, size) => sum + size, 0);
+  // More columns than the inputs have room for: the drift plot gives of its own, then the frame, then the page grows.
+  const short = taken - sizes.inputs + Math.max(0, LEAST_DRIFT - sizes.drift);
+  const driftGives = Math.min(Math.max(0, sizes.drift - LEAST_DRIFT), short);
+  const frameGives = Math.min(Math.max(0, sizes.frame - LEAST_FRAME), short - driftGives);
+  const driftWidth = Math.max(LEAST_DRIFT, sizes.drift - driftGives);
+  const frameWidth = sizes.frame - frameGives;
 
-  const shares = SHARES[narrow ? 'narrow' : 'wide'];
-  const widths = split(
-    sizes.inputs,
-    columns.map((column) => shares[column]),
-  );
-  const inputs = { x: margin, width: sizes.inputs };
-  const frame = { x: inputs.x + inputs.width + sizes.gapFrame, width: sizes.frame };
-  const drift = { x: frame.x + frame.width + sizes.gutter, width: sizes.drift };
-  const shearX = drift.x + drift.width + sizes.mean + sizes.ratio + sizes.gap;
+  const inputs = { x: margin, width: taken };
+  const frame = { x: inputs.x + inputs.width + sizes.gapFrame, width: frameWidth };
+  const drift = { x: frame.x + frame.width + sizes.gutter, width: driftWidth };
+  const shearX = drift.x + drift.width + sizes.mean + sizes.ratio + sizes.ductility + sizes.residual + sizes.gap;
   const accelerationX = shearX + sizes.shear + sizes.force + sizes.gap;
+  const width = accelerationX + sizes.acceleration + sizes.g + margin;
   const tracks = [
     ...columns.map((column, index) => `[${column}] ${widths[index]}px`),
-    `${sizes.gapFrame}px [frame] ${sizes.frame}px ${sizes.gutter}px`,
-    `[drift] ${sizes.drift}px [mean] ${sizes.mean}px [ratio] ${sizes.ratio}px ${sizes.gap}px`,
-    `[shear] ${sizes.shear}px [force] ${sizes.force}px ${sizes.gap}px [acceleration] ${sizes.acceleration}px [g] ${sizes.g}px`,
+    `${sizes.gapFrame}px [frame] ${frame.width}px ${sizes.gutter}px`,
+    `[drift] ${drift.width}px [mean] ${sizes.mean}px [ratio] ${sizes.ratio}px`,
+    yielding ? `[ductility] ${sizes.ductility}px [residual] ${sizes.residual}px` : '',
+    `${sizes.gap}px [shear] ${sizes.shear}px [force] ${sizes.force}px ${sizes.gap}px`,
+    `[acceleration] ${sizes.acceleration}px [g] ${sizes.g}px`,
   ].join(' ');
   return {
     narrow,
     margin,
     width,
+    sideways: width > available,
     inputs,
     frame,
     answers: { x: drift.x, width: width - margin - drift.x },
     drift,
     shear: narrow ? null : { x: shearX, width: sizes.shear },
     acceleration: narrow ? null : { x: accelerationX, width: sizes.acceleration },
+    lawNames: (widths[columns.indexOf('law')] ?? 0) >= NAMED_LAW,
+    signs: Object.fromEntries(columns.map((key, i) => [key, Math.floor((widths[i] - CELL_EDGE) / FIGURE)])),
     tracks,
   };
 }

@@ -1,9 +1,10 @@
 import type { System } from '../../core/units/quantities.ts';
 import { type ColumnReading, readColumn } from '../../core/units/read.ts';
-import { growTo } from '../../document/edits.ts';
+import { growTo, setLaw } from '../../document/edits.ts';
 import { writeAt } from '../../document/fields.ts';
 import { MAX_STOREYS, type Project, type Typed } from '../../document/project.ts';
 import { COLUMN_NAMES, COLUMN_QUANTITIES, cellPath, type InputColumn, isInput } from './columns.ts';
+import { LAWS, lawNamed } from './lawWords.ts';
 
 /** How the commas of a column that leaves it open are meant. */
 export type Commas = 'decimal' | 'thousands';
@@ -70,11 +71,11 @@ export function planPaste(
     faults.push(...read.faults);
     if (read.values !== null) filled.push({ column, values: read.values });
   }
-  if (faults.length > 0) return { kind: 'refused', faults };
-
   const count = project.frame.storeys.length;
   const rows = block.length;
   const top = Math.max(rows - 1, Math.min(storey, Math.max(count, rows) - 1));
+  faults.push(...partFaults(project, filled, rows, top));
+  if (faults.length > 0) return { kind: 'refused', faults };
   return {
     kind: 'ready',
     low: top - rows + 2,
@@ -83,7 +84,10 @@ export function planPaste(
     apply: (before) => {
       let next = growTo(before, top + 1);
       for (const { column, values } of filled) {
-        for (const [row, value] of values.entries()) next = writeAt(next, cellPath(top - row, column), value);
+        for (const [row, value] of values.entries()) {
+          if (column !== 'law') next = writeAt(next, cellPath(top - row, column), value);
+          else if (typeof value === 'string') next = setLaw(next, [top - row], lawNamed(value) ?? 'elastic');
+        }
       }
       return next;
     },
@@ -128,32 +132,34 @@ function readInto(
   system: System,
   commas: Commas | undefined,
 ): Read | Extract<PastePlan, { kind: 'commas' }> {
-  const place = (row: number) => `Row ${row + 1}, ${COLUMN_NAMES[column]}`;
+  const place = (row: number) => placeOf(row, column);
   if (column === 'name') return { values: texts, faults: [] };
   if (column === 'law') {
     const faults = texts.flatMap((text, row) =>
-      text === '' || text === 'elastic'
+      text === '' || lawNamed(text) !== null
         ? []
         : [
             {
               place: place(row),
-              what: `is "${text}", elastic is the only law of this version`,
-              mend: 'Copy the columns without the law',
+              what: `is "${text}", which is no law`,
+              mend: `Use ${LAWS.map(({ kind }) => kind).join(', ')}`,
             },
           ],
     );
-    return { values: null, faults };
+    return { values: texts.map((text) => (text === '' ? null : text)), faults };
   }
   const quantity = COLUMN_QUANTITIES[column];
   if (quantity === null) return { values: null, faults: [] };
-  const reading: ColumnReading = readColumn(texts, quantity, system);
+  // "none" is what a cell says of a part that its storey does not have.
+  const given = texts.map((text) => (text === 'none' ? '' : text));
+  const reading: ColumnReading = readColumn(given, quantity, system);
   switch (reading.kind) {
     case 'values':
-      return positive(reading.values, texts, place);
+      return inRange(column, reading.values, texts, place);
     case 'undecided':
       return commas === undefined
-        ? { kind: 'commas', column, texts, decimal: reading.decimal, thousands: reading.thousands }
-        : positive(reading[commas], texts, place);
+        ? { kind: 'commas', column, texts: given, decimal: reading.decimal, thousands: reading.thousands }
+        : inRange(column, reading[commas], texts, place);
     case 'faults':
       return {
         values: null,
@@ -166,12 +172,62 @@ function readInto(
   }
 }
 
-/** A storey has no height, weight or stiffness of zero or less. */
-function positive(values: readonly (number | null)[], texts: readonly string[], place: (row: number) => string): Read {
+function placeOf(row: number, column: InputColumn): string {
+  return `Row ${row + 1}, ${COLUMN_NAMES[column]}`;
+}
+
+interface Range {
+  readonly holds: (value: number) => boolean;
+  readonly words: string;
+}
+/** Ranges that the cells refuse beyond, as the project file says; a storey has no height, weight or stiffness of zero or less. */
+const ABOVE_0: Range = { holds: (value) => value > 0, words: 'above 0' };
+const FROM_0: Range = { holds: (value) => value >= 0, words: '0 or more' };
+const RANGES: Readonly<Partial<Record<InputColumn, Range>>> = {
+  gravity: FROM_0,
+  coefficient: FROM_0,
+  hardening: { holds: (value) => value >= 0 && value < 1, words: 'from 0 to under 100 %' },
+  exponent: { holds: (value) => value >= 0.15 && value <= 2, words: 'from 0.15 to 2' },
+};
+
+function inRange(
+  column: InputColumn,
+  values: readonly (number | null)[],
+  texts: readonly string[],
+  place: (row: number) => string,
+): Read {
+  const { holds, words } = RANGES[column] ?? ABOVE_0;
   const faults = values.flatMap((value, row) =>
-    value === null || value > 0
+    value === null || holds(value)
       ? []
-      : [{ place: place(row), what: `is ${texts[row]}, must be above 0`, mend: 'Copy a value above 0' }],
+      : [{ place: place(row), what: `is ${texts[row]}, must be ${words}`, mend: `Copy a value ${words}` }],
   );
   return { values, faults };
+}
+
+/** Numbers of a part that the storey would not have: the block says elastic beside a strength, or hardening without one. */
+function partFaults(project: Project, filled: readonly Filled[], rows: number, top: number): PasteFault[] {
+  const { storeys } = project.frame;
+  const at = (column: InputColumn, row: number) => filled.find((entry) => entry.column === column)?.values[row] ?? null;
+  const faults: PasteFault[] = [];
+  for (let row = 0; row < rows; row++) {
+    // A storey that the block makes starts as a copy of the roof storey.
+    const before = storeys[Math.min(top - row, storeys.length - 1)];
+    const named = at('law', row);
+    const law = typeof named === 'string' ? lawNamed(named) : (before?.law.kind ?? 'elastic');
+    const strength = at('strength', row);
+    if (typeof named === 'string' && law === 'elastic' && strength !== null) {
+      const what = 'stands beside the elastic law, which has none';
+      faults.push({ place: placeOf(row, 'strength'), what, mend: 'Copy another law, or leave the strength out' });
+    }
+    if (at('hardening', row) !== null && law === 'elastic' && strength === null) {
+      const what = 'is of an elastic storey, which has none';
+      faults.push({ place: placeOf(row, 'hardening'), what, mend: 'Copy a law or a strength beside it' });
+    }
+    if (at('exponent', row) !== null && before?.damper === undefined && at('coefficient', row) === null) {
+      const what = 'is of a storey without a damper';
+      faults.push({ place: placeOf(row, 'exponent'), what, mend: 'Copy the force at 1 m/s beside it' });
+    }
+  }
+  return faults;
 }

@@ -1,6 +1,7 @@
 import { type RefObject, useLayoutEffect, useMemo, useState } from 'react';
-import { inputColumns } from './columns.ts';
-import { layoutOf, type SheetLayout } from './layout.ts';
+import { type InputColumn, inputColumns } from './columns.ts';
+import { layoutOf, ROOMY_FROM, type SheetLayout, WIDE_FROM } from './layout.ts';
+import type { Shown } from './shown.ts';
 
 /** Heights of the parts above and below the sheet [px]: top bar, line and verdict, heads, ground, footers. */
 const WIDE_AROUND = 48 + 44 + 60 + 12 + 62;
@@ -10,13 +11,21 @@ const LEAST_FREE = 300;
 
 export interface PageSize {
   readonly layout: SheetLayout;
-  readonly columns: ReturnType<typeof inputColumns>;
+  readonly columns: readonly InputColumn[];
+  readonly shown: Shown;
   /** Height the building may take [px]. */
   readonly free: number;
 }
 
-/** The layout of the sheet for the page as wide as it is. */
-export function useLayout(page: RefObject<HTMLElement | null>, gravity: boolean): PageSize {
+/**
+ * The layout of the sheet for the page as wide as it is.
+ *
+ * @param show  the columns shown on a page that is narrow, or roomy; the same function for the same columns
+ */
+export function useLayout(
+  page: RefObject<HTMLElement | null>,
+  show: (narrow: boolean, roomy: boolean) => Shown,
+): PageSize {
   const [size, setSize] = useState({ width: window.innerWidth, window: window.innerWidth, height: window.innerHeight });
   useLayoutEffect(() => {
     const measure = () => {
@@ -36,10 +45,13 @@ export function useLayout(page: RefObject<HTMLElement | null>, gravity: boolean)
       window.removeEventListener('resize', measure);
     };
   }, [page]);
-  return useMemo(() => {
-    const columns = inputColumns(gravity);
-    const layout = layoutOf(size.width, size.window, columns);
+  const shown = useMemo(() => show(size.window < WIDE_FROM, size.window >= ROOMY_FROM), [show, size.window]);
+  const { hardening, gravity, damper, answers } = shown;
+  const parts = useMemo(() => {
+    const columns = inputColumns({ hardening, gravity, damper });
+    const layout = layoutOf(size.width, size.window, columns, answers);
     const around = layout.narrow ? NARROW_AROUND : WIDE_AROUND;
     return { columns, layout, free: Math.max(LEAST_FREE, size.height - around - PANELS) };
-  }, [size, gravity]);
+  }, [size, hardening, gravity, damper, answers]);
+  return { ...parts, shown };
 }

@@ -3,7 +3,7 @@ import { describe, expect, it } from 'vitest';
 import { axisFor, linesOf } from '../../../src/ui/sheet/axis.ts';
 import { inputColumns } from '../../../src/ui/sheet/columns.ts';
 import { columnPath, columnWidths, swayFactor, ticksPath } from '../../../src/ui/sheet/drawing.ts';
-import { layoutOf } from '../../../src/ui/sheet/layout.ts';
+import { layoutOf, ROOMY_FROM, WIDE_FROM } from '../../../src/ui/sheet/layout.ts';
 import { rowsOf } from '../../../src/ui/sheet/rows.ts';
 
 describe('rows to scale', () => {
@@ -49,7 +49,11 @@ describe('rows to scale', () => {
 
 describe('layout', () => {
   it('stands where the look puts it at 1600 px', () => {
-    const layout = layoutOf(1600, 1600, inputColumns(false));
+    const layout = layoutOf(1600, 1600, inputColumns({ hardening: true, gravity: false, damper: false }));
+    expect(layout.lawNames).toBe(true);
+    expect(layout.tracks).toMatch(
+      /^\[name\] 126px \[height\] 52px \[mass\] 64px \[stiffness\] 72px \[law\] 112px \[strength\] 68px \[hardening\] 62px/,
+    );
     expect(layout.inputs).toEqual({ x: 24, width: 556 });
     expect(layout.frame).toEqual({ x: 596, width: 296 });
     expect(layout.answers).toEqual({ x: 916, width: 660 });
@@ -59,19 +63,34 @@ describe('layout', () => {
   });
 
   it('folds the small plots away at 1024 px', () => {
-    const layout = layoutOf(1024, 1024, inputColumns(false));
+    const layout = layoutOf(1024, 1024, inputColumns({ hardening: false, gravity: false, damper: false }));
+    expect(layout.lawNames).toBe(false);
     expect(layout.frame).toEqual({ x: 388, width: 178 });
     expect(layout.drift).toEqual({ x: 582, width: 202 });
     expect(layout.shear).toBeNull();
   });
 
+  it('needs no sideways scroll for what it shows by itself', () => {
+    for (let width = 900; width <= 2600; width += 7) {
+      const narrow = width < WIDE_FROM;
+      const columns = inputColumns({ hardening: !narrow, gravity: false, damper: false });
+      expect(layoutOf(width, width, columns, width >= ROOMY_FROM).width, `${width}`).toBe(width);
+    }
+  });
+
   it('fills every width from 900 px on to the pixel', () => {
     for (let width = 900; width <= 2600; width += 7) {
-      for (const gravity of [false, true]) {
-        const layout = layoutOf(width, width, inputColumns(gravity));
-        const sum = [...layout.tracks.matchAll(/(-?\d+)px/g)].reduce((all, match) => all + Number(match[1]), 0);
-        expect(sum, `${width}`).toBe(width - 2 * layout.margin);
-        expect(layout.drift.width, `${width}`).toBeGreaterThanOrEqual(140);
+      for (const more of [0, 1, 2, 3, 4, 5, 6, 7]) {
+        const columns = inputColumns({ hardening: (more & 1) > 0, gravity: (more & 2) > 0, damper: (more & 4) > 0 });
+        for (const yielding of [false, true]) {
+          const layout = layoutOf(width, width, columns, yielding);
+          const sum = [...layout.tracks.matchAll(/(-?\d+)px/g)].reduce((all, match) => all + Number(match[1]), 0);
+          expect(sum, `${width}`).toBe(layout.width - 2 * layout.margin);
+          expect(layout.sideways, `${width}`).toBe(layout.width > width);
+          expect(layout.width, `${width}`).toBeGreaterThanOrEqual(width);
+          expect(layout.drift.width, `${width}`).toBeGreaterThanOrEqual(140);
+          expect(Math.min(...Object.values(layout.signs)), `${width}`).toBeGreaterThanOrEqual(3);
+        }
       }
     }
   });

@@ -5,7 +5,7 @@ import type { Project } from '../../../src/document/project.ts';
 import { inputColumns } from '../../../src/ui/sheet/columns.ts';
 import { type PastePlan, planPaste } from '../../../src/ui/sheet/paste.ts';
 
-const columns = inputColumns(false);
+const columns = inputColumns({ hardening: true, gravity: false, damper: false });
 const four = makeEqualStoreys(emptyProject(), 4, 3);
 
 function plan(project: Project, block: string[][], storey: number, column = 'height', commas = {}): PastePlan {
@@ -72,7 +72,7 @@ describe('a pasted block', () => {
   });
 
   it('wider than the columns, or taller than a frame can be, is refused', () => {
-    expect(plan(four, [['1', '2']], 0, 'law').kind).toBe('refused');
+    expect(plan(four, [['1', '2']], 0, 'hardening').kind).toBe('refused');
     expect(
       plan(
         four,

@@ -1,0 +1,22 @@
+import type { LawRow } from '../../document/project.ts';
+
+export type LawKind = LawRow['kind'];
+
+/** The laws, each in a few plain words. */
+export const LAWS: readonly { readonly kind: LawKind; readonly name: string; readonly words: string }[] = [
+  { kind: 'elastic', name: 'Elastic', words: 'never yields' },
+  { kind: 'bilinear', name: 'Bilinear', words: 'yields at once, unloads as stiff as at first: steel, friction' },
+  {
+    kind: 'peak-oriented',
+    name: 'Peak-oriented',
+    words: 'reloads towards its largest drift so far: reinforced concrete',
+  },
+  { kind: 'bouc-wen', name: 'Bouc-Wen', words: 'yields by and by, along a round curve' },
+  { kind: 'flag', name: 'Flag', words: 'yields, and comes back to where it stood: rocking, post-tensioned' },
+];
+
+/** The law that a text names, however it is written: "Peak oriented", "boucwen"; null: none. */
+export function lawNamed(text: string): LawKind | null {
+  const letters = (name: string) => name.toLowerCase().replace(/[^a-z]/g, '');
+  return LAWS.find(({ kind }) => letters(kind) === letters(text))?.kind ?? null;
+}
