@@ -31,7 +31,10 @@ function decimals(text: string): number {
 
 /** The text of a field while it is not edited. */
 export function shownText(project: Project, path: string, system: System): string {
-  return typedText(readAt(project, path), quantityOf(path), system);
+  const value = readAt(project, path);
+  // Hardening is a figure or two: 3, not 3.00.
+  if (typeof value === 'number' && path.endsWith('.hardening')) return printTyped(value, 'percent', system);
+  return typedText(value, quantityOf(path), system);
 }
 
 /** What a text in a field is taken for: a number (SI), null, or the text itself where it cannot be read yet. */

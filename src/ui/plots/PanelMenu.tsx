@@ -1,7 +1,7 @@
 import { type ReactNode, useState } from 'react';
 import type { Table } from '../../core/report/table.ts';
 import { Icon } from '../controls/Icon.tsx';
-import { Menu } from '../controls/Menu.tsx';
+import { Menu, type MenuItem } from '../controls/Menu.tsx';
 import { PlotTable } from './PlotTable.tsx';
 
 export interface PanelMenuProps<K extends string> {
@@ -12,12 +12,22 @@ export interface PanelMenuProps<K extends string> {
   readonly choices: readonly { readonly kind: K; readonly name: string }[];
   readonly value: K;
   readonly onChoose: (kind: K) => void;
+  /** What can be chosen of the panel that is shown. */
+  readonly options?: readonly MenuItem[];
   /** The numbers behind the plot; null while there are none. */
   readonly table: (() => Table) | null;
 }
 
 /** The head of a panel: its name, which opens the choice of what it shows, and its numbers as a table. */
-export function PanelMenu<K extends string>({ children, label, choices, value, onChoose, table }: PanelMenuProps<K>) {
+export function PanelMenu<K extends string>({
+  children,
+  label,
+  choices,
+  value,
+  onChoose,
+  options = [],
+  table,
+}: PanelMenuProps<K>) {
   const [shown, setShown] = useState<Table | null>(null);
   return (
     <>
@@ -31,9 +41,11 @@ export function PanelMenu<K extends string>({ children, label, choices, value, o
             checked: kind === value,
             run: () => onChoose(kind),
           })),
+          ...options.map((option, i) => ({ ...option, apart: i === 0 })),
           {
             id: 'table',
             label: 'Show as table',
+            apart: true,
             disabled: table === null,
             run: () => table !== null && setShown(table()),
           },

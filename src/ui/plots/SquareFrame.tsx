@@ -1,5 +1,6 @@
 import type { ReactNode } from 'react';
 import type { Table } from '../../core/report/table.ts';
+import type { MenuItem } from '../controls/Menu.tsx';
 import { chooseSquare, SQUARES, type SquareKind } from './choice.ts';
 import { PanelMenu } from './PanelMenu.tsx';
 import { MARGIN, type Size } from './template.ts';
@@ -31,12 +32,14 @@ export interface SquareFrameProps {
   /** What is shown and in which units, beside the name. */
   readonly words: ReactNode;
   readonly legend?: ReactNode;
+  /** What can be chosen of it, in the menu of its name. */
+  readonly options?: readonly MenuItem[];
   readonly table: (() => Table) | null;
   readonly children: ReactNode;
 }
 
 /** One of the two panels under the answers: name, what it shows, key, plot. */
-export function SquareFrame({ layout, kind, words, legend, table, children }: SquareFrameProps) {
+export function SquareFrame({ layout, kind, words, legend, options, table, children }: SquareFrameProps) {
   const { slot, left, width, narrow } = layout;
   const name = SQUARES.find((entry) => entry.kind === kind)?.name ?? '';
   const size = plotSize(layout);
@@ -48,6 +51,7 @@ export function SquareFrame({ layout, kind, words, legend, table, children }: Sq
           choices={SQUARES}
           value={kind}
           onChoose={(next) => chooseSquare(slot, next)}
+          options={options}
           table={table}
         >
           {name}
@@ -75,6 +79,15 @@ export function KeyLine({
   return (
     <svg width="17" height="11" viewBox="0 0 17 11" aria-hidden="true">
       <path d="M0 6H16" stroke={`var(--${stroke})`} strokeWidth={width} strokeDasharray={dash} />
+    </svg>
+  );
+}
+
+/** An upright tick of the key, in the colour of the hand. */
+export function KeyTick() {
+  return (
+    <svg width="7" height="11" viewBox="0 0 7 11" aria-hidden="true">
+      <path d="M3.5 0V11" stroke="var(--accent)" strokeWidth="1.3" />
     </svg>
   );
 }

@@ -2,10 +2,12 @@ import { useRef } from 'react';
 import { never } from '../../core/fault.ts';
 import { useSession } from '../../state/session.ts';
 import { type SquareKind, usePanelChoice } from './choice.ts';
-import { DriftProfile } from './DriftProfile.tsx';
+import { DampingByPeriod } from './DampingByPeriod.tsx';
 import { ForceDrift } from './ForceDrift.tsx';
 import { ModeShapes } from './ModeShapes.tsx';
 import type { SquareLayout } from './SquareFrame.tsx';
+import { StoreyEnergy } from './StoreyEnergy.tsx';
+import { StoreyProfile } from './StoreyProfile.tsx';
 import { useTokens } from './tokens.ts';
 import { useNarrow } from './useNarrow.ts';
 import { useShownRun } from './useShownRun.ts';
@@ -43,8 +45,14 @@ function Square({ kind, layout }: { readonly kind: SquareKind; readonly layout: 
       return <ForceDrift {...common} shown={shown} />;
     case 'modes':
       return <ModeShapes {...common} />;
+    case 'damping':
+      return <DampingByPeriod {...common} />;
     case 'profile':
-      return <DriftProfile {...common} />;
+    case 'ductility':
+    case 'residual':
+      return <StoreyProfile {...common} kind={kind} />;
+    case 'storey-energy':
+      return <StoreyEnergy {...common} shown={shown} />;
     default:
       return never(kind);
   }

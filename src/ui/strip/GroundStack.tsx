@@ -10,7 +10,7 @@ import { chipRows, MotionChooser } from '../motions/MotionChooser.tsx';
 import { usePanelChoice } from '../plots/choice.ts';
 import { useTokens } from '../plots/tokens.ts';
 import { useNarrow } from '../plots/useNarrow.ts';
-import { useShownRun } from '../plots/useShownRun.ts';
+import { type ShownRun, useShownRun } from '../plots/useShownRun.ts';
 import { useSize } from '../plots/useSize.ts';
 import { type Band, stackGeometry } from './geometry.ts';
 import { MotionStrip } from './MotionStrip.tsx';
@@ -55,11 +55,15 @@ export function GroundStack() {
   );
   const contents = useMemo(
     () =>
-      panels.map((_, slot) => (shown === null ? null : contentOf(kinds[slot], shown.run, shown.storey, shown.heights))),
+      panels.map((_, slot) =>
+        shown === null
+          ? null
+          : contentOf(kinds[slot], shown.run, shown.storey, shown.heights, shown.answers.envelope.isolator !== null),
+      ),
     [panels, kinds, shown],
   );
   const limits = shown?.answers.envelope;
-  const limit = limits === undefined ? null : limits.limit / limits.factor;
+  const limit = shown === null ? null : driftLimit(shown);
   const lit = useMemo(() => {
     const entry = litName === motion ? undefined : project.motions.find(({ name }) => name === litName);
     const samples = entry && samplesOf(entry.samples);
@@ -184,6 +188,12 @@ export function GroundStack() {
       <div ref={readout} className="time-readout" hidden aria-hidden="true" />
     </section>
   );
+}
+
+/** What the drift of the shown storey may reach: a ratio, of an isolator its displacement [m]; null where there is none. */
+function driftLimit({ storey, answers: { envelope } }: ShownRun): number | null {
+  if (storey === 0 && envelope.isolator !== null) return envelope.isolator.limit;
+  return envelope.limit / envelope.factor;
 }
 
 function factorWords(scale: unknown): string {

@@ -1,16 +1,18 @@
 import { memo, useLayoutEffect, useMemo, useRef } from 'react';
 import type { Table } from '../../core/report/table.ts';
 import { printQuantity, type Quantity, type System } from '../../core/units/quantities.ts';
-import { chooseTimePanel } from '../plots/choice.ts';
+import { chooseSquare, chooseTimePanel } from '../plots/choice.ts';
 import { PanelMenu } from '../plots/PanelMenu.tsx';
 import { Plot } from '../plots/Plot.tsx';
 import type { Tokens } from '../plots/tokens.ts';
 import type { ShownRun } from '../plots/useShownRun.ts';
+import { EnergyKey } from './EnergyKey.tsx';
+import { ENERGY_NAMES } from './energyLook.ts';
 import { followTime } from './followTime.ts';
 import type { Band } from './geometry.ts';
 import { type PanelContent, TIME_PANELS, type TimePanelKind, valueAt } from './panelContent.ts';
 import type { TimeScale } from './scale.ts';
-import { AROUND, ENERGY_FILLS, ENERGY_NAMES, namedLayers, timePlot, unitOfContent } from './timePlot.ts';
+import { AROUND, namedLayers, timePlot, unitOfContent } from './timePlot.ts';
 
 export interface TimePanelProps {
   readonly slot: number;
@@ -22,10 +24,15 @@ export interface TimePanelProps {
   readonly scale: TimeScale;
   readonly tokens: Tokens;
   readonly system: System;
-  /** Drift ratio that the computed one is held against [-]; null where there is none. */
+  /** What the computed drift is held against: a ratio, of an isolator a displacement [m]; null where there is none. */
   readonly limit: number | null;
   readonly old: boolean;
 }
+
+/** Bars by storey stand as high as their storeys and need no time: they are in a square panel. */
+const PER_STOREY = [
+  { id: 'per-storey', label: 'Per storey, at the right', run: () => chooseSquare(1, 'storey-energy') },
+];
 
 /** One history under the ground motion, on the same time axis, with its name and what it is at the cursor. */
 export const TimePanel = memo(function TimePanel(props: TimePanelProps) {
@@ -37,7 +44,7 @@ export const TimePanel = memo(function TimePanel(props: TimePanelProps) {
     [content, scale, height, tokens, system, limit],
   );
   const spec = useMemo(() => (plot === null ? null : () => timePlot(plot)), [plot]);
-  const name = TIME_PANELS.find((panel) => panel.kind === kind)?.name ?? '';
+  const name = content?.name ?? TIME_PANELS.find((panel) => panel.kind === kind)?.name ?? '';
   const unit = content === null ? null : unitOfContent(content, system);
   const title = unit === null ? name : `${name}, ${unit.unit}`;
   return (
@@ -48,6 +55,7 @@ export const TimePanel = memo(function TimePanel(props: TimePanelProps) {
           choices={TIME_PANELS}
           value={kind}
           onChoose={(next) => chooseTimePanel(slot, next)}
+          options={kind === 'energy' ? PER_STOREY : undefined}
           table={content === null || shown === null ? null : () => historyTable(content, shown.motion)}
         >
           {title}
@@ -118,7 +126,7 @@ function EnergyWords({
         <p className="layer-key">
           {[...beside].reverse().map(({ part }) => (
             <span key={part}>
-              <i style={{ background: `var(--${ENERGY_FILLS[part]})` }} />
+              <EnergyKey part={part} />
               {ENERGY_NAMES[part]}
             </span>
           ))}

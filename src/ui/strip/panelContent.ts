@@ -30,7 +30,7 @@ export interface PanelContent {
   readonly stack: readonly { readonly part: EnergyPart; readonly sum: Float64Array }[];
 }
 
-export const ENERGY_PARTS = ['hysteretic', 'dampers', 'damping', 'strain', 'kinetic'] as const;
+export const ENERGY_PARTS = ['hysteretic', 'damping', 'dampers', 'strain', 'kinetic'] as const;
 export type EnergyPart = (typeof ENERGY_PARTS)[number];
 
 /**
@@ -38,12 +38,14 @@ export type EnergyPart = (typeof ENERGY_PARTS)[number];
  *
  * @param storey   from 0
  * @param heights  of the storeys [m]
+ * @param isolated  the first storey is an isolator: its displacement is shown, and no ratio
  */
 export function contentOf(
   kind: TimePanelKind,
   run: Run,
   storey: number,
   heights: readonly number[],
+  isolated = false,
 ): PanelContent | null {
   const { histories } = run;
   if (histories === null || storey < 0 || storey >= heights.length) return null;
@@ -67,6 +69,11 @@ export function contentOf(
   const floor = `floor ${storey + 1}`;
   switch (kind) {
     case 'drift': {
+      if (isolated && storey === 0) {
+        const values = row(histories.displacement, 0);
+        const peak = { value: run.storeys.peakDrift[0], time: run.storeys.peakTime[0] };
+        return { ...of('displacement', null, values, peak), name: 'Isolator displacement' };
+      }
       const values = driftRatio(row(histories.displacement, storey), storey, histories.displacement, heights[storey]);
       const { peakDriftRatio, peakTime } = run.storeys;
       return of('percent', here, values, { value: peakDriftRatio[storey], time: peakTime[storey] });

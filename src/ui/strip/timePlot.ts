@@ -6,20 +6,9 @@ import { axis, baseLayout, LIMIT_DASHES } from '../plots/template.ts';
 import { thinned } from '../plots/thin.ts';
 import { evenAxis, risingAxis, tickWords } from '../plots/ticks.ts';
 import type { Tokens } from '../plots/tokens.ts';
+import { ENERGY_NAMES, layerFill } from './energyLook.ts';
 import { type EnergyPart, type PanelContent, valueAt } from './panelContent.ts';
 import type { TimeScale } from './scale.ts';
-
-/** Names of the energies, as the panel and its table say them. */
-export const ENERGY_NAMES: Readonly<Record<EnergyPart, string>> = {
-  hysteretic: 'hysteretic',
-  dampers: 'dampers',
-  damping: 'viscous damping',
-  strain: 'strain',
-  kinetic: 'kinetic',
-};
-
-/** Colour token of each layer. */
-export const ENERGY_FILLS = { hysteretic: 'e1', dampers: 'e1', damping: 'e2', strain: 'e3', kinetic: 'e4' } as const;
 
 /** A layer thinner than this carries no name [px]. */
 const NAMED_FROM = 15;
@@ -114,7 +103,7 @@ function layers(
   const data = [...content.stack].reverse().map(({ part, sum }) =>
     trace(sum, content.interval, scale, unit, {
       fill: 'tozeroy',
-      fillcolor: tokens[ENERGY_FILLS[part]],
+      ...layerFill(part, tokens),
       line: { width: 0, simplify: false },
     }),
   );
@@ -126,7 +115,7 @@ function layers(
   const named = content.stack.flatMap(({ part, sum }, i): Partial<Annotations>[] => {
     const below = i === 0 ? 0 : content.stack[i - 1].sum[at];
     if (unit.onAxis(sum[at] - below) * pixels < NAMED_FROM) return [];
-    const color = part === 'hysteretic' || part === 'dampers' ? tokens.sheet : tokens.ink;
+    const color = part === 'hysteretic' ? tokens.sheet : tokens.ink;
     return [word(ENERGY_NAMES[part], time, unit.onAxis((sum[at] + below) / 2), color, tokens)];
   });
   return { data, named };
