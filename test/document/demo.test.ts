@@ -15,23 +15,29 @@ test('the example is whole: a case under seven motions, written and read back to
 });
 
 test('its typed numbers are as short as they were typed', () => {
-  for (const { mass, stiffness } of project.frame.storeys) {
+  for (const { mass, stiffness, law } of project.frame.storeys) {
+    expect(printTyped(law.kind === 'elastic' ? 0 : Number(law.strength), 'force', 'si')).toMatch(/^\d\u202f\d00$/);
     expect(printTyped(Number(mass), 'weight', 'si')).toMatch(/^\d\u202f\d{3}$/);
     expect(printTyped(Number(stiffness), 'stiffness', 'si')).toMatch(/^\d{3}$/);
   }
 });
 
-test('one storey, and only one, is a little over the limit on the mean of the suite; no run is stopped', () => {
+test('storeys yield moderately and one is a little over the limit on the mean of the suite; no run is stopped', () => {
   const made = caseOf(project);
   if (!made.ok) throw new Error('the example is no case');
   const { frame, analysis, limits, motions } = made.value;
   const sum = frame.storeys.map(() => 0);
+  const ductility = frame.storeys.map(() => 0);
   for (const { samples: digest, interval, scale } of motions) {
     const acceleration = samples.get(digest) ?? new Float64Array();
     const run = runCase({ frame, analysis, motion: { interval, acceleration, scale } }, { histories: false });
     expect(run.ending).toBeNull();
     for (const [i, ratio] of run.storeys.peakDriftRatio.entries()) sum[i] += ratio;
+    for (const [i, one] of run.storeys.ductility.entries()) ductility[i] += one / motions.length;
+    expect(run.energy.imbalance).toBeLessThan(0.001);
   }
+  expect(Math.min(...ductility)).toBeGreaterThan(1);
+  expect(Math.max(...ductility)).toBeLessThan(4);
   const over = sum.map((ratio) => ratio / motions.length / limits.drift).filter((ratio) => ratio > 1);
   expect(over.length).toBe(1);
   expect(over[0]).toBeGreaterThan(1.01);
