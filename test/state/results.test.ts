@@ -2,46 +2,19 @@ import { afterEach, beforeEach, describe, expect, it } from 'vitest';
 import { runCase, stepErrorOf } from '../../src/core/doors.ts';
 import { caseOf } from '../../src/document/case.ts';
 import type { Project } from '../../src/document/project.ts';
-import { inlineEngine } from '../../src/engine/inline.ts';
-import type { Engine, RunRequest } from '../../src/engine/protocol.ts';
 import { type ResultsState, resultsStore } from '../../src/state/answers.ts';
 import { documentStore, edit, effectiveProject, restore, setDraft, undo } from '../../src/state/document.ts';
 import { type Follower, follow, type Pace } from '../../src/state/follow.ts';
 import { questionOf } from '../../src/state/question.ts';
 import { chosenMotion, chosenStorey } from '../../src/state/selectors.ts';
 import { sessionStore, setSession } from '../../src/state/session.ts';
-import { immediateTurns } from '../engine/ends.ts';
 import { projectOf, withStorey } from './projects.ts';
+import { type Watched, watchedEngine } from './watched.ts';
 
 const suite = projectOf(4, 3);
 const EMPTY: ResultsState = resultsStore.getInitialState();
 const now = () => resultsStore.getState();
 const at = (status: ResultsState['status']) => expect.poll(() => now().status).toBe(status);
-
-/** The inline engine, with a list of what was asked of it; `hold` keeps answers back, `fail` breaks them. */
-interface Watched extends Engine {
-  readonly asked: { readonly question: string; readonly request: RunRequest }[];
-  hold: Promise<void> | null;
-  fail: ((question: string) => string | null) | null;
-}
-
-function watchedEngine(): Watched {
-  const engine = inlineEngine(immediateTurns());
-  const watched: Watched = {
-    ...engine,
-    asked: [],
-    hold: null,
-    fail: null,
-    async run(question, request, options) {
-      watched.asked.push({ question, request });
-      const words = watched.fail?.(question);
-      const reply = engine.run(question, request, options);
-      await watched.hold;
-      return words ? { status: 'failed', message: words } : reply;
-    },
-  };
-  return watched;
-}
 
 let engine: Watched;
 let follower: Follower | null = null;
