@@ -28,7 +28,7 @@ export interface SessionState {
   readonly range: readonly [number, number] | null;
   /** Motion lit everywhere by hovering; null: none. */
   readonly lit: string | null;
-  readonly dialog: 'none' | 'import' | 'tables' | 'keys' | 'analysis' | 'columns';
+  readonly dialog: 'none' | 'import' | 'tables' | 'keys' | 'analysis' | 'columns' | 'evidence' | 'bench';
   /** A short word at the foot (an undo across steps, a file saved); null: none. */
   readonly toast: string | null;
 }
