@@ -16,9 +16,11 @@ import {
 import { type Case, caseOf } from '../document/case.ts';
 import type { Engine } from '../engine/protocol.ts';
 import { documentStore, effectiveProject } from './document.ts';
+import { engineInUse } from './engineInUse.ts';
 import { lendingTo } from './lending.ts';
 import { questionOf, type RunAsk } from './question.ts';
 import { type Recent, recentRuns } from './recent.ts';
+import { samplesOf } from './samples.ts';
 import { chosenMotion } from './selectors.ts';
 
 /** One scheme at one step: what is known beforehand, and what came of it. */
@@ -66,22 +68,19 @@ interface Timed {
   readonly took: number;
 }
 
-let bench: ReturnType<typeof schemeBench> | null = null;
-
-/** Gives the bench its engine; called with the results'. */
-export function startBench(engine: Engine, samplesOf: (digest: string) => Float64Array | undefined): void {
-  bench?.stop();
-  bench = schemeBench(engine, samplesOf);
-}
+let bench: { readonly engine: Engine; readonly of: ReturnType<typeof schemeBench> } | null = null;
 
 /** Sets schemes and steps side by side for the frame and the chosen motion. @returns why it cannot, in words, or null */
 export function runSchemeBench(choice: BenchChoice = {}): string | null {
-  return bench ? bench.run(choice) : 'there is no engine';
+  const engine = engineInUse();
+  if (!engine) return 'there is no engine';
+  if (bench?.engine !== engine) bench = { engine, of: schemeBench(engine) };
+  return bench.of.run(choice);
 }
 
 /** Stops what is under way; rows that are done stay. */
 export function stopSchemeBench(): void {
-  bench?.stop();
+  bench?.of.stop();
 }
 
 /** What the bench would be asked for as the document stands; null where no motion is in use. */
@@ -98,7 +97,7 @@ export function benchKey(): string | null {
   return digestOfText(text);
 }
 
-function schemeBench(engine: Engine, samplesOf: (digest: string) => Float64Array | undefined) {
+function schemeBench(engine: Engine) {
   const known: Recent<Timed> = recentRuns();
   const lending = lendingTo(engine, samplesOf);
   /** Names of the jobs that are with the engine. */

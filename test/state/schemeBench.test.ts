@@ -4,13 +4,9 @@ import { methodOf, stabilityLimit } from '../../src/core/dynamics/methods.ts';
 import { BENCH_METHODS, BENCH_PARTS } from '../../src/core/dynamics/schemeBench.ts';
 import { caseOf } from '../../src/document/case.ts';
 import { edit, restore } from '../../src/state/document.ts';
-import {
-  benchKey,
-  runSchemeBench,
-  schemeBenchStore,
-  startBench,
-  stopSchemeBench,
-} from '../../src/state/schemeBench.ts';
+import { putEngine } from '../../src/state/engineInUse.ts';
+import { putSamples } from '../../src/state/samples.ts';
+import { benchKey, runSchemeBench, schemeBenchStore, stopSchemeBench } from '../../src/state/schemeBench.ts';
 import { setSession } from '../../src/state/session.ts';
 import { projectOf, withStorey } from './projects.ts';
 import { type Watched, watchedEngine } from './watched.ts';
@@ -25,7 +21,8 @@ beforeEach(() => {
   restore(suite.project);
   setSession({ motion: 'B', storey: null });
   schemeBenchStore.setState(schemeBenchStore.getInitialState(), true);
-  startBench(engine, (digest) => suite.samples.get(digest));
+  putEngine(engine);
+  for (const [digest, values] of suite.samples) putSamples(digest, values);
 });
 
 afterEach(() => {
