@@ -171,6 +171,14 @@ describe('[DOC-9] numbers that no building has', () => {
       height: fc.oneof({ weight: 9, arbitrary: fc.double({ min: 2, max: 9, noNaN: true }) }, power),
       mass: fc.oneof({ weight: 9, arbitrary: plausible }, power),
       stiffness: fc.oneof({ weight: 9, arbitrary: plausible }, power),
+      law: fc.oneof(
+        fc.constant({ kind: 'elastic' } as const),
+        fc.record({
+          kind: fc.constantFrom('bilinear' as const, 'peak-oriented' as const),
+          strength: fc.oneof({ weight: 9, arbitrary: plausible }, power),
+          hardening: fc.double({ min: 0, max: 1, maxExcluded: true, noNaN: true }),
+        }),
+      ),
     });
     fc.assert(
       fc.property(fc.array(row, { minLength: 2, maxLength: 12 }), fc.boolean(), (rows, pDelta) => {
@@ -184,6 +192,7 @@ describe('[DOC-9] numbers that no building has', () => {
         }
         whole++;
         for (const mode of made.value.prepared.modes) expect(mode.period).toBeGreaterThan(0);
+        expect(made.value.frame.storeys).toEqual(storeys);
       }),
       { numRuns: 200 },
     );
