@@ -1,5 +1,6 @@
 import { effectiveProject, useDocument } from '../../state/document.ts';
 import { useResults } from '../../state/results.ts';
+import { setSession } from '../../state/session.ts';
 import { Button } from '../controls/Button.tsx';
 import { Dialog } from '../controls/Dialog.tsx';
 import { commitOpenDraft } from '../controls/field.ts';
@@ -18,6 +19,10 @@ export function AnalysisDialog({ onClose }: { readonly onClose: () => void }) {
     commitOpenDraft();
     onClose();
   };
+  const leaveFor = (dialog: 'bench' | 'evidence') => {
+    commitOpenDraft();
+    setSession({ dialog });
+  };
   return (
     <Dialog
       title="Analysis"
@@ -28,6 +33,8 @@ export function AnalysisDialog({ onClose }: { readonly onClose: () => void }) {
           <span className="quiet small foot-words">
             Changes count at once, and the answers follow; undo takes each back.
           </span>
+          <Button onClick={() => leaveFor('evidence')}>Evidence</Button>
+          <Button onClick={() => leaveFor('bench')}>Compare schemes</Button>
           <Button kind="primary" onClick={close}>
             Close
           </Button>
@@ -38,7 +45,12 @@ export function AnalysisDialog({ onClose }: { readonly onClose: () => void }) {
       <StepSection project={project} modes={modes} faults={faults} />
       <DampingSection frame={project.frame} modes={modes} faults={faults} />
       <PDeltaSection pDelta={project.frame.pDelta} faults={faults} />
-      <LimitSection limits={project.limits} motions={project.motions} faults={faults} />
+      <LimitSection
+        limits={project.limits}
+        isolated={project.frame.storeys[0]?.role === 'isolator'}
+        motions={project.motions}
+        faults={faults}
+      />
     </Dialog>
   );
 }

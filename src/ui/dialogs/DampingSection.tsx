@@ -1,16 +1,19 @@
 import { type Fault, never } from '../../core/fault.ts';
 import type { Mode } from '../../core/frame/modes.ts';
 import { printQuantity } from '../../core/units/quantities.ts';
-import type { DampingRow, Project } from '../../document/project.ts';
+import type { DampingRow, Project, StoreyRow } from '../../document/project.ts';
 import { edit } from '../../state/document.ts';
 import { useResults } from '../../state/results.ts';
 import { Button } from '../controls/Button.tsx';
 import { commitOpenDraft } from '../controls/field.ts';
 import { NumberField } from '../controls/NumberField.tsx';
+import { Segmented } from '../controls/Segmented.tsx';
 import { Select } from '../controls/Select.tsx';
+import { DampingPicture } from './DampingPicture.tsx';
 import { Facts, Faults, Line, Section } from './Section.tsx';
 
 type Kind = DampingRow['kind'];
+type RayleighRow = Extract<DampingRow, { kind: 'rayleigh' }>;
 
 const KINDS: readonly { readonly value: Kind; readonly label: string }[] = [
   { value: 'rayleigh', label: 'Rayleigh: exact in two modes' },
@@ -62,6 +65,7 @@ export function DampingSection({ frame, modes, faults }: DampingSectionProps) {
         />
       </Line>
       <Numbers damping={damping} />
+      {damping.kind === 'rayleigh' && <StiffnessLine damping={damping} yields={storeys.some(yields)} />}
       {listed.length > 0 && (
         <Facts
           facts={[
@@ -74,6 +78,7 @@ export function DampingSection({ frame, modes, faults }: DampingSectionProps) {
           ]}
         />
       )}
+      {current && <DampingPicture />}
       <Faults faults={faults} under="frame.damping" shown={FIELDS} />
     </Section>
   );
@@ -127,6 +132,33 @@ function Numbers({ damping }: { readonly damping: DampingRow }) {
     default:
       return never(damping);
   }
+}
+
+const yields = ({ law }: StoreyRow) => law.kind !== 'elastic';
+
+/** Which stiffness stands in a1 K once storeys yield. */
+function StiffnessLine({ damping, yields }: { readonly damping: RayleighRow; readonly yields: boolean }) {
+  const tangent = damping.stiffness === 'tangent';
+  const means = tangent
+    ? 'K is what the storeys have at each instant: damping falls where they yield'
+    : 'K stays as it is at rest: damping forces go on where storeys yield, and may grow large beside theirs';
+  return (
+    <Line label="Stiffness" means={yields ? means : `${means}; no storey of this frame yields, so both are the same`}>
+      <Segmented
+        label="Stiffness in the damping"
+        value={tangent ? 'tangent' : 'initial'}
+        segments={[
+          { value: 'initial', label: 'Initial' },
+          { value: 'tangent', label: 'Tangent' },
+        ]}
+        onChange={(stiffness) => {
+          if (stiffness === (tangent ? 'tangent' : 'initial')) return;
+          const { stiffness: _, ...rest } = damping;
+          set(`damping on ${stiffness} stiffness`, stiffness === 'initial' ? rest : { ...rest, stiffness });
+        }}
+      />
+    </Line>
+  );
 }
 
 function ModalNumbers({ damping }: { readonly damping: Extract<DampingRow, { kind: 'modal' }> }) {

@@ -5,6 +5,10 @@ import './dialogs.css';
 const AnalysisDialog = lazy(() =>
   import('./AnalysisDialog.tsx').then((module) => ({ default: module.AnalysisDialog })),
 );
+const EvidenceDialog = lazy(() =>
+  import('./EvidenceDialog.tsx').then((module) => ({ default: module.EvidenceDialog })),
+);
+const BenchDialog = lazy(() => import('./BenchDialog.tsx').then((module) => ({ default: module.BenchDialog })));
 const TablesDialog = lazy(() => import('./TablesDialog.tsx').then((module) => ({ default: module.TablesDialog })));
 const ImportDialog = lazy(() =>
   import('../motions/ImportDialog.tsx').then((module) => ({ default: module.ImportDialog })),
@@ -19,6 +23,8 @@ export function Dialogs() {
   return (
     <Suspense fallback={null}>
       {dialog === 'analysis' && <AnalysisDialog onClose={close} />}
+      {dialog === 'evidence' && <EvidenceDialog onClose={close} />}
+      {dialog === 'bench' && <BenchDialog onClose={close} />}
       {dialog === 'import' && <ImportDialog onClose={close} />}
       {dialog === 'tables' && <TablesDialog onClose={close} />}
       {dialog === 'keys' && <KeysDialog onClose={close} />}

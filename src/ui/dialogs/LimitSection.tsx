@@ -17,12 +17,14 @@ const MEASURES = [
 
 export interface LimitSectionProps {
   readonly limits: LimitsRow;
+  /** The first storey is an isolator. */
+  readonly isolated: boolean;
   readonly motions: readonly MotionEntry[];
   readonly faults: readonly Fault[];
 }
 
 /** The allowable drift, and which drift of the suite is held against it. */
-export function LimitSection({ limits, motions, faults }: LimitSectionProps) {
+export function LimitSection({ limits, isolated, motions, faults }: LimitSectionProps) {
   const used = motions.filter((motion) => motion.used).length;
   const byCount = used >= MOTIONS_FOR_MEAN ? 'the mean' : 'the largest';
   return (
@@ -60,10 +62,22 @@ export function LimitSection({ limits, motions, faults }: LimitSectionProps) {
       >
         <NumberField path="limits.factor" label="Factor on the computed drift" unit={false} />
       </Line>
+      {isolated && (
+        <Line
+          label="Isolator"
+          means="displacement that the isolator may reach, of the same statistic and without the factor; left empty: not compared"
+        >
+          <NumberField path="limits.isolator" label="Allowable isolator displacement" />
+        </Line>
+      )}
       <Line label="Source" means="clause, earthquake level and which drift it limits">
         <TextField path="limits.source" label="Source of the limit" className="wide" />
       </Line>
-      <Faults faults={faults} under="limits" shown={['limits.drift', 'limits.factor']} />
+      <Faults
+        faults={faults}
+        under="limits"
+        shown={['limits.drift', 'limits.factor', ...(isolated ? ['limits.isolator'] : [])]}
+      />
     </Section>
   );
 }

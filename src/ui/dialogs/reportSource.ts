@@ -10,7 +10,7 @@ export function reportSourceOf(
   project: Project,
   stepErrors: Readonly<Record<string, number>> | null,
 ): ReportSource {
-  const { case: from, runs, envelope } = answers;
+  const { case: from, runs, envelope, evidence } = answers;
   const scales = new Map(from.motions.map(({ name, scale }) => [name, scale]));
   return {
     title: project.title,
@@ -28,7 +28,10 @@ export function reportSourceOf(
         ...(origin === undefined ? {} : { origin }),
       };
     }),
-    runs: runs.map(({ motion, run }) => ({ motion, run, stepError: stepErrors?.[motion] ?? null })),
+    runs: runs.map(({ motion, run }) => {
+      const why = evidence[motion]?.auto?.why;
+      return { motion, run, stepError: stepErrors?.[motion] ?? null, ...(why === undefined ? {} : { stepWhy: why }) };
+    }),
     envelope,
     analysis: from.analysis,
     limits: from.limits,

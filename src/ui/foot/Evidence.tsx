@@ -22,7 +22,16 @@ export function Evidence() {
   const old = status === 'stale';
   return (
     <section className={`foot evidence ${old ? 'old' : ''}`} aria-label="Evidence">
-      <h2 className="foot-head">Evidence</h2>
+      <h2 className="foot-head">
+        <button
+          type="button"
+          className="choice"
+          aria-label="Evidence: how good are these numbers?"
+          onClick={() => setSession({ dialog: 'evidence' })}
+        >
+          Evidence
+        </button>
+      </h2>
       <ul className="facts">
         <Choice>
           <Worded words={dampingWords(frame.damping)} from=" in " />
@@ -35,6 +44,7 @@ export function Evidence() {
           step {shortNumber(answers.step.size)} s{stepOrigin(answers)}
         </Choice>
         {stepErrors !== null && <StepError errors={Object.values(stepErrors)} />}
+        <Halved runs={answers.runs} />
         <li>
           <span className="long">energy </span>imbalance{' '}
           <b>{percent(Math.max(...answers.runs.map(({ run }) => run.energy.imbalance)))}</b>
@@ -102,10 +112,25 @@ function StepError({ errors }: { readonly errors: readonly number[] }) {
   );
 }
 
-function stepOrigin(answers: Answers): string {
-  const { step } = answers.case.analysis;
+function stepOrigin({ case: from, evidence }: Answers): string {
+  const { step } = from.analysis;
+  if (step === 'auto') {
+    const open = Object.values(evidence).some(({ auto }) => auto?.converged === null);
+    return open ? ', by halving, to be confirmed' : ', by halving';
+  }
   if (typeof step !== 'object') return '';
   return step.parts === 1 ? ', the interval' : `, the interval in ${step.parts}`;
+}
+
+/** Steps that did not converge at once: said only where there are any. */
+function Halved({ runs }: { readonly runs: Answers['runs'] }) {
+  const halvings = runs.reduce((sum, { run }) => sum + run.marching.halvings, 0);
+  if (halvings === 0) return null;
+  return (
+    <li>
+      steps halved <b>{printQuantity(halvings, 'count', 'si')}</b>
+    </li>
+  );
 }
 
 /** A ratio as percent with two figures that count. */

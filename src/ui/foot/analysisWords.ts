@@ -47,8 +47,14 @@ function percent(ratio: number): string {
   return `${text} %`;
 }
 
-const PARTS: Readonly<Record<string, string>> = { '0.25': '¼', '0.5': '½', '0.75': '¾' };
+const PARTS: readonly (readonly [number, string])[] = [
+  [1 / 4, '¼'],
+  [1 / 2, '½'],
+  [3 / 4, '¾'],
+  [1 / 6, '1/6'],
+  [1 / 3, '1/3'],
+];
 
 function part(value: number): string {
-  return PARTS[String(value)] ?? String(value);
+  return PARTS.find(([known]) => Math.abs(known - value) < 1e-9)?.[1] ?? String(Number(value.toPrecision(6)));
 }

@@ -54,6 +54,12 @@ export function DampingByPeriod({ layout, tokens, old }: DampingByPeriodProps) {
               asked for
             </span>
           )}
+          {kind !== 'none' && (
+            <span>
+              <i className="key-shade" />
+              half to twice
+            </span>
+          )}
         </>
       }
       table={picture === null ? null : () => dampingTable(picture)}

@@ -1,3 +1,4 @@
+import type { Shape } from 'plotly.js-basic-dist-min';
 import { dampingCurve, wantedRatios } from '../../core/frame/dampingCurve.ts';
 import type { Damping } from '../../core/frame/frame.ts';
 import type { Mode } from '../../core/frame/modes.ts';
@@ -84,6 +85,7 @@ export function dampingPlot({ damping, modes, ratios }: DampingPicture, size: Si
         zeroline: false,
       },
       yaxis: axis(tokens, [0, end], upward, tickWords(percent, upward)),
+      shapes: band(wanted, percent.onAxis, tokens),
       annotations: modes.slice(0, NAMED).map(({ period }, i) => ({
         x: Math.log10(period),
         y: marks[i],
@@ -95,4 +97,23 @@ export function dampingPlot({ damping, modes, ratios }: DampingPicture, size: Si
       })),
     },
   };
+}
+
+/** From half of the least ratio asked for to twice the largest: outside of it a mode that matters is cautioned. */
+function band(wanted: readonly number[], onAxis: (ratio: number) => number, tokens: Tokens): Partial<Shape>[] {
+  if (wanted.length === 0) return [];
+  return [
+    {
+      type: 'rect',
+      layer: 'below',
+      xref: 'paper',
+      x0: 0,
+      x1: 1,
+      y0: onAxis(Math.min(...wanted) / 2),
+      y1: onAxis(2 * Math.max(...wanted)),
+      fillcolor: tokens.shade,
+      opacity: 0.7,
+      line: { width: 0 },
+    },
+  ];
 }
