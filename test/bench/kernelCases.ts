@@ -1,9 +1,8 @@
 import { type Problem, problemOf } from '../../src/core/dynamics/problem.ts';
 import { FIELD } from '../../src/core/dynamics/record.ts';
 import type { MethodChoice, RunCase } from '../../src/core/dynamics/run.ts';
-import { stepTo } from '../../src/core/dynamics/stepping.ts';
-import { workspace } from '../../src/core/dynamics/workspace.ts';
-import type { Damping } from '../../src/core/frame/frame.ts';
+import { linearWorkspace, workspace } from '../../src/core/dynamics/workspace.ts';
+import type { Damping, Law } from '../../src/core/frame/frame.ts';
 import { prepareFrame } from '../../src/core/frame/prepare.ts';
 
 /** One line of the kernel bench: a frame, a damping, a scheme; 4,000 steps of seeded noise. */
@@ -12,6 +11,8 @@ export interface KernelCase {
   readonly storeys: number;
   readonly damping: Damping;
   readonly method: MethodChoice;
+  /** Absent: elastic. */
+  readonly law?: Law;
 }
 
 const RAYLEIGH: Damping = { kind: 'rayleigh', modes: [1, 3], ratios: [0.05, 0.05] };
@@ -51,13 +52,34 @@ export const KERNEL_CASES: readonly KernelCase[] = [
   },
 ];
 
-export function kernelProblem({ storeys: n, damping, method }: KernelCase): { problem: Problem; runCase: RunCase } {
+/** Yielding frames: most storeys yield many times under this ground. */
+export const YIELDING_CASES: readonly KernelCase[] = [
+  {
+    name: 'bilinear, Rayleigh, 20 storeys',
+    storeys: 20,
+    damping: RAYLEIGH,
+    method: AVERAGE,
+    law: { kind: 'bilinear', strength: 1.2e6, hardening: 0.03 },
+  },
+  {
+    name: 'Bouc-Wen (n = 2), Rayleigh, 20 storeys',
+    storeys: 20,
+    damping: RAYLEIGH,
+    method: AVERAGE,
+    law: { kind: 'bouc-wen', strength: 1.2e6, hardening: 0.03, exponent: 2, beta: 0.5, gamma: 0.5 },
+  },
+];
+
+export function kernelProblem({ storeys: n, damping, method, law = { kind: 'elastic' } }: KernelCase): {
+  problem: Problem;
+  runCase: RunCase;
+} {
   const storeys = Array.from({ length: n }, (_, i) => ({
     name: '',
     height: 3.5,
     mass: 4e5,
     stiffness: 3e8 * (1 - (0.5 * i) / n),
-    law: { kind: 'elastic' as const },
+    law: 'strength' in law ? { ...law, strength: law.strength * (1 - (0.5 * i) / n) } : law,
   }));
   const frame = { storeys, damping, pDelta: false };
   const prepared = prepareFrame(frame);
@@ -69,7 +91,7 @@ export function kernelProblem({ storeys: n, damping, method }: KernelCase): { pr
   });
   const runCase: RunCase = {
     frame,
-    analysis: { method, step: { parts: 1 }, tail: 0, stopDrift: 0.1 },
+    analysis: { method, step: { parts: 1 }, tail: 0, stopDrift: 1 },
     motion: { interval: 0.01, acceleration, scale: 1 },
   };
   return { problem: problemOf(prepared.value, runCase), runCase };
@@ -78,7 +100,7 @@ export function kernelProblem({ storeys: n, damping, method }: KernelCase): { pr
 /** The same case as the C twin reads it. */
 export function twinInput(problem: Problem, repeats: number): string {
   const { prepared, method, step, steps, ground } = problem;
-  const { records, matrix } = workspace(problem);
+  const { records, matrix } = linearWorkspace(problem);
   const { n } = prepared.arrays;
   const column = (field: number) => Array.from({ length: n }, (_, i) => records[i * FIELD.STRIDE + field]).join(' ');
   const fields = [
@@ -113,7 +135,7 @@ export function timeKernel(
   const once = () => {
     work.records.set(fresh);
     sums.fill(0);
-    stepTo(work.records, work.matrix, n, problem.ground, work.scheme, sums, problem.residualFrom, 0, problem.steps);
+    work.advance(0, problem.steps);
   };
   for (let i = 0; i < 60; i++) once();
   const batch = 5;

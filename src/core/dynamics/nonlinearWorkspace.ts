@@ -1,11 +1,12 @@
 import { fullDamping } from '../frame/damping.ts';
-import type { Storey } from '../frame/frame.ts';
 import type { PreparedFrame } from '../frame/prepare.ts';
-import { setLaw } from './laws/laws.ts';
+import { BILINEAR, numberOf, setLaw } from './laws/laws.ts';
+import type { FullWork, NonlinearWork } from './nonlinearWork.ts';
 import type { Problem } from './problem.ts';
-import { FIELD, SUM } from './record.ts';
+import { FIELD, NOW, SUM } from './record.ts';
+import { freshDamperLine, refactor } from './stepMatrix.ts';
 import type { Workspace } from './workspace.ts';
-import { type FullWork, type NonlinearWork, nowOf, refactor, yieldTo } from './yielding.ts';
+import { yieldTo } from './yielding.ts';
 
 /** A law may be off its line by so much of the largest base shear that the motion can ask for, mass x ground acceleration. Own choice: well under what is printed. */
 const FORCE_TOLERANCE = 1e-12;
@@ -37,7 +38,10 @@ export function nonlinearWorkspace(problem: Problem): Workspace {
     w[at + FIELD.SLOPE] = stiffness[i];
     w[at + FIELD.TANGENT] = stiffness[i];
     w[at + FIELD.FORCE_TOLERANCE] = FORCE_TOLERANCE * wholeMass * strongest;
-    setDamper(w, at, storey, (STICK * wholeMass) / step);
+    w[at + FIELD.DAMPER] = storey.damper?.coefficient ?? 0;
+    w[at + FIELD.EXPONENT] = storey.damper?.exponent ?? 1;
+    w[at + FIELD.STICK] = (STICK * wholeMass) / step;
+    freshDamperLine(w, at);
     if (damping.kind === 'full') return;
     w[at + FIELD.STOREY_DASHPOT] = damping.storey[i];
     w[at + FIELD.TANGENT_FACTOR] = prepared.arrays.isolated && i === 0 ? 0 : damping.tangentFactor;
@@ -45,26 +49,19 @@ export function nonlinearWorkspace(problem: Problem): Workspace {
   });
   const sums = new Float64Array(SUM.SUMS);
   sums[SUM.CULPRIT] = -1;
+  const now = new Float64Array(NOW.NOWS);
+  now.set([am, af, beta, gamma, step]);
   const work: NonlinearWork = {
     n,
     w,
-    now: nowOf(am, af, beta, gamma, step),
+    now,
     h: step,
+    smooth: prepared.frame.storeys.some(({ law, damper }) => numberOf(law) > BILINEAR || damper !== undefined),
     full: fullWork(prepared, w, -ground[0]),
     sums,
   };
   if (!refactor(work, 0)) throw new RangeError("march: the step's matrix is not positive definite");
   return { records: w, sums, advance: (from, to) => yieldTo(work, ground, residualFrom, from, to) };
-}
-
-/** At rest a damper with an exponent under 1 sticks; the others start on their tangent at zero velocity. */
-function setDamper(w: Float64Array, at: number, { damper }: Storey, stick: number): void {
-  if (!damper) return;
-  w[at + FIELD.DAMPER] = damper.coefficient;
-  w[at + FIELD.EXPONENT] = damper.exponent;
-  w[at + FIELD.STICK] = stick;
-  const { coefficient, exponent } = damper;
-  w[at + FIELD.DAMPER_SLOPE] = exponent === 1 ? coefficient : exponent < 1 && coefficient > 0 ? stick : 0;
 }
 
 /** For damping that is not tridiagonal: C, and the inverse of the step's matrix; C a at the start, a being `uniform`. */

@@ -40,14 +40,18 @@ const PLACES = [
   'INTERCEPT', 'SLOPE', 'FORCE_TOLERANCE',
   /** The damper: coefficient, exponent, trial velocity [m/s] and force [N], its straight line, and its force and work so far. */
   'DAMPER', 'EXPONENT', 'TRIAL_RATE', 'TRIAL_DAMPER', 'DAMPER_INTERCEPT', 'DAMPER_SLOPE', 'DAMPER_FORCE', 'DAMPER_WORK',
+  /** Drift of the damper at the end of the last step [m]. */
+  'LAST_DRIFT',
   /** Steepest line of the damper [N s/m]; largest drift velocity so far [m/s]. */
   'STICK', 'PEAK_RATE',
   /** What the storey carries at the last step: law, P-Delta, dashpot and damper [N]; a1 of tangent damping [s]. */
   'STOREY_FORCE', 'TANGENT_FACTOR',
   /** Factor of the storey on the drift acceleration in the step's matrix [kg]. */
   'COUPLING',
-  /** The new step without its acceleration: u, v, drift and its rate; and what does not change in the iteration [N]. */
-  'U_AHEAD', 'V_AHEAD', 'DRIFT_AHEAD', 'RATE_AHEAD', 'LOAD',
+  /** All of a storey's lines as one: force at rest [N], by drift [N/m], by its rate [N s/m]. */
+  'LINE', 'LINE_DRIFT', 'LINE_RATE',
+  /** The new u and v. */
+  'NEXT_U', 'NEXT_V',
   /** Largest storey shear [N]; step of first yield, 0 for never. */
   'PEAK_SHEAR', 'YIELD_STEP',
 ] as const;
@@ -82,3 +86,9 @@ export const SUM = Object.freeze({
 
 /** What STOPPED says: under way, a storey passed its stop drift, the numbers left the finite range, a step did not converge. */
 export const STATE = Object.freeze({ GOING: 0, COLLAPSED: 1, DIVERGED: 2, NOT_CONVERGED: 3 });
+
+/**
+ * Numbers of the scheme at the step or part of a step under way, as Method, h [s], and the ground acceleration at its start and
+ * end [m/s2]: in an array, since a number handed to a function that is not inlined would be boxed.
+ */
+export const NOW = Object.freeze({ AM: 0, AF: 1, BETA: 2, GAMMA: 3, H: 4, AG_OLD: 5, AG_NEW: 6, NOWS: 7 });

@@ -1,17 +1,77 @@
 import { invertPositive } from '../linalg/inverse.ts';
-import { FIELD } from './record.ts';
-import type { FullWork } from './yielding.ts';
+import type { FullWork, NonlinearWork } from './nonlinearWork.ts';
+import { FIELD, NOW } from './record.ts';
 
-const { MASS, FLOOR_DASHPOT, STOREY_DASHPOT, SLOPE, P_OVER_H, DAMPER_SLOPE, COUPLING, STRIDE } = FIELD;
+const { MASS, FLOOR_DASHPOT, STOREY_DASHPOT, MULTIPLIER, PER_PIVOT, INTERCEPT, SLOPE, P_OVER_H, STRIDE } = FIELD;
+const { K, DRIFT, FORCE, DAMPER, EXPONENT, STICK } = FIELD;
+const { DAMPER_INTERCEPT, DAMPER_SLOPE, LINE, LINE_DRIFT, LINE_RATE, COUPLING } = FIELD;
+const { AM, AF, BETA, GAMMA, H } = NOW;
 
 /** Rank-one updates after which the inverse is made afresh, so that rounding does not gather. Own choice. */
 const FRESH_AFTER = 200;
+
+/** The step's matrix from row `from` up, from the lines as they stand; false where it is not positive definite. */
+export function refactor({ n, w, now, full }: NonlinearWork, from: number): boolean {
+  const wf = 1 - now[AF];
+  const b0 = wf * now[BETA] * now[H] * now[H];
+  const g0 = wf * now[GAMMA] * now[H];
+  const onMass = 1 - now[AM];
+  for (let p = from * STRIDE; p < n * STRIDE; p += STRIDE) {
+    gatherLine(w, p);
+    w[p + COUPLING] = b0 * w[p + LINE_DRIFT] + g0 * w[p + LINE_RATE];
+  }
+  if (full !== null) return invertInto(full, w, n, onMass, g0);
+  const top = (n - 1) * STRIDE;
+  for (let p = from * STRIDE; p <= top; p += STRIDE) {
+    const here = w[p + COUPLING];
+    const above = p < top ? w[p + STRIDE + COUPLING] : 0;
+    const multiplier = p > 0 ? -here * w[p - STRIDE + PER_PIVOT] : 0;
+    const pivot = onMass * w[p + MASS] + g0 * w[p + FLOOR_DASHPOT] + here + above + multiplier * here;
+    if (!(pivot > 0)) return false;
+    w[p + MULTIPLIER] = multiplier;
+    w[p + PER_PIVOT] = 1 / pivot;
+  }
+  return true;
+}
+
+/** After a step that did not converge: lines that start from where the storeys stand, at their initial stiffness. */
+export function freshLines({ n, w }: NonlinearWork): void {
+  for (let i = 0, p = 0; i < n; i++, p += STRIDE) {
+    w[p + SLOPE] = w[p + K];
+    w[p + INTERCEPT] = w[p + FORCE] - w[p + K] * w[p + DRIFT];
+    freshDamperLine(w, p);
+  }
+}
+
+/** As a damper starts at rest: with an exponent under 1 it sticks, else on its tangent at zero velocity. */
+export function freshDamperLine(w: Float64Array, p: number): void {
+  const a = w[p + EXPONENT];
+  w[p + DAMPER_INTERCEPT] = 0;
+  w[p + DAMPER_SLOPE] = w[p + DAMPER] === 0 ? 0 : a === 1 ? w[p + DAMPER] : a < 1 ? w[p + STICK] : 0;
+}
+
+/** What a storey carries while it is on its lines, law, P-Delta, dashpot and damper together: LINE + LINE_DRIFT x drift + LINE_RATE x its rate. */
+function gatherLine(w: Float64Array, p: number): void {
+  w[p + LINE] = w[p + INTERCEPT] + w[p + DAMPER_INTERCEPT];
+  w[p + LINE_DRIFT] = w[p + SLOPE] - w[p + P_OVER_H];
+  w[p + LINE_RATE] = w[p + STOREY_DASHPOT] + w[p + DAMPER_SLOPE];
+}
+
+/** The matrix again after the lines changed from storey `lowest` up. */
+export function renew(work: NonlinearWork, lowest: number): boolean {
+  const { full, now, w, n } = work;
+  if (full === null) return refactor(work, lowest > 0 ? lowest - 1 : 0);
+  const wf = 1 - now[AF];
+  const b0 = wf * now[BETA] * now[H] * now[H];
+  const g0 = wf * now[GAMMA] * now[H];
+  return shiftInverse(full, w, n, b0, g0, 1 - now[AM]);
+}
 
 /**
  * The inverse of the step's matrix where damping is full: onMass M + onDamping C + the storeys' couplings, afresh.
  * @returns false where it is not positive definite
  */
-export function invertInto(full: FullWork, w: Float64Array, n: number, onMass: number, onDamping: number): boolean {
+function invertInto(full: FullWork, w: Float64Array, n: number, onMass: number, onDamping: number): boolean {
   const { inverse, damping, updates } = full;
   for (let i = 0; i < n * n; i++) inverse[i] = onDamping * damping[i];
   for (let i = 0, p = 0; i < n; i++, p += STRIDE) {
@@ -33,7 +93,7 @@ export function invertInto(full: FullWork, w: Float64Array, n: number, onMass: n
  * @param onStiffness, onDamping, onMass  factors on tangents, dashpots and masses in the step's matrix
  * @returns false where the matrix is no longer positive definite
  */
-export function shiftInverse(
+function shiftInverse(
   full: FullWork,
   w: Float64Array,
   n: number,
@@ -44,8 +104,8 @@ export function shiftInverse(
   const { inverse, column, updates } = full;
   let afresh = false;
   for (let i = 0, p = 0; i < n; i++, p += STRIDE) {
-    const coupling =
-      onStiffness * (w[p + SLOPE] - w[p + P_OVER_H]) + onDamping * (w[p + STOREY_DASHPOT] + w[p + DAMPER_SLOPE]);
+    gatherLine(w, p);
+    const coupling = onStiffness * w[p + LINE_DRIFT] + onDamping * w[p + LINE_RATE];
     const more = coupling - w[p + COUPLING];
     if (more === 0) continue;
     w[p + COUPLING] = coupling;

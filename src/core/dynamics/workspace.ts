@@ -15,12 +15,14 @@ export interface Workspace {
   readonly advance: (from: number, to: number) => number;
 }
 
-/** @throws RangeError where the step's matrix is not positive definite (a validated case never is) */
+/** @throws RangeError where the step's matrix is not positive definite at the start (a validated case always is) */
 export function workspace(problem: Problem): Workspace {
   return problem.linear ? linearWorkspace(problem) : nonlinearWorkspace(problem);
 }
 
-function linearWorkspace({ prepared, method, step, ground, stopDrift, residualFrom }: Problem): Workspace {
+/** With the step's matrix where damping is full; null where it is banded. */
+export function linearWorkspace(problem: Problem): Workspace & { readonly matrix: FullMatrix | null } {
+  const { prepared, method, step, ground, stopDrift, residualFrom } = problem;
   const { n, mass, stiffness, netStiffness, height } = prepared.arrays;
   const { am, af, beta, gamma } = method;
   const records = new Float64Array(n * FIELD.STRIDE);
@@ -49,7 +51,7 @@ function linearWorkspace({ prepared, method, step, ground, stopDrift, residualFr
   const sums = new Float64Array(SUM.SUMS);
   const advance = (from: number, to: number) =>
     stepTo(records, matrix, n, ground, scheme, sums, residualFrom, from, to);
-  return { records, sums, advance };
+  return { records, sums, matrix, advance };
 }
 
 /** Factors on M, C and K in the matrix that a step solves with. */

@@ -1,7 +1,10 @@
 import { damperTrial } from './dampers.ts';
-import { commitOf, trialOf } from './laws/laws.ts';
-import { FIELD, STATE, SUM } from './record.ts';
-import { invertInto, shiftInverse } from './stepMatrix.ts';
+import { commit as bilinearCommit, trial as bilinearTrial } from './laws/bilinear.ts';
+import { commit as elasticCommit } from './laws/elastic.ts';
+import { BILINEAR, commitOf, ELASTIC, trialOf } from './laws/laws.ts';
+import type { FullWork, NonlinearWork } from './nonlinearWork.ts';
+import { FIELD, NOW, STATE, SUM } from './record.ts';
+import { freshLines, refactor, renew } from './stepMatrix.ts';
 
 const { MASS, PER_MASS, FLOOR_DASHPOT, STOREY_DASHPOT, MULTIPLIER, PER_PIVOT, U, V, A, RHS, NEXT, STRIDE } = FIELD;
 const {
@@ -16,56 +19,20 @@ const {
   PEAK_U,
   PEAK_V,
 } = FIELD;
-const { PEAK_TOTAL, DRIFT_SUM, DRIFT_LEAST, DRIFT_MOST, HEIGHT, P_OVER_H, LAW, K, STRENGTH, DRIFT, FORCE, WORK } =
-  FIELD;
+const { PEAK_TOTAL, DRIFT_SUM, DRIFT_LEAST, DRIFT_MOST, HEIGHT, P_OVER_H, LAW, K, STRENGTH, WORK } = FIELD;
 const { TRIAL_DRIFT, TRIAL_FORCE, TANGENT, INTERCEPT, SLOPE, FORCE_TOLERANCE, DAMPER, TRIAL_RATE, TRIAL_DAMPER } =
   FIELD;
-const { DAMPER_INTERCEPT, DAMPER_SLOPE, DAMPER_FORCE, DAMPER_WORK, PEAK_RATE, STOREY_FORCE, TANGENT_FACTOR } = FIELD;
-const { COUPLING, U_AHEAD, V_AHEAD, DRIFT_AHEAD, RATE_AHEAD, LOAD, PEAK_SHEAR, YIELD_STEP } = FIELD;
+const { DAMPER_FORCE, DAMPER_WORK, PEAK_RATE, STOREY_FORCE, TANGENT_FACTOR } = FIELD;
+const { COUPLING, LAST_DRIFT, LINE, LINE_DRIFT, LINE_RATE, NEXT_U, NEXT_V, PEAK_SHEAR, YIELD_STEP } = FIELD;
 const { INPUT, DAMPING, KINETIC, STRAIN, LARGEST_GAP, LARGEST_INPUT, STOPPED, SOLVES, MOST_SOLVES, HALVINGS } = SUM;
 const { CULPRIT, DAMPING_SHEAR, YIELDED } = SUM;
+const { AM, AF, BETA, GAMMA, H, AG_OLD, AG_NEW } = NOW;
 const { COLLAPSED, DIVERGED, NOT_CONVERGED } = STATE;
-const ELASTIC = 0;
-
-/** Numbers of the scheme at the step under way, for the functions of this file: a number handed over as such would be boxed. */
-// biome-ignore format: a table
-const AM = 0, AF = 1, BETA = 2, GAMMA = 3, H = 4, AG_OLD = 5, AG_NEW = 6, NOWS = 7;
 
 /** Solves after which a step is halved. Own choice: steps that converge need 1 to 5. */
 const MOST = 25;
 /** A step is halved so often and no further: to its 1024th part. Own choice. */
 const DEEPEST = 10;
-
-/** All that the step of a nonlinear frame works on, made once. */
-export interface NonlinearWork {
-  readonly n: number;
-  /** n records. */
-  readonly w: Float64Array;
-  readonly now: Float64Array;
-  /** Of the step [s]. */
-  readonly h: number;
-  /** Where damping is a full matrix: it, the inverse of the step's matrix, scratch. */
-  readonly full: FullWork | null;
-  readonly sums: Float64Array;
-}
-
-export interface FullWork {
-  /** C, row-major n x n [N s/m]. */
-  readonly damping: Float64Array;
-  /** Inverse of the step's matrix with the couplings in the records, row-major n x n. */
-  readonly inverse: Float64Array;
-  /** Scratch of n each. */
-  readonly side: Float64Array;
-  readonly column: Float64Array;
-  /** Updates of the inverse since it was last made afresh. */
-  readonly updates: Int32Array;
-}
-
-export function nowOf(am: number, af: number, beta: number, gamma: number, h: number): Float64Array {
-  const now = new Float64Array(NOWS);
-  now.set([am, af, beta, gamma, h]);
-  return now;
-}
 
 /**
  * Steps `from` + 1 to `to` of a frame whose storeys yield or have dampers. Nothing is allocated and nothing checked in here.
@@ -108,6 +75,7 @@ export function yieldTo(work: NonlinearWork, ground: Float64Array, settling: num
         }
         part >>= 1;
         now[H] = h * (part / whole);
+        freshLines(work);
         refactor(work, 0);
       }
     }
@@ -122,62 +90,22 @@ export function yieldTo(work: NonlinearWork, ground: Float64Array, settling: num
   return to;
 }
 
-/** The step's matrix from row `from` up, from the lines as they stand; false where it is not positive definite. */
-export function refactor({ n, w, now, full }: NonlinearWork, from: number): boolean {
-  const wf = 1 - now[AF];
-  const b0 = wf * now[BETA] * now[H] * now[H];
-  const g0 = wf * now[GAMMA] * now[H];
-  const onMass = 1 - now[AM];
-  if (full !== null) {
-    couple(w, n, b0, g0);
-    return invertInto(full, w, n, onMass, g0);
-  }
-  let p = from * STRIDE;
-  const top = (n - 1) * STRIDE;
-  let here = b0 * (w[p + SLOPE] - w[p + P_OVER_H]) + g0 * (w[p + STOREY_DASHPOT] + w[p + DAMPER_SLOPE]);
-  w[p + COUPLING] = here;
-  for (; p <= top; p += STRIDE) {
-    let above = 0;
-    if (p < top) {
-      const q = p + STRIDE;
-      above = b0 * (w[q + SLOPE] - w[q + P_OVER_H]) + g0 * (w[q + STOREY_DASHPOT] + w[q + DAMPER_SLOPE]);
-      w[q + COUPLING] = above;
-    }
-    let pivot = onMass * w[p + MASS] + g0 * w[p + FLOOR_DASHPOT] + here + above;
-    if (p > 0) {
-      const multiplier = -here * w[p - STRIDE + PER_PIVOT];
-      w[p + MULTIPLIER] = multiplier;
-      pivot += multiplier * here;
-    } else w[p + MULTIPLIER] = 0;
-    if (!(pivot > 0)) return false;
-    w[p + PER_PIVOT] = 1 / pivot;
-    here = above;
-  }
-  return true;
-}
-
-function couple(w: Float64Array, n: number, b0: number, g0: number): void {
-  for (let i = 0, p = 0; i < n; i++, p += STRIDE) {
-    w[p + COUPLING] = b0 * (w[p + SLOPE] - w[p + P_OVER_H]) + g0 * (w[p + STOREY_DASHPOT] + w[p + DAMPER_SLOPE]);
-  }
-}
-
 /** Iterates until every law and damper is on its line. @returns the solves it took, 0 where it does not converge */
 function solve(work: NonlinearWork): number {
-  predict(work);
   for (let count = 1; count <= MOST; count++) {
-    if (work.full === null) solveBanded(work);
-    else solveFull(work, work.full);
-    const changed = trials(work);
-    if (changed < 0) return count;
+    loads(work);
+    if (work.full !== null) productInto(work, work.full);
+    const own = substitute(work);
+    const changed = work.smooth ? ask(work, own) : own;
+    if (changed === work.n) return count;
     work.sums[CULPRIT] = changed;
     if (!renew(work, changed)) return 0;
   }
   return 0;
 }
 
-/** The parts of the new step that do not depend on its accelerations. */
-function predict({ n, w, now, full }: NonlinearWork): void {
+/** Upwards: the right-hand side from the lines as they stand, eliminated as it is made where C is tridiagonal. */
+function loads({ n, w, now }: NonlinearWork): void {
   const h = now[H];
   const am = now[AM];
   const af = now[AF];
@@ -186,72 +114,41 @@ function predict({ n, w, now, full }: NonlinearWork): void {
   const g1 = (1 - now[GAMMA]) * h;
   const ag = wf * now[AG_NEW] + af * now[AG_OLD];
   const top = (n - 1) * STRIDE;
-  let uB = 0;
-  let vB = 0;
-  for (let p = 0; p <= top; p += STRIDE) {
-    const a = w[p + A];
-    const v = w[p + V];
-    const u = w[p + U] + h * v + b1 * a;
-    const y = v + g1 * a;
-    w[p + U_AHEAD] = u;
-    w[p + V_AHEAD] = y;
-    w[p + DRIFT_AHEAD] = u - uB;
-    w[p + RATE_AHEAD] = y - vB;
-    let damping = w[p + FLOOR_DASHPOT] * (wf * y + af * v);
-    if (full !== null) damping += w[p + FULL_FORCE] + wf * g1 * w[p + DAMPING_RATE];
-    const above = p < top ? w[p + STRIDE + STOREY_FORCE] : 0;
-    w[p + LOAD] = af * (above - w[p + STOREY_FORCE]) - w[p + MASS] * (ag + am * a) - damping;
-    uB = u;
-    vB = y;
-  }
-}
-
-/** The force of a storey's lines at the new step, its acceleration apart. */
-function solveBanded({ n, w, now }: NonlinearWork): void {
-  const wf = 1 - now[AF];
-  const top = (n - 1) * STRIDE;
-  let s = 0;
-  {
-    const d = w[DRIFT_AHEAD];
-    const v = w[RATE_AHEAD];
-    s = w[INTERCEPT] + (w[SLOPE] - w[P_OVER_H]) * d + w[DAMPER_INTERCEPT] + (w[DAMPER_SLOPE] + w[STOREY_DASHPOT]) * v;
-  }
+  let a = w[A];
+  let v = w[V];
+  let y = v + g1 * a;
+  let x = w[U] + h * v + b1 * a;
+  let q = wf * (w[LINE] + w[LINE_DRIFT] * x + w[LINE_RATE] * y) + af * w[STOREY_FORCE];
   let r = 0;
   let p = 0;
   for (; p < top; p += STRIDE) {
-    const q = p + STRIDE;
-    const above =
-      w[q + INTERCEPT] +
-      (w[q + SLOPE] - w[q + P_OVER_H]) * w[q + DRIFT_AHEAD] +
-      w[q + DAMPER_INTERCEPT] +
-      (w[q + DAMPER_SLOPE] + w[q + STOREY_DASHPOT]) * w[q + RATE_AHEAD];
-    r = w[p + LOAD] + wf * (above - s) - w[p + MULTIPLIER] * r;
+    const above = p + STRIDE;
+    const aA = w[above + A];
+    const vA = w[above + V];
+    const yA = vA + g1 * aA;
+    const xA = w[above + U] + h * vA + b1 * aA;
+    const qA =
+      wf * (w[above + LINE] + w[above + LINE_DRIFT] * (xA - x) + w[above + LINE_RATE] * (yA - y)) +
+      af * w[above + STOREY_FORCE];
+    r = qA - q - w[p + MASS] * (ag + am * a) - w[p + FLOOR_DASHPOT] * (wf * y + af * v) - w[p + MULTIPLIER] * r;
     w[p + RHS] = r;
-    s = above;
+    a = aA;
+    v = vA;
+    x = xA;
+    y = yA;
+    q = qA;
   }
-  r = w[p + LOAD] - wf * s - w[p + MULTIPLIER] * r;
+  r = -q - w[p + MASS] * (ag + am * a) - w[p + FLOOR_DASHPOT] * (wf * y + af * v) - w[p + MULTIPLIER] * r;
   w[p + RHS] = r;
-  let a = r * w[p + PER_PIVOT];
-  w[p + NEXT] = a;
-  for (; p > 0; p -= STRIDE) {
-    a = w[p - STRIDE + RHS] * w[p - STRIDE + PER_PIVOT] - w[p + MULTIPLIER] * a;
-    w[p - STRIDE + NEXT] = a;
-  }
 }
 
-function solveFull({ n, w, now }: NonlinearWork, { inverse, side }: FullWork): void {
-  const wf = 1 - now[AF];
-  let s = 0;
-  for (let i = n - 1, p = (n - 1) * STRIDE; i >= 0; i--, p -= STRIDE) {
-    const own =
-      w[p + INTERCEPT] +
-      (w[p + SLOPE] - w[p + P_OVER_H]) * w[p + DRIFT_AHEAD] +
-      w[p + DAMPER_INTERCEPT] +
-      (w[p + DAMPER_SLOPE] + w[p + STOREY_DASHPOT]) * w[p + RATE_AHEAD];
-    const r = w[p + LOAD] + wf * (s - own);
+/** For a full C: its carried part taken off the right-hand side (the multipliers are zero), and NEXT = inverse x RHS. */
+function productInto({ n, w, now }: NonlinearWork, { inverse, side }: FullWork): void {
+  const ahead = (1 - now[AF]) * (1 - now[GAMMA]) * now[H];
+  for (let i = 0, p = 0; i < n; i++, p += STRIDE) {
+    const r = w[p + RHS] - w[p + FULL_FORCE] - ahead * w[p + DAMPING_RATE];
     w[p + RHS] = r;
     side[i] = r;
-    s = own;
   }
   for (let i = 0, p = 0, row = 0; i < n; i++, p += STRIDE, row += n) {
     let sum = 0;
@@ -260,57 +157,87 @@ function solveFull({ n, w, now }: NonlinearWork, { inverse, side }: FullWork): v
   }
 }
 
-/** Asks each law and damper; where one is off its line, the line is renewed. @returns the lowest storey that was off, or -1 */
-function trials({ n, w, now }: NonlinearWork): number {
-  const b0 = now[BETA] * now[H] * now[H];
-  const g0 = now[GAMMA] * now[H];
-  let below = 0;
-  let lowest = -1;
-  for (let i = 0, p = 0; i < n; i++, p += STRIDE) {
-    const a = w[p + NEXT];
-    const d = w[p + DRIFT_AHEAD] + b0 * (a - below);
-    const rate = w[p + RATE_AHEAD] + g0 * (a - below);
-    below = a;
-    w[p + TRIAL_DRIFT] = d;
-    w[p + TRIAL_RATE] = rate;
-    let off = false;
-    if (w[p + LAW] === ELASTIC) w[p + TRIAL_FORCE] = w[p + K] * d;
-    else {
-      trialOf(w, p);
-      const f = w[p + TRIAL_FORCE];
-      const slope = w[p + SLOPE];
-      if (!(Math.abs(f - w[p + INTERCEPT] - slope * d) <= w[p + FORCE_TOLERANCE])) {
-        off = true;
-        const tangent = w[p + TANGENT];
-        w[p + SLOPE] = tangent;
-        w[p + INTERCEPT] = f - tangent * d;
-      }
+/**
+ * Downwards: the new accelerations and where they lead; there the elastic and bilinear laws are asked, and where one is off its
+ * line, the line is renewed. Nothing is called here that is not inlined: after a call, even one not taken, each access looks up
+ * anew where the array begins and ends (in Chromium the march took twice as long). The other laws have a loop of their own.
+ * @returns the lowest storey that was off, or `n`
+ */
+function substitute({ n, w, now, full }: NonlinearWork): number {
+  const h = now[H];
+  const b0 = now[BETA] * h * h;
+  const b1 = (0.5 - now[BETA]) * h * h;
+  const g0 = now[GAMMA] * h;
+  const g1 = (1 - now[GAMMA]) * h;
+  const banded = full === null;
+  let lowest = n;
+  let p = (n - 1) * STRIDE;
+  let an = banded ? w[p + RHS] * w[p + PER_PIVOT] : w[p + NEXT];
+  let un = w[p + U] + h * w[p + V] + b1 * w[p + A] + b0 * an;
+  let vn = w[p + V] + g1 * w[p + A] + g0 * an;
+  for (let i = n - 1; i >= 0; i--, p -= STRIDE) {
+    let anB = 0;
+    let unB = 0;
+    let vnB = 0;
+    if (i > 0) {
+      const below = p - STRIDE;
+      const aB = w[below + A];
+      const vB = w[below + V];
+      anB = banded ? w[below + RHS] * w[below + PER_PIVOT] - w[p + MULTIPLIER] * an : w[below + NEXT];
+      unB = w[below + U] + h * vB + b1 * aB + b0 * anB;
+      vnB = vB + g1 * aB + g0 * anB;
     }
-    if (w[p + DAMPER] > 0 && damperTrial(w, p) !== 0) off = true;
-    if (off && lowest < 0) lowest = i;
+    w[p + NEXT] = an;
+    w[p + NEXT_U] = un;
+    w[p + NEXT_V] = vn;
+    w[p + TRIAL_DRIFT] = un - unB;
+    w[p + TRIAL_RATE] = vn - vnB;
+    an = anB;
+    un = unB;
+    vn = vnB;
+    if (w[p + LAW] === ELASTIC) w[p + TRIAL_FORCE] = w[p + K] * w[p + TRIAL_DRIFT];
+    else if (w[p + LAW] === BILINEAR) {
+      bilinearTrial(w, p);
+      if (isOff(w, p)) lowest = i;
+    }
   }
   return lowest;
 }
 
-/** The matrix again after the lines changed from storey `lowest` up. */
-function renew(work: NonlinearWork, lowest: number): boolean {
-  const { full, now, w, n } = work;
-  if (full === null) return refactor(work, lowest > 0 ? lowest - 1 : 0);
-  const wf = 1 - now[AF];
-  const b0 = wf * now[BETA] * now[H] * now[H];
-  const g0 = wf * now[GAMMA] * now[H];
-  return shiftInverse(full, w, n, b0, g0, 1 - now[AM]);
+/** Asks the other laws, and the dampers. @returns the lowest storey that was off, or `lowest` */
+function ask({ n, w }: NonlinearWork, lowest: number): number {
+  for (let i = 0, p = 0; i < n; i++, p += STRIDE) {
+    let off = false;
+    if (w[p + LAW] > BILINEAR) {
+      trialOf(w, p);
+      off = isOff(w, p);
+    }
+    if (w[p + DAMPER] > 0 && damperTrial(w, p) !== 0) off = true;
+    if (off && i < lowest) lowest = i;
+  }
+  return lowest;
+}
+
+/** Whether the law's force is off its line; the line is then its tangent. */
+function isOff(w: Float64Array, p: number): boolean {
+  const f = w[p + TRIAL_FORCE];
+  const d = w[p + TRIAL_DRIFT];
+  if (Math.abs(f - w[p + INTERCEPT] - w[p + SLOPE] * d) <= w[p + FORCE_TOLERANCE]) return false;
+  const tangent = w[p + TANGENT];
+  w[p + SLOPE] = tangent;
+  w[p + INTERCEPT] = f - tangent * d;
+  return true;
 }
 
 /** Takes the step: state, laws, energies, peaks. */
 function commit(work: NonlinearWork, j: number, settles: boolean): void {
   const { n, w, now, full, sums } = work;
-  const b0 = now[BETA] * now[H] * now[H];
   const g0 = now[GAMMA] * now[H];
   const g1 = (1 - now[GAMMA]) * now[H];
   const wf = 1 - now[AF];
   const onMass = 1 - now[AM];
   const perDamping = 1 / (wf * g0);
+  if (work.smooth) take(work);
   let above = 0;
   let dashpotAbove = 0;
   let pullAbove = 0;
@@ -324,25 +251,14 @@ function commit(work: NonlinearWork, j: number, settles: boolean): void {
   let dirty = -1;
   for (let i = n - 1, p = (n - 1) * STRIDE; i >= 0; i--, p -= STRIDE) {
     const a = w[p + NEXT];
-    const u = w[p + U_AHEAD] + b0 * a;
-    const v = w[p + V_AHEAD] + g0 * a;
+    const u = w[p + NEXT_U];
+    const v = w[p + NEXT_V];
     const d = w[p + TRIAL_DRIFT];
     const rate = w[p + TRIAL_RATE];
     const f = w[p + TRIAL_FORCE];
-    const before = w[p + DRIFT];
-    if (w[p + LAW] === ELASTIC) {
-      w[p + WORK] += 0.5 * (w[p + FORCE] + f) * (d - before);
-      w[p + DRIFT] = d;
-      w[p + FORCE] = f;
-    } else commitOf(w, p);
-    let damper = 0;
-    if (w[p + DAMPER] > 0) {
-      damper = w[p + TRIAL_DAMPER];
-      w[p + DAMPER_WORK] += 0.5 * (w[p + DAMPER_FORCE] + damper) * (d - before);
-      w[p + DAMPER_FORCE] = damper;
-      const rateSize = Math.abs(rate);
-      if (rateSize > w[p + PEAK_RATE]) w[p + PEAK_RATE] = rateSize;
-    }
+    if (w[p + LAW] === BILINEAR) bilinearCommit(w, p);
+    else if (w[p + LAW] === ELASTIC) elasticCommit(w, p);
+    const damper = w[p + DAMPER_FORCE];
     const shear = f + damper;
     const geometric = w[p + P_OVER_H] * d;
     const restoring = shear - geometric;
@@ -420,4 +336,19 @@ function commit(work: NonlinearWork, j: number, settles: boolean): void {
   if (stopped || !(gap < Number.POSITIVE_INFINITY)) sums[STOPPED] = stopped ? COLLAPSED : DIVERGED;
   // Only a tangent that turns negative can fail here; the next solve then does not converge and says so.
   else if (dirty >= 0) refactor(work, dirty > 0 ? dirty - 1 : 0);
+}
+
+/** Moves the other laws and the dampers to their trials, and adds the work of the way there. */
+function take({ n, w }: NonlinearWork): void {
+  for (let p = 0; p < n * STRIDE; p += STRIDE) {
+    if (w[p + DAMPER] > 0) {
+      const way = w[p + TRIAL_DRIFT] - w[p + LAST_DRIFT];
+      w[p + DAMPER_WORK] += 0.5 * (w[p + DAMPER_FORCE] + w[p + TRIAL_DAMPER]) * way;
+      w[p + DAMPER_FORCE] = w[p + TRIAL_DAMPER];
+      w[p + LAST_DRIFT] = w[p + TRIAL_DRIFT];
+      const rateSize = Math.abs(w[p + TRIAL_RATE]);
+      if (rateSize > w[p + PEAK_RATE]) w[p + PEAK_RATE] = rateSize;
+    }
+    if (w[p + LAW] > BILINEAR) commitOf(w, p);
+  }
 }

@@ -11,8 +11,8 @@ const { LAW, K, K_YIELD, STRENGTH, LAW_P, LAW_Q, LAW_R } = FIELD;
 const { LAW_A, LAW_B, LAW_C, LAW_D, DRIFT, FORCE, WORK } = FIELD;
 
 /** Numbers of the kinds, as they stand in a record's LAW; each is its law's place in LAWS. */
-const ELASTIC = 0;
-const BILINEAR = 1;
+export const ELASTIC = 0;
+export const BILINEAR = 1;
 const PEAK_ORIENTED = 2;
 const BOUC_WEN = 3;
 const FLAG = 4;
