@@ -11,7 +11,7 @@ export interface BenchProgressProps {
 }
 
 /** How far it is: a line that always stands at the same place. */
-export function BenchProgress({ bench: { status, progress, motion }, of, refused, old }: BenchProgressProps) {
+export function BenchProgress({ bench: { status, progress, motion, rows }, of, refused, old }: BenchProgressProps) {
   const { done, of: all } = progress ?? { done: 0, of: 0 };
   return (
     <>
@@ -30,7 +30,11 @@ export function BenchProgress({ bench: { status, progress, motion }, of, refused
     if (status === 'idle') return `Ready for ${of}`;
     if (status === 'running') return `Running under ${of}`;
     if (old) return `These rows belong to another frame or motion than the sheet holds now: ${motion}`;
-    const end = status === 'stopped' ? `Stopped after ${done} of ${all} runs` : `${all} runs done`;
+    const [came, asked] = [
+      rows.filter(({ state }) => state === 'done').length,
+      rows.filter(({ stable }) => stable).length,
+    ];
+    const end = status === 'stopped' ? `Stopped after ${came} of ${asked} runs` : `${came} of ${asked} runs done`;
     return `${end}, under ${of}`;
   }
 }

@@ -93,7 +93,7 @@ export function BenchTable({ bench: { rows, reference, motion }, modes, inUse, o
                     <span className="quiet small">{nameWords(row)}</span>
                   </th>
                 )}
-                <th scope="row" className="step">
+                <th scope="row" className="step-size">
                   {shortSeconds(row.step)}
                 </th>
                 <Result row={row} />
@@ -104,6 +104,7 @@ export function BenchTable({ bench: { rows, reference, motion }, modes, inUse, o
                     <span className="accent small">in use</span>
                   ) : row.state === 'done' ? (
                     <Button
+                      kind="text"
                       size="low"
                       aria-label={`Use this: ${methodWords(row.method)}, step ${shortSeconds(row.step)} s`}
                       onClick={() => takeRow(row)}

@@ -38,7 +38,7 @@ function EvidenceOf({ answers, onClose }: { readonly answers: Answers; readonly 
     <Dialog
       title={TITLE}
       onClose={onClose}
-      width={1080}
+      width={1240}
       foot={
         <>
           <Button onClick={() => setSession({ dialog: 'analysis' })}>Method and step</Button>
@@ -102,8 +102,9 @@ function ModesOf({ answers, groups }: { readonly answers: Answers; readonly grou
       <p className="quiet small">
         What {name} makes of a free vibration in each mode
         {yielding && ' of the initial stiffness'}, in closed form: how much longer its period comes out, how much of its
-        amplitude a cycle loses beside physical damping, and the same as a ratio of critical. None: the mode does not
-        swing at this step. {source}; Hughes, The Finite Element Method, 9.1 and 9.2 (from memory).
+        amplitude a cycle loses beside physical damping (below zero: the scheme takes less than that), and the same as a
+        ratio of critical. None: the mode does not swing at this step. {source}; Hughes, The Finite Element Method, 9.1
+        and 9.2 (from memory).
       </p>
     </section>
   );

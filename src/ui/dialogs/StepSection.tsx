@@ -1,4 +1,5 @@
 import { AIM, MASS_COVERED, MOST_PARTS, STEPS_A_PERIOD } from '../../core/dynamics/autoStep.ts';
+import type { Evidence } from '../../core/dynamics/evidence.ts';
 import type { Fault } from '../../core/fault.ts';
 import type { Mode } from '../../core/frame/modes.ts';
 import { printQuantity } from '../../core/units/quantities.ts';
@@ -56,8 +57,8 @@ export function StepSection({ project, modes, faults }: StepSectionProps) {
         </Line>
       )}
       {given === 'auto' && (
-        <Line label="Search">
-          <span className="quiet small">{HALVING}</span>
+        <Line label="Parts" means={HALVING}>
+          <span className="accent">{searched(evidence)}</span>
         </Line>
       )}
       <Line
@@ -86,6 +87,15 @@ export function StepSection({ project, modes, faults }: StepSectionProps) {
 }
 
 const HALVING = `each record's interval in 1, 2, 4 … ${MOST_PARTS} parts: the first whose peak drifts change by so little at half the step that the step error is under ${printQuantity(AIM, 'percent', 'si', 0)} %, with ${STEPS_A_PERIOD} steps in each mode needed for ${printQuantity(MASS_COVERED, 'percent', 'si', 0)} % of the mass, and within the stability limit. While a cell is edited the last step counts at once and is confirmed behind`;
+
+/** What halving came to: "1 or 2, by motion". */
+function searched(evidence: Readonly<Record<string, Evidence>> | null): string {
+  const parts = [...new Set(Object.values(evidence ?? {}).map((one) => one.parts))].sort((a, b) => a - b);
+  if (parts.length === 0) return 'not known yet';
+  return parts.length === 1
+    ? String(parts[0])
+    : `${parts.slice(0, -1).join(', ')} or ${parts[parts.length - 1]}, by motion`;
+}
 
 function givenAs(step: Project['analysis']['step']): Given {
   if (step === 'auto') return 'auto';

@@ -60,10 +60,10 @@ export function motionEvidence({ runs, evidence }: Answers, names: readonly stri
       column('parts', 'Parts of the interval', 'count', ({ parts }) => parts),
       column('stepError', 'Step error of peak drifts', 'percent', ({ stepError }) => stepError, 2),
       column('imbalance', 'Energy imbalance', 'percent', ({ imbalance }) => imbalance, 3),
-      column('solves', 'Solves a step, mean', 'ratio', ({ solvesAStep }) => solvesAStep, 2),
+      column('solves', 'Solves a step, mean', 'count', ({ solvesAStep }) => solvesAStep, 2),
       column('mostSolves', 'Most of one step', 'count', ({ mostSolves }) => mostSolves),
       column('halvings', 'Steps halved', 'count', ({ halvings }) => halvings),
-      column('stepsInShortest', 'Steps in the shortest period', 'ratio', ({ stepsInShortest }) => stepsInShortest, 1),
+      column('stepsInShortest', 'Steps in the shortest period', 'count', ({ stepsInShortest }) => stepsInShortest, 1),
       ...(rows.some(({ one }) => one.auto !== null)
         ? [column('why', 'Why this step', 'text', ({ auto }) => auto?.why ?? null)]
         : []),
@@ -108,7 +108,7 @@ export function modeEvidence(modes: readonly Mode[], { modes: accuracy }: Eviden
       column(
         'stepsAPeriod',
         'Steps a period',
-        'ratio',
+        'count',
         accuracy.map((one) => one.stepsAPeriod),
         1,
       ),

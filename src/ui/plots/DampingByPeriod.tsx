@@ -46,7 +46,7 @@ export function DampingByPeriod({ layout, tokens, old }: DampingByPeriodProps) {
           )}
           <span>
             <KeyDot />
-            modes of this frame
+            modes
           </span>
           {kind !== 'none' && (
             <span>

@@ -7,7 +7,7 @@ import type { MenuItem } from '../controls/Menu.tsx';
 import { chooseForce, type LoopForce, showBackbone, usePanelChoice } from './choice.ts';
 import { LoopCursor } from './LoopCursor.tsx';
 import { forceOf, type Loop, loopOf } from './loop.ts';
-import { loopAxes } from './loopAxes.ts';
+import { type LoopAxes, loopAxes } from './loopAxes.ts';
 import { loopPlot } from './loopPlot.ts';
 import { Plot } from './Plot.tsx';
 import { KeyLine, KeyTick, plotSize, SquareFrame, type SquareLayout } from './SquareFrame.tsx';
@@ -22,10 +22,10 @@ export interface ForceDriftProps {
   readonly shown: ShownRun | null;
 }
 
-const FORCES: readonly { readonly force: LoopForce; readonly label: string; readonly words: string }[] = [
-  { force: 'law', label: 'Force of the storey alone', words: '' },
-  { force: 'shear', label: 'With damper force', words: ', with damper' },
-  { force: 'damper', label: 'Damper force alone', words: ', damper alone' },
+const FORCES: readonly { readonly force: LoopForce; readonly label: string }[] = [
+  { force: 'law', label: 'Force of the storey alone' },
+  { force: 'shear', label: 'With damper force' },
+  { force: 'damper', label: 'Damper force alone' },
 ];
 
 /** A force against the drift of the chosen storey: what has been by the cursor in ink, what comes in grey. */
@@ -49,10 +49,7 @@ export function ForceDrift({ layout, tokens, system, old, shown }: ForceDriftPro
       motions.findIndex(({ name }) => name === shown?.motion),
     ),
   );
-  const words =
-    shown === null || loop === null || axes === null
-      ? 'no run yet'
-      : `storey ${shown.storey + 1} under ${letter}${FORCES.find((entry) => entry.force === loop.which)?.words}; ${axes.force.unit} against ${axes.drift.unit}`;
+  const words = shown === null || loop === null || axes === null ? 'no run yet' : wordsOf(loop, axes, shown, letter);
   const backbone = withBackbone && loop?.which === 'law' && loop.storey.law.kind !== 'elastic';
   return (
     <SquareFrame
@@ -90,6 +87,13 @@ export function ForceDrift({ layout, tokens, system, old, shown }: ForceDriftPro
       {loop !== null && axes !== null && <LoopCursor loop={loop} axes={axes} />}
     </SquareFrame>
   );
+}
+
+/** What is shown, in as many words as the head has room for. */
+function wordsOf({ which }: Loop, { force, drift }: LoopAxes, { storey }: ShownRun, letter: string): string {
+  const place = `storey ${storey + 1}`;
+  if (which === 'law') return `${place} under ${letter}; ${force.unit} against ${drift.unit}`;
+  return `${which === 'shear' ? `${place} with damper` : `damper of ${place}`}; ${force.unit}, ${drift.unit}`;
 }
 
 /** Only what this storey has is offered. */

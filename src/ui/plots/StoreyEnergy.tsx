@@ -34,7 +34,7 @@ export function StoreyEnergy({ layout, tokens, system, old, shown }: StoreyEnerg
   const words =
     shown === null
       ? 'no run yet'
-      : `under ${letterOf(Math.max(0, at))}; level in ${axisUnitOf('length', system, 0).unit}, ${unit}`;
+      : `under ${letterOf(Math.max(0, at))}; level in ${axisUnitOf('length', system, 0).unit} against ${unit}`;
   const damped = shown?.run.storeys.damperWork.some((work) => work > 0) ?? false;
   return (
     <SquareFrame

@@ -37,12 +37,11 @@ export function StoreyProfile({ kind, layout, tokens, system, old }: StoreyProfi
   );
   const length = axisUnitOf('length', system, 0).unit;
   const measure = MEASURE_WORDS[answers?.envelope.measure ?? 'mean'];
-  const unit = profile?.quantity === 'ratio' ? 'peak drift over yield drift' : 'in %';
   return (
     <SquareFrame
       layout={layout}
       kind={kind}
-      words={`level in ${length}${profile === null ? '' : profile.quantity === 'ratio' ? `; ${unit}` : ` against ${profile.name.toLowerCase()} ${unit}`}`}
+      words={`level in ${length}${profile?.across ?? ''}`}
       legend={
         <>
           <span>

@@ -89,8 +89,10 @@ export function dampingPlot({ damping, modes, ratios }: DampingPicture, size: Si
       annotations: modes.slice(0, NAMED).map(({ period }, i) => ({
         x: Math.log10(period),
         y: marks[i],
-        yanchor: 'bottom' as const,
-        yshift: 4,
+        // Clear of the line of the ratio that was asked for.
+        ...(marks[i] < percent.onAxis(wanted[0] ?? 0)
+          ? { yanchor: 'top' as const, yshift: -4 }
+          : { yanchor: 'bottom' as const, yshift: 4 }),
         text: `T<sub>${i + 1}</sub>`,
         showarrow: false,
         font: { family: tokens.sans, size: 11, color: tokens.ink2 },

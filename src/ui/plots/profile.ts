@@ -12,6 +12,8 @@ export interface Profile {
   readonly id: string;
   /** "Peak drift ratio" */
   readonly name: string;
+  /** What stands across, behind "level in m". */
+  readonly across: string;
   readonly quantity: Extract<Quantity, 'percent' | 'ratio'>;
   readonly decimals: number;
   /** Ground up [SI]; NaN where a storey has none; null while the suite has no statistic. */
@@ -36,6 +38,7 @@ export function profileOf(kind: ProfileKind, { envelope, case: from }: Answers):
       return {
         id: 'drift-profile',
         name: 'Peak drift ratio',
+        across: ' against peak drift ratio in %',
         quantity: 'percent',
         decimals: 2,
         suite: drift && storeysOnly(drift[measure].map((value) => factor * value)),
@@ -47,6 +50,7 @@ export function profileOf(kind: ProfileKind, { envelope, case: from }: Answers):
       return {
         id: 'ductility-profile',
         name: 'Ductility',
+        across: '; peak drift over yield drift',
         quantity: 'ratio',
         decimals: 1,
         suite: ductility?.[measure] ?? null,
@@ -59,6 +63,7 @@ export function profileOf(kind: ProfileKind, { envelope, case: from }: Answers):
       return {
         id: 'residual-profile',
         name: 'Residual drift ratio',
+        across: ' against ratio in %',
         quantity: 'percent',
         decimals: 2,
         suite: suite && storeysOnly(suite),

@@ -38,6 +38,36 @@ describe('contentOf', () => {
     expect(apart).toBeGreaterThan(0);
   });
 
+  it('shows an isolator by its displacement, the storeys above it by their drift ratio', () => {
+    const isolator = contentOf('drift', result, 0, heights, true);
+    expect(isolator?.quantity).toBe('displacement');
+    expect(isolator?.peak.value).toBe(result.storeys.peakDrift[0]);
+    expect(contentOf('drift', result, 1, heights, true)?.quantity).toBe('percent');
+  });
+
+  it('stacks hysteretic work and dampers of a frame that yields, in that order under strain and kinetic', () => {
+    const yielding = {
+      ...frame,
+      storeys: frame.storeys.map((storey) => ({
+        ...storey,
+        law: { kind: 'bilinear' as const, strength: 3e5, hardening: 0.02 },
+        damper: { coefficient: 5e5, exponent: 0.5 },
+      })),
+    };
+    const hard = run(yielding, noise(5, 1500), 0.01, { histories: true, scale: 2 });
+    const energy = contentOf('energy', hard, 0, heights);
+    expect(energy?.stack.map(({ part }) => part)).toEqual(['hysteretic', 'damping', 'dampers', 'strain', 'kinetic']);
+    const ends = energy?.stack.map(({ sum }) => sum.at(-1) ?? 0) ?? [];
+    expect(ends[0]).toBeCloseTo(
+      hard.storeys.dissipated.reduce((sum, work) => sum + work, 0),
+      3,
+    );
+    expect(ends[2] - ends[1]).toBeCloseTo(
+      hard.storeys.damperWork.reduce((sum, work) => sum + work, 0),
+      3,
+    );
+  });
+
   it('has nothing for a run without histories, for no storey, for another building', () => {
     for (const { kind } of TIME_PANELS) {
       expect(contentOf(kind, { ...result, histories: null }, 0, heights)).toBeNull();
