@@ -107,7 +107,7 @@ export function DriftPlot(props: DriftPlotProps) {
       </g>
       {limitX !== null && limitX <= span.width + 1 && (
         <path
-          d={`M${px(limitX)} -8V${height}`}
+          d={`M${px(limitX)} -8V${isolated ? sky + (rows.tops[0] ?? 0) : height}`}
           className="s-signal"
           strokeWidth="1.5"
           strokeDasharray={answers === null ? '6 3' : undefined}
@@ -126,14 +126,15 @@ function half(size: number): number {
 /** Places of the motions' ticks in a row [px], as text so that an unchanged row is not drawn again. */
 function ticksOf(motions: readonly MotionDrift[], storey: number, scale: number, except: string | null): string {
   let places = '';
-  for (const { motion, drift } of motions) {
-    if (motion !== except) places += `${px((drift[storey] ?? 0) * scale)} `;
+  // A run that broke off has no peak to show: its storey carries an X.
+  for (const { motion, drift, finished } of motions) {
+    if (finished && motion !== except) places += `${px((drift[storey] ?? 0) * scale)} `;
   }
   return places;
 }
 
 function placeOf(motions: readonly MotionDrift[], storey: number, scale: number, name: string | null): number | null {
-  const drift = motions.find(({ motion }) => motion === name)?.drift[storey];
+  const drift = motions.find(({ motion, finished }) => finished && motion === name)?.drift[storey];
   return drift === undefined ? null : drift * scale;
 }
 
@@ -216,7 +217,7 @@ const DriftRow = memo(function DriftRow(props: DriftRowProps) {
   );
 });
 
-/** The motion that did not finish: an X in its storey's row. */
+/** The motions that did not finish: an X in the row of the storey that gave way, with their letters. */
 function Failures({
   answers,
   rows,
@@ -225,16 +226,20 @@ function Failures({
   span,
   letters,
 }: DriftPlotProps & { answers: AnswerRows; scale: number; sky: number }) {
-  return answers.failed.map(({ motion, storey }) => {
-    if (storey < 0) return null;
-    const drift = answers.motions.find((entry) => entry.motion === motion)?.drift[storey] ?? 0;
-    const x = Math.min(drift * scale, span.width - 20);
-    const y = sky + (rows.tops[storey] ?? 0) + (rows.heights[storey] ?? 0) / 2;
+  return rows.heights.map((size, storey) => {
+    const names = answers.failed.filter((entry) => entry.storey === storey).map(({ motion }) => motion);
+    if (names.length === 0) return null;
+    const words = names.map((name) => letters[name] ?? name).join(' ');
+    const drifts = answers.motions
+      .filter(({ motion }) => names.includes(motion))
+      .map(({ drift }) => drift[storey] ?? 0);
+    const x = Math.min(Math.max(...drifts) * scale, span.width - 12 - 8 * words.length);
+    const y = sky + (rows.tops[storey] ?? 0) + size / 2;
     return (
-      <g key={motion}>
+      <g key={storey}>
         <path d={`M${px(x - 4)} ${y - 4}l8 8m0-8l-8 8`} className="s-signal" strokeWidth="2" />
-        <text x={x + 9} y={y + 4} className="signal halo">
-          {letters[motion] ?? motion}
+        <text x={px(x + 9)} y={y + 4} className="signal halo">
+          {words}
         </text>
       </g>
     );

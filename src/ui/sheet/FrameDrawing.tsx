@@ -1,7 +1,7 @@
 import { useLayoutEffect, useMemo, useRef } from 'react';
 import { printQuantity, type System, unitOf } from '../../core/units/quantities.ts';
 import { followCursor, MARK } from './cursor.ts';
-import { bearingPath, columnPath, columnWidths, markPlaces, px } from './drawing.ts';
+import { bearingMiddle, bearingPath, columnEnds, columnPath, columnWidths, type Ends, px } from './drawing.ts';
 import type { Span } from './layout.ts';
 import type { Rows } from './rows.ts';
 
@@ -74,7 +74,9 @@ export function FrameDrawing(props: FrameDrawingProps) {
           );
           plates[storey]?.setAttribute('x', px(left - 9 + head));
           const mark = marks.length === count ? (marks[storey] ?? MARK.none) : MARK.none;
-          writeDots(dots.current?.children[storey], mark, left, right, foot, head, low, high);
+          const ends =
+            isolated && storey === 0 ? bearingMiddle(foot, head, low, high) : columnEnds(foot, head, low, high);
+          writeDots(dots.current?.children[storey], mark, left, right, ends);
         }
         const displaced = known ? (pose[count - 1] ?? 0) : 0;
         writeRoof(roof.current, left, at(count), floors[count] ?? 0, known ? displaced : null, system);
@@ -155,30 +157,16 @@ function levelText(level: number, floor: number, system: System): string {
 }
 
 /** The dots at a storey's column ends: none before it yields, open once it has, filled while it is past yield. */
-function writeDots(
-  group: Element | undefined,
-  mark: number,
-  left: number,
-  right: number,
-  foot: number,
-  head: number,
-  low: number,
-  high: number,
-): void {
+function writeDots(group: Element | undefined, mark: number, left: number, right: number, ends: Ends): void {
   if (group === undefined) return;
-  const before = group.getAttribute('data-mark');
-  if (before !== String(mark)) group.setAttribute('data-mark', String(mark));
+  if (group.getAttribute('data-mark') !== String(mark)) group.setAttribute('data-mark', String(mark));
   if (mark === MARK.none) return;
-  const at = markPlaces(low, high);
-  const places = [
-    [left + foot, at.foot],
-    [left + head, at.head],
-    [right + foot, at.foot],
-    [right + head, at.head],
-  ] as const;
-  for (const [end, [x, y]] of places.entries()) {
-    group.children[end]?.setAttribute('cx', px(x));
-    group.children[end]?.setAttribute('cy', px(y));
+  for (const [side, rest] of [left, right].entries()) {
+    for (const [end, [x, y]] of ends.entries()) {
+      const dot = group.children[2 * side + end];
+      dot?.setAttribute('cx', px(rest + x));
+      dot?.setAttribute('cy', px(y));
+    }
   }
 }
 

@@ -29,6 +29,8 @@ export interface GridProps {
   readonly old: boolean;
   readonly faults: readonly Fault[];
   readonly letters: Readonly<Record<string, string>>;
+  /** The panel of a law is open. */
+  readonly panel: boolean;
   readonly onPaste: (text: string) => void;
   readonly onLaw: (storey: number) => void;
 }
@@ -36,12 +38,13 @@ export interface GridProps {
 /** The storey table: one tab stop, every cell within reach of the keys. */
 export function Grid(props: GridProps) {
   const { project, columns, rows, system, cell, chosenStorey, answers, old, faults, letters, yielding } = props;
-  const { lawNames, signs, onPaste, onLaw } = props;
+  const { lawNames, signs, panel, onPaste, onLaw } = props;
   const grid = useRef<HTMLDivElement>(null);
   const wanted = useRef(false);
   const selection = useSession((state) => state.selection);
   const draft = useDocument((state) => state.draft);
-  const edited = draft === null ? null : cellOf(draft.path);
+  // What is typed in the panel of a law shows in its cell, and is edited there.
+  const edited = draft === null || panel ? null : cellOf(draft.path);
   const walked = useMemo(() => [...columns, ...answerColumns(yielding)], [columns, yielding]);
   const storeys = project.frame.storeys;
   const keyboard: Keyboard = {
@@ -156,7 +159,7 @@ export function Grid(props: GridProps) {
         const standing = [...(isolator ? ['isolator'] : []), ...(governs ? ['governs'] : [])].join(', ');
         const tag =
           failed.length > 0
-            ? `${failed[0].how} ${failed.map(({ motion }) => letters[motion] ?? motion).join(', ')}`
+            ? `${failed[0].how} ${letters[failed[0].motion] ?? failed[0].motion}${failed.length > 1 ? ` +${failed.length - 1}` : ''}`
             : standing === ''
               ? null
               : standing;

@@ -57,7 +57,7 @@ export function Heads(props: HeadsProps) {
         {scaleWords}
         {sway !== null && `, sway × ${sway}`}
       </div>
-      <div className="tier1" style={{ left: answers.x, width: answers.width }}>
+      <div className="tier1 answered" style={{ left: answers.x, width: answers.width }}>
         <span>{narrow ? 'Answers' : 'The storey answers'}</span>
         {suite !== null && <Legend suite={suite} letter={letter} strengths={props.strengths && shear !== null} />}
       </div>
@@ -125,18 +125,31 @@ interface AxisNumbersProps {
 
 function AxisNumbers({ span, axis, keepFree = null, after = 30 }: AxisNumbersProps) {
   const scale = span.width / axis.end;
-  const numbers = useMemo(() => [0, ...linesOf(axis, axis.major)], [axis]);
+  const numbers = useMemo(() => {
+    const lines = linesOf(axis, axis.major);
+    // Every so many-th, so that no two touch.
+    const widest = Math.max(...lines.map((value) => FIGURE * numberText(value).length));
+    const every = Math.max(1, Math.ceil((widest + 6) / (axis.major * scale)));
+    return [0, ...lines.filter((_, index) => (index + 1) % every === 0)];
+  }, [axis, scale]);
   return (
     <svg className="axis-head" aria-hidden="true" style={{ left: span.x }} width={span.width} height="60">
       {numbers.map((value) =>
         keepFree !== null && (value - keepFree) * scale > -30 && (value - keepFree) * scale < after ? null : (
           <text key={value} x={px(value * scale)} y="49" className="middle">
-            {printQuantity(value, 'count', 'si', decimalsIn(value))}
+            {numberText(value)}
           </text>
         ),
       )}
     </svg>
   );
+}
+
+/** Width of a figure of an axis [px]. */
+const FIGURE = 6.2;
+
+function numberText(value: number): string {
+  return printQuantity(value, 'count', 'si', decimalsIn(value));
 }
 
 /** Decimals a number of an axis needs of its own: 0, 0.5, 1. */

@@ -14,7 +14,7 @@ export interface LawDrawingProps {
   readonly drawable: boolean;
 }
 
-const WIDTH = 264;
+const WIDTH = 240;
 const HEIGHT = 172;
 const MIDDLE_X = WIDTH / 2;
 const MIDDLE_Y = HEIGHT / 2;
@@ -65,7 +65,7 @@ export function LawDrawing({ project, storey, system, drawable }: LawDrawingProp
               className="s-signal"
               strokeDasharray="6 3"
             />
-            <text x={px(x(limit) - 4)} y={HEIGHT - 3} className="signal end">
+            <text x={px(x(limit) - 4)} y={HEIGHT - 3} className="signal end halo">
               limit
             </text>
           </>
@@ -79,10 +79,10 @@ export function LawDrawing({ project, storey, system, drawable }: LawDrawingProp
               className="s-accent"
               strokeDasharray="2 2"
             />
-            <text x={px(x(drift) + 3)} y={MIDDLE_Y + 13} className="accent">
+            <text x={px(x(drift) + 3)} y={MIDDLE_Y + 13} className="accent halo">
               {printQuantity(drift, 'drift', system, system === 'si' ? 1 : 2)} {unitOf('drift', system)}
             </text>
-            <text x={MIDDLE_X - 4} y={px(y(law.strength) + 4)} className="accent end">
+            <text x={MIDDLE_X - 4} y={px(y(law.strength) + 4)} className="accent end halo">
               {printQuantity(law.strength, 'force', system)} {unitOf('force', system)}
             </text>
           </>

@@ -1,5 +1,6 @@
 import { type KeyboardEvent, useEffect, useId, useLayoutEffect, useRef, useState } from 'react';
 import { cellFacts } from '../../document/cellFacts.ts';
+import type { Typed } from '../../document/project.ts';
 import { effectiveProject, useDocument } from '../../state/document.ts';
 import { useResults } from '../../state/results.ts';
 import { sessionStore, useSession } from '../../state/session.ts';
@@ -56,9 +57,7 @@ export function LawPanel({ storey, onClose }: LawPanelProps) {
   const { law, name } = row;
   const path = `frame.storeys[${storey}].law`;
   const keys = KEYS[law.kind];
-  const drawable = !faults.some(
-    ({ where }) => where.startsWith(path) || where === `frame.storeys[${storey}].stiffness`,
-  );
+  const drawable = above0(row.stiffness) && !faults.some(({ where }) => where.startsWith(path));
   const others = faults.filter(({ where }) => where === path || where === `frame.storeys[${storey}].role`);
   return (
     <div
@@ -124,7 +123,7 @@ export function LawPanel({ storey, onClose }: LawPanelProps) {
           value={scope}
           segments={[
             { value: 'this', label: 'this storey' },
-            { value: 'selected', label: `${selected.length} selected`, disabled: selected.length < 2 },
+            ...(selected.length > 1 ? ([{ value: 'selected', label: `${selected.length} selected` }] as const) : []),
             { value: 'all', label: `all ${all.length}`, disabled: all.length < 2 },
           ]}
           onChange={(next) => {
@@ -155,6 +154,10 @@ export function LawPanel({ storey, onClose }: LawPanelProps) {
       )}
     </div>
   );
+}
+
+function above0(value: Typed): boolean {
+  return typeof value === 'number' && value > 0;
 }
 
 /** The storeys of the chosen block, where it holds the storey; else that one alone. */

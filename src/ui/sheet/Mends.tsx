@@ -33,20 +33,15 @@ export function Mends({ failed, letter, why }: MendsProps) {
   };
   return (
     <>
-      <Button size="medium" onClick={show}>
+      <Button size="low" onClick={show}>
         Show {letter} at {printQuantity(time, 'time', 'si', 2)} s
       </Button>
       {step !== 'auto' && (
-        <Button size="medium" onClick={halve}>
-          Halve the step<span className="roomy"> and try {letter}</span>
+        <Button size="low" aria-label={`Halve the step and try ${letter}`} onClick={halve}>
+          Halve the step<span className="roomy">and try {letter}</span>
         </Button>
       )}
-      <Popover
-        button={`Leave ${letter} out`}
-        label={`Leave ${letter} out`}
-        className="button plain medium"
-        align="right"
-      >
+      <Popover button={`Leave ${letter} out`} label={`Leave ${letter} out`} className="button plain low" align="right">
         <LeaveOut motion={motion} letter={letter} why={why} />
       </Popover>
     </>

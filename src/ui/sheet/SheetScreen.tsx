@@ -75,7 +75,8 @@ export function SheetScreen({ onOpen, onExample }: SheetScreenProps) {
   const empty = storeys.length === 0;
   const heights = useMemo(() => (empty ? [null] : storeys.map(({ height }) => asNumber(height))), [storeys, empty]);
   const stiffnesses = useMemo(() => storeys.map(({ stiffness }) => asNumber(stiffness)), [storeys]);
-  const rows = useMemo(() => rowsOf(heights, free), [heights, free]);
+  const isolated = storeys[0]?.role === 'isolator';
+  const rows = useMemo(() => rowsOf(heights, free, isolated), [heights, free, isolated]);
   const height = Math.max(free, rows.total);
   const cell = selection ?? { storey: Math.max(0, chosenStorey), column: empty ? 'height' : 'stiffness' };
   const shownCell = { storey: Math.min(cell.storey, rows.heights.length - 1), column: cell.column };
@@ -129,7 +130,7 @@ export function SheetScreen({ onOpen, onExample }: SheetScreenProps) {
   return (
     <div
       ref={page}
-      className={`page ${layout.narrow ? 'narrow' : ''} ${layout.sideways ? 'sideways' : ''} ${tall ? 'tall' : ''}`}
+      className={`page ${layout.narrow ? 'narrow' : ''} ${layout.sideways ? 'sideways' : ''} ${layout.tight ? 'tight' : ''} ${tall ? 'tall' : ''}`}
       onScroll={(event) => event.currentTarget.classList.toggle('scrolled', event.currentTarget.scrollTop > 0)}
     >
       <div
@@ -224,6 +225,7 @@ export function SheetScreen({ onOpen, onExample }: SheetScreenProps) {
               old={old}
               faults={faults}
               letters={letters}
+              panel={lawOf !== null}
               onPaste={setPasted}
               onLaw={setLawOf}
             />
@@ -236,7 +238,7 @@ export function SheetScreen({ onOpen, onExample }: SheetScreenProps) {
             stiffnesses={empty ? [null] : stiffnesses}
             over={old ? [] : (answers?.over ?? [])}
             governing={answers?.governing ?? -1}
-            isolated={storeys[0]?.role === 'isolator'}
+            isolated={isolated}
             sway={sway ?? 1}
             system={system}
             ghost={empty}

@@ -212,7 +212,11 @@ function Answers(props: StoreyRowProps) {
       >
         {drift}
       </div>
-      <div className={`answer ratio ${past} ${quiet}`} style={{ gridColumn: 'ratio' }} aria-hidden="true">
+      <div
+        className={`answer ratio ${past} ${ratio === 'none' ? 'none' : ''}`}
+        style={{ gridColumn: 'ratio' }}
+        aria-hidden="true"
+      >
         {ratio}
       </div>
       {ductility !== null && (

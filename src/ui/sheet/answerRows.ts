@@ -1,3 +1,4 @@
+import { governingRow } from '../../core/checks/governingRow.ts';
 import { residualRatios } from '../../core/checks/residualRatio.ts';
 import { type Measure, statisticOf } from '../../core/checks/statistic.ts';
 import {
@@ -96,7 +97,7 @@ export function answerRowsOf(answers: Answers, system: System): AnswerRows {
     over: Array.from({ length: storeys }, (_, storey) =>
       storey === 0 && isolator !== null ? isolator.over : (ratio?.[storey] ?? 0) > 1,
     ),
-    governing: envelope.governingStorey,
+    governing: governingRow(envelope),
     drift: shown(compared, 'percent'),
     limit: toDisplay(limit, 'percent', system),
     motions: motionDrifts(runs, envelope.factor, system),

@@ -28,7 +28,7 @@ function lawValue(law: LawRow, key: 'strength' | 'hardening'): Typed {
 export function fullText(row: StoreyRow, column: InputColumn, system: System): string {
   if (column === 'law') return row.law.kind;
   const value = cellValue(row, column);
-  // Hardening is a figure or two: 3, not 3.00.
+  // As the line above and the edit show it.
   if (column === 'hardening' && typeof value === 'number') return printTyped(value, 'percent', system);
   return typedText(value, COLUMN_QUANTITIES[column], system);
 }

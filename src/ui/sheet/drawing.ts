@@ -35,10 +35,22 @@ export function bearingPath(xFoot: number, yFoot: number, xHead: number, yHead: 
   );
 }
 
-/** Where the marks of a storey that yields stand on one of its columns, foot and head: as far inside the storey as its row allows. */
-export function markPlaces(yFoot: number, yHead: number): { readonly foot: number; readonly head: number } {
+/** Where a storey's marks stand on a column: away from its rest across, and down the sheet, foot and head [px]. */
+export type Ends = readonly (readonly [x: number, y: number])[];
+
+/** At both ends of a column, as far inside the storey as its row allows. */
+export function columnEnds(xFoot: number, xHead: number, yFoot: number, yHead: number): Ends {
   const inset = Math.min(6, (yFoot - yHead) / 5);
-  return { foot: yFoot - inset, head: yHead + inset };
+  return [
+    [xFoot, yFoot - inset],
+    [xHead, yHead + inset],
+  ];
+}
+
+/** In the middle of a bearing. */
+export function bearingMiddle(xFoot: number, xHead: number, yFoot: number, yHead: number): Ends {
+  const middle = [(xFoot + xHead) / 2, (yFoot + yHead) / 2] as const;
+  return [middle, middle];
 }
 
 /** Upright ticks of one row as one path. */

@@ -5,14 +5,14 @@ export type LawKind = LawRow['kind'];
 /** The laws, each in a few plain words. */
 export const LAWS: readonly { readonly kind: LawKind; readonly name: string; readonly words: string }[] = [
   { kind: 'elastic', name: 'Elastic', words: 'never yields' },
-  { kind: 'bilinear', name: 'Bilinear', words: 'yields at once, unloads as stiff as at first: steel, friction' },
+  { kind: 'bilinear', name: 'Bilinear', words: 'unloads as stiff as it began; steel, friction' },
   {
     kind: 'peak-oriented',
     name: 'Peak-oriented',
-    words: 'reloads towards its largest drift so far: reinforced concrete',
+    words: 'aims back at its largest drift; concrete',
   },
   { kind: 'bouc-wen', name: 'Bouc-Wen', words: 'yields by and by, along a round curve' },
-  { kind: 'flag', name: 'Flag', words: 'yields, and comes back to where it stood: rocking, post-tensioned' },
+  { kind: 'flag', name: 'Flag', words: 'yields and comes back; post-tensioned' },
 ];
 
 /** The law that a text names, however it is written: "Peak oriented", "boucwen"; null: none. */

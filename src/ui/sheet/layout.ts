@@ -19,6 +19,8 @@ export interface SheetLayout {
   readonly acceleration: Span | null;
   /** Whether the name of a law stands beside its glyph. */
   readonly lawNames: boolean;
+  /** The names of the storeys have little room. */
+  readonly tight: boolean;
   /** Signs a column has room for. */
   readonly signs: Readonly<Partial<Record<InputColumn, number>>>;
   /** Tracks of a row as a CSS grid with named lines. */
@@ -89,7 +91,7 @@ const NARROW: Sizes = {
 };
 
 /** Ductility and residual drift take their room from the plots beside them; the drift keeps what is left. */
-const YIELDING = { ductility: 44, residual: 46, gap: 18, shear: 70, acceleration: 52 };
+const YIELDING = { ductility: 56, residual: 44, gap: 16, shear: 66, acceleration: 50 };
 const LEAST_DRIFT = 140;
 const LEAST_FRAME = 150;
 
@@ -100,14 +102,14 @@ const COLUMNS: Readonly<Record<InputColumn, readonly [least: number, usual: numb
   mass: [52, 64],
   stiffness: [56, 72],
   law: [34, 112],
-  strength: [54, 68],
-  hardening: [46, 62],
+  strength: [58, 68],
+  hardening: [58, 62],
   gravity: [58, 72],
   coefficient: [58, 72],
   exponent: [46, 56],
 };
 /** The name of a law is cut off below. */
-const NAMED_LAW = 104;
+const NAMED_LAW = 112;
 /** Room beside the figures of a cell, and the width of a figure [px]. */
 const CELL_EDGE = 9;
 const FIGURE = 7.4;
@@ -255,6 +257,7 @@ export function layoutOf(
     drift,
     shear: narrow ? null : { x: shearX, width: sizes.shear },
     acceleration: narrow ? null : { x: accelerationX, width: sizes.acceleration },
+    tight: (widths[0] ?? 0) < 120,
     lawNames: (widths[columns.indexOf('law')] ?? 0) >= NAMED_LAW,
     signs: Object.fromEntries(columns.map((key, i) => [key, Math.floor((widths[i] - CELL_EDGE) / FIGURE)])),
     tracks,

@@ -2,7 +2,15 @@ import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { axisFor, linesOf } from '../../../src/ui/sheet/axis.ts';
 import { inputColumns } from '../../../src/ui/sheet/columns.ts';
-import { columnPath, columnWidths, swayFactor, ticksPath } from '../../../src/ui/sheet/drawing.ts';
+import {
+  bearingMiddle,
+  bearingPath,
+  columnEnds,
+  columnPath,
+  columnWidths,
+  swayFactor,
+  ticksPath,
+} from '../../../src/ui/sheet/drawing.ts';
 import { layoutOf, ROOMY_FROM, WIDE_FROM } from '../../../src/ui/sheet/layout.ts';
 import { rowsOf } from '../../../src/ui/sheet/rows.ts';
 
@@ -28,6 +36,13 @@ describe('rows to scale', () => {
     expect(Math.min(...rows.heights)).toBe(20);
     expect(rows.toScale).toBe(false);
     expect(rows.total).toBe(1200);
+  });
+
+  it('a row of bearings is high enough to be drawn, and does not squeeze the others', () => {
+    const rows = rowsOf([0.5, 3.6, 3.6], 390, true);
+    expect(rows.heights[0]).toBe(36);
+    expect(rows.heights[1]).toBe(50);
+    expect(rows.toScale).toBe(false);
   });
 
   it('rows add up, none is under 20 px, whatever is typed', () => {
@@ -117,6 +132,19 @@ describe('axes', () => {
 describe('drawing', () => {
   it('a column leaves both floors upright', () => {
     expect(columnPath(128, 390, 114.1, 330)).toBe('M128 390C128 367 114.1 353 114.1 330');
+  });
+
+  it('a bearing shears with the floor it carries; its mark stands in its middle', () => {
+    expect(bearingPath(100, 400, 130, 360)).toMatch(/^M89 387H111M119 373H141/);
+    expect(bearingMiddle(0, 30, 400, 360)).toEqual([
+      [15, 380],
+      [15, 380],
+    ]);
+    expect(columnEnds(0, 30, 400, 360)).toEqual([
+      [0, 394],
+      [30, 366],
+    ]);
+    expect(columnEnds(0, 0, 400, 380)[0]?.[1]).toBe(396);
   });
 
   it('the motions of a row are one path', () => {

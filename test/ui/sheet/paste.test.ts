@@ -88,4 +88,72 @@ describe('a pasted block', () => {
     const project = applied(named, plan(named, [['5']], 4));
     expect(project.frame.storeys.slice(0, 4)).toEqual(named.frame.storeys.slice(0, 4));
   });
+
+  describe('with laws', () => {
+    const laws = (project: Project) => project.frame.storeys.map(({ law }) => law);
+
+    it('takes names, strengths and hardening beside one another', () => {
+      const block = [
+        ['Bouc-Wen', '2 900', '3'],
+        ['elastic', '', ''],
+        ['peak oriented', '5 800', '0'],
+        ['', 'none', 'none'],
+      ];
+      const project = applied(four, plan(four, block, 3, 'law'));
+      expect(laws(project)).toEqual([
+        { kind: 'elastic' },
+        { kind: 'peak-oriented', strength: 5.8e6, hardening: 0 },
+        { kind: 'elastic' },
+        { kind: 'bouc-wen', strength: 2.9e6, hardening: 0.03, exponent: 2, beta: 0.5, gamma: 0.5 },
+      ]);
+    });
+
+    it('a strength beside no law makes an elastic storey bilinear', () => {
+      expect(laws(applied(four, plan(four, [['9030', '5']], 1, 'strength')))[1]).toEqual({
+        kind: 'bilinear',
+        strength: 9.03e6,
+        hardening: 0.05,
+      });
+    });
+
+    it('refuses a name that is no law, a strength beside elastic, a hardening beside nothing, a range passed', () => {
+      const places = (block: string[][], column: string) => {
+        const pasted = plan(four, block, 3, column);
+        return pasted.kind === 'refused' ? pasted.faults.map(({ place }) => place) : pasted.kind;
+      };
+      expect(places([['plastic']], 'law')).toEqual(['Row 1, law']);
+      expect(
+        places(
+          [
+            ['flag', '100'],
+            ['elastic', '100'],
+          ],
+          'law',
+        ),
+      ).toEqual(['Row 2, strength']);
+      expect(places([['3']], 'hardening')).toEqual(['Row 1, hardening']);
+      expect(places([['0', '3']], 'strength')).toEqual(['Row 1, strength']);
+      expect(places([['100', '100']], 'strength')).toEqual(['Row 1, hardening']);
+    });
+
+    it('a damper is its force and its exponent; without the force there is none', () => {
+      const wide = inputColumns({ hardening: true, gravity: true, damper: true });
+      const damped = (block: string[][], column: string) => planPaste(four, block, 0, column, wide, 'si', {});
+      expect(applied(four, damped([['500', '0.5']], 'coefficient')).frame.storeys[0]?.damper).toEqual({
+        coefficient: 5e5,
+        exponent: 0.5,
+      });
+      expect(damped([['0.5']], 'exponent')).toMatchObject({
+        kind: 'refused',
+        faults: [{ place: 'Row 1, damper exponent' }],
+      });
+      expect(damped([['500', '3']], 'coefficient').kind).toBe('refused');
+    });
+
+    it('a floor may carry no gravity load', () => {
+      const wide = inputColumns({ hardening: true, gravity: true, damper: false });
+      const pasted = planPaste(four, [['0']], 2, 'gravity', wide, 'si', {});
+      expect(applied(four, pasted).frame.storeys[2]?.gravity).toBe(0);
+    });
+  });
 });
