@@ -58,7 +58,7 @@ export function trial(w: Float64Array, at: number): void {
     slope = (w[at + STRENGTH] + h * (peak - w[at + YIELD_DRIFT])) / (peak - origin);
     branch = slope * (x - origin);
   }
-  const inside = from > 0 && way * elastic < branch;
+  const inside = way * elastic < branch;
   w[at + TRIAL_FORCE] = inside ? elastic : way * branch;
   w[at + TANGENT] = inside ? k : slope;
 }
