@@ -21,7 +21,8 @@ export function nonlinearWorkspace(problem: Problem): Workspace {
   const { STRIDE } = FIELD;
   const w = new Float64Array(n * STRIDE);
   const wholeMass = mass.reduce((sum, m) => sum + m, 0);
-  const strongest = ground.reduce((most, ag) => Math.max(most, Math.abs(ag)), 0);
+  let strongest = 0;
+  for (const ag of ground) if (Math.abs(ag) > strongest) strongest = Math.abs(ag);
   const { damping } = prepared;
   prepared.frame.storeys.forEach((storey, i) => {
     const at = i * STRIDE;
@@ -41,6 +42,8 @@ export function nonlinearWorkspace(problem: Problem): Workspace {
     w[at + FIELD.DAMPER] = storey.damper?.coefficient ?? 0;
     w[at + FIELD.EXPONENT] = storey.damper?.exponent ?? 1;
     w[at + FIELD.STICK] = (STICK * wholeMass) / step;
+    // At rest no velocity has been reached yet: the scale is what one step can bring, or nothing would count as met.
+    w[at + FIELD.PEAK_RATE] = step * strongest;
     freshDamperLine(w, at);
     if (damping.kind === 'full') return;
     w[at + FIELD.STOREY_DASHPOT] = damping.storey[i];
