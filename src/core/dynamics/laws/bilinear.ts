@@ -11,7 +11,7 @@ const { K, K_YIELD, STRENGTH, LAW_A, DRIFT, FORCE, WORK, TRIAL_DRIFT, TRIAL_FORC
  */
 export const bilinear: LawBehaviour = { begin, trial, commit, recoverable };
 
-export function begin(w: Float64Array, at: number): void {
+function begin(w: Float64Array, at: number): void {
   w[at + LAW_A] = w[at + STRENGTH] * (1 - w[at + K_YIELD] / w[at + K]);
 }
 
@@ -45,7 +45,10 @@ export function commit(w: Float64Array, at: number): void {
   w[at + FORCE] = f1;
 }
 
-/** f^2 / (2 k). Source: the project-file page. */
-export function recoverable(w: Float64Array, at: number, out: number): void {
+/**
+ * f^2 / (2 k). Source: the project-file page. With hardening it leaves out what the lines' offset holds back, h k / 2 (x - f/k)^2 / (1 - h),
+ * given off as the storey goes back along a line, so that work less this energy may fall there.
+ */
+function recoverable(w: Float64Array, at: number, out: number): void {
   w[out] = (0.5 * w[at + FORCE] * w[at + FORCE]) / w[at + K];
 }

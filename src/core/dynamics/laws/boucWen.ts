@@ -36,7 +36,7 @@ const MIDDLE = 8 / 18;
  */
 export const boucWen: LawBehaviour = { begin, trial, commit, recoverable };
 
-export function begin(w: Float64Array, at: number): void {
+function begin(w: Float64Array, at: number): void {
   const n = w[at + EXPONENT];
   w[at + WHOLE] = Number.isInteger(n) && n <= 8 ? n : 0;
   w[at + Z] = 0;
@@ -207,6 +207,6 @@ export function commit(w: Float64Array, at: number): void {
 }
 
 /** f^2 / (2 k): unloading is straight at the initial stiffness for beta = gamma, and at least as steep otherwise. */
-export function recoverable(w: Float64Array, at: number, out: number): void {
+function recoverable(w: Float64Array, at: number, out: number): void {
   w[out] = (0.5 * w[at + FORCE] * w[at + FORCE]) / w[at + K];
 }

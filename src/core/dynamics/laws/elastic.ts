@@ -18,6 +18,6 @@ export function commit(w: Float64Array, at: number): void {
   w[at + FORCE] = w[at + TRIAL_FORCE];
 }
 
-export function recoverable(w: Float64Array, at: number, out: number): void {
+function recoverable(w: Float64Array, at: number, out: number): void {
   w[out] = 0.5 * w[at + FORCE] * w[at + DRIFT];
 }

@@ -19,7 +19,7 @@ const { LAW_A: YIELD_DRIFT, LAW_B: FORK, LAW_C: UPPER, LAW_D: LOWER } = FIELD;
  */
 export const flag: LawBehaviour = { begin, trial, commit, recoverable };
 
-export function begin(w: Float64Array, at: number): void {
+function begin(w: Float64Array, at: number): void {
   const strength = w[at + STRENGTH];
   const yieldDrift = strength / w[at + K];
   const rest = 1 - w[at + K_YIELD] / w[at + K];
@@ -87,7 +87,7 @@ export function commit(w: Float64Array, at: number): void {
 }
 
 /** The area under the unloading path: at the initial stiffness to the lower line, along it to the fork, elastic to zero. */
-export function recoverable(w: Float64Array, at: number, out: number): void {
+function recoverable(w: Float64Array, at: number, out: number): void {
   const d = Math.abs(w[at + DRIFT]);
   const f = Math.abs(w[at + FORCE]);
   const k = w[at + K];

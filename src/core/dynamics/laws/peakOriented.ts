@@ -26,7 +26,7 @@ const { LAW_P: YIELD_DRIFT, LAW_Q: REST } = FIELD;
  */
 export const peakOriented: LawBehaviour = { begin, trial, commit, recoverable };
 
-export function begin(w: Float64Array, at: number): void {
+function begin(w: Float64Array, at: number): void {
   const yieldDrift = w[at + STRENGTH] / w[at + K];
   w[at + YIELD_DRIFT] = yieldDrift;
   w[at + REST] = 1 - w[at + K_YIELD] / w[at + K];
@@ -110,7 +110,7 @@ export function commit(w: Float64Array, at: number): void {
 }
 
 /** f^2 / (2 k). Source: the project-file page. */
-export function recoverable(w: Float64Array, at: number, out: number): void {
+function recoverable(w: Float64Array, at: number, out: number): void {
   w[out] = (0.5 * w[at + FORCE] * w[at + FORCE]) / w[at + K];
 }
 
