@@ -10,8 +10,8 @@ import { yieldTo } from './yielding.ts';
 
 /** A law may be off its line by so much of the largest base shear that the motion can ask for, mass x ground acceleration. Own choice: well under what is printed. */
 const FORCE_TOLERANCE = 1e-12;
-/** Steepest line of a damper, as a multiple of mass / step. Own choice: stands for stick, and leaves ten figures. */
-const STICK = 1e5;
+/** Steepest line of a damper, as a multiple of mass / step. Own choice: stands for stick, and keeps the step's matrix well conditioned. */
+const STICK = 1e4;
 
 /** @throws RangeError where the step's matrix is not positive definite (a validated case never is) */
 export function nonlinearWorkspace(problem: Problem): Workspace {

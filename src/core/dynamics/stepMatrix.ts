@@ -9,9 +9,12 @@ const { AM, AF, BETA, GAMMA, H } = NOW;
 
 /** Rank-one updates after which the inverse is made afresh, so that rounding does not gather. Own choice. */
 const FRESH_AFTER = 200;
+/** An update that leaves less of the determinant than this cancels figures (a damper that comes loose): made afresh instead. Own choice. */
+const CANCELS = 1e-2;
 
 /** The step's matrix from row `from` up, from the lines as they stand; false where it is not positive definite. */
-export function refactor({ n, w, now, full }: NonlinearWork, from: number): boolean {
+export function refactor(work: NonlinearWork, from: number): boolean {
+  const { n, w, now, full } = work;
   const wf = 1 - now[AF];
   const b0 = wf * now[BETA] * now[H] * now[H];
   const g0 = wf * now[GAMMA] * now[H];
@@ -20,7 +23,7 @@ export function refactor({ n, w, now, full }: NonlinearWork, from: number): bool
     gatherLine(w, p);
     w[p + COUPLING] = b0 * w[p + LINE_DRIFT] + g0 * w[p + LINE_RATE];
   }
-  if (full !== null) return invertInto(full, w, n, onMass, g0);
+  if (full !== null) return invertInto(work, full);
   const top = (n - 1) * STRIDE;
   for (let p = from * STRIDE; p <= top; p += STRIDE) {
     const here = w[p + COUPLING];
@@ -57,22 +60,15 @@ function gatherLine(w: Float64Array, p: number): void {
   w[p + LINE_RATE] = w[p + STOREY_DASHPOT] + w[p + DAMPER_SLOPE];
 }
 
-/** The matrix again after the lines changed from storey `lowest` up. */
+/** The matrix again after the lines changed from storey `lowest` up; false where it is no longer positive definite. */
 export function renew(work: NonlinearWork, lowest: number): boolean {
-  const { full, now, w, n } = work;
-  if (full === null) return refactor(work, lowest > 0 ? lowest - 1 : 0);
-  const wf = 1 - now[AF];
-  const b0 = wf * now[BETA] * now[H] * now[H];
-  const g0 = wf * now[GAMMA] * now[H];
-  return shiftInverse(full, w, n, b0, g0, 1 - now[AM]);
+  return work.full === null ? refactor(work, lowest > 0 ? lowest - 1 : 0) : shiftInverse(work, work.full);
 }
 
-/**
- * The inverse of the step's matrix where damping is full: onMass M + onDamping C + the storeys' couplings, afresh.
- * @returns false where it is not positive definite
- */
-function invertInto(full: FullWork, w: Float64Array, n: number, onMass: number, onDamping: number): boolean {
-  const { inverse, damping, updates } = full;
+/** The inverse of the step's matrix where damping is full, afresh, from the couplings as they stand. */
+function invertInto({ n, w, now }: NonlinearWork, { inverse, damping, updates }: FullWork): boolean {
+  const onMass = 1 - now[AM];
+  const onDamping = (1 - now[AF]) * now[GAMMA] * now[H];
   for (let i = 0; i < n * n; i++) inverse[i] = onDamping * damping[i];
   for (let i = 0, p = 0; i < n; i++, p += STRIDE) {
     const coupling = w[p + COUPLING];
@@ -89,23 +85,18 @@ function invertInto(full: FullWork, w: Float64Array, n: number, onMass: number, 
 /**
  * Brings the inverse up to the lines as they stand: a storey whose coupling changed by e is e b b^T more in the matrix, b = 1 at
  * its floor and -1 at the one below. Source: Sherman and Morrison (1950), Ann. Math. Stat. 21, 124-127 (from memory).
- *
- * @param onStiffness, onDamping, onMass  factors on tangents, dashpots and masses in the step's matrix
  * @returns false where the matrix is no longer positive definite
  */
-function shiftInverse(
-  full: FullWork,
-  w: Float64Array,
-  n: number,
-  onStiffness: number,
-  onDamping: number,
-  onMass: number,
-): boolean {
+function shiftInverse(work: NonlinearWork, full: FullWork): boolean {
+  const { n, w, now } = work;
   const { inverse, column, updates } = full;
+  const wf = 1 - now[AF];
+  const b0 = wf * now[BETA] * now[H] * now[H];
+  const g0 = wf * now[GAMMA] * now[H];
   let afresh = false;
   for (let i = 0, p = 0; i < n; i++, p += STRIDE) {
     gatherLine(w, p);
-    const coupling = onStiffness * w[p + LINE_DRIFT] + onDamping * w[p + LINE_RATE];
+    const coupling = b0 * w[p + LINE_DRIFT] + g0 * w[p + LINE_RATE];
     const more = coupling - w[p + COUPLING];
     if (more === 0) continue;
     w[p + COUPLING] = coupling;
@@ -116,11 +107,15 @@ function shiftInverse(
     for (let c = 0; c < n; c++) column[c] = inverse[row + c] - (i > 0 ? inverse[row - n + c] : 0);
     const share = 1 + more * (column[i] - (i > 0 ? column[i - 1] : 0));
     if (!(share > 0)) return false;
+    if (share < CANCELS) {
+      afresh = true;
+      continue;
+    }
     const factor = more / share;
     for (let r = 0, at = 0; r < n; r++) {
       const scaled = factor * column[r];
       for (let c = 0; c < n; c++, at++) inverse[at] -= scaled * column[c];
     }
   }
-  return afresh ? invertInto(full, w, n, onMass, onDamping) : true;
+  return afresh ? invertInto(work, full) : true;
 }

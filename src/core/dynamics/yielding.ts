@@ -94,7 +94,7 @@ export function yieldTo(work: NonlinearWork, ground: Float64Array, settling: num
 function solve(work: NonlinearWork): number {
   for (let count = 1; count <= MOST; count++) {
     loads(work);
-    if (work.full !== null) productInto(work, work.full);
+    if (work.full !== null) solveFull(work, work.full);
     const own = substitute(work);
     const changed = work.smooth ? ask(work, own) : own;
     if (changed === work.n) return count;
@@ -142,18 +142,41 @@ function loads({ n, w, now }: NonlinearWork): void {
   w[p + RHS] = r;
 }
 
-/** For a full C: its carried part taken off the right-hand side (the multipliers are zero), and NEXT = inverse x RHS. */
-function productInto({ n, w, now }: NonlinearWork, { inverse, side }: FullWork): void {
+/** For a full C: its part of the step before taken off the right-hand side (the multipliers are zero), and NEXT = inverse x RHS. */
+function solveFull(work: NonlinearWork, full: FullWork): void {
+  const { n, w, now } = work;
+  const { side } = full;
   const ahead = (1 - now[AF]) * (1 - now[GAMMA]) * now[H];
   for (let i = 0, p = 0; i < n; i++, p += STRIDE) {
     const r = w[p + RHS] - w[p + FULL_FORCE] - ahead * w[p + DAMPING_RATE];
     w[p + RHS] = r;
+    w[p + NEXT] = 0;
     side[i] = r;
   }
-  for (let i = 0, p = 0, row = 0; i < n; i++, p += STRIDE, row += n) {
+  addProduct(work, full);
+  if (!work.smooth) return;
+  // Lines as steep as a stuck damper's cancel in the right-hand side; one step of iterative refinement gives the figures back.
+  // Source: Golub & Van Loan, Matrix Computations, section 3.5 (section number from memory).
+  const onMass = 1 - now[AM];
+  const onDamping = (1 - now[AF]) * now[GAMMA] * now[H];
+  for (let i = 0, p = 0, at = 0, pull = 0; i < n; i++, p += STRIDE) {
+    const above = i < n - 1 ? w[p + STRIDE + COUPLING] * (w[p + STRIDE + NEXT] - w[p + NEXT]) : 0;
+    if (i === 0) pull = w[p + COUPLING] * w[p + NEXT];
+    let damped = 0;
+    for (let c = 0, q = 0; c < n; c++, at++, q += STRIDE) damped += full.damping[at] * w[q + NEXT];
+    const dashpot = w[p + FLOOR_DASHPOT] * w[p + NEXT];
+    side[i] = w[p + RHS] - onMass * w[p + MASS] * w[p + NEXT] - onDamping * (damped + dashpot) - pull + above;
+    pull = above;
+  }
+  addProduct(work, full);
+}
+
+/** NEXT += inverse x side. */
+function addProduct({ n, w }: NonlinearWork, { inverse, side }: FullWork): void {
+  for (let i = 0, p = 0, at = 0; i < n; i++, p += STRIDE) {
     let sum = 0;
-    for (let c = 0; c < n; c++) sum += inverse[row + c] * side[c];
-    w[p + NEXT] = sum;
+    for (let c = 0; c < n; c++, at++) sum += inverse[at] * side[c];
+    w[p + NEXT] += sum;
   }
 }
 
@@ -232,15 +255,10 @@ function isOff(w: Float64Array, p: number): boolean {
 /** Takes the step: state, laws, energies, peaks. */
 function commit(work: NonlinearWork, j: number, settles: boolean): void {
   const { n, w, now, full, sums } = work;
-  const g0 = now[GAMMA] * now[H];
-  const g1 = (1 - now[GAMMA]) * now[H];
-  const wf = 1 - now[AF];
-  const onMass = 1 - now[AM];
-  const perDamping = 1 / (wf * g0);
   if (work.smooth) take(work);
+  if (full !== null) dampFully(work, full);
   let above = 0;
   let dashpotAbove = 0;
-  let pullAbove = 0;
   let overturning = 0;
   let push = 0;
   let dampingStep = 0;
@@ -267,15 +285,7 @@ function commit(work: NonlinearWork, j: number, settles: boolean): void {
     const m = w[p + MASS];
     let fd = w[p + FLOOR_DASHPOT] * v + dashpot - dashpotAbove;
     dashpotAbove = dashpot;
-    if (full !== null) {
-      const pull = w[p + COUPLING] * (a - (i > 0 ? w[p - STRIDE + NEXT] : 0));
-      const ca = perDamping * (w[p + RHS] - onMass * m * a - pull + pullAbove);
-      const carried = w[p + FULL_FORCE] + g1 * w[p + DAMPING_RATE] + g0 * ca;
-      w[p + FULL_FORCE] = carried;
-      w[p + DAMPING_RATE] = ca;
-      fd += carried;
-      pullAbove = pull;
-    }
+    if (full !== null) fd += w[p + FULL_FORCE];
     const total = (above - restoring - fd) * w[p + PER_MASS];
     const du = u - w[p + U];
     dampingStep += (fd + w[p + DAMPING_FORCE]) * du;
@@ -336,6 +346,27 @@ function commit(work: NonlinearWork, j: number, settles: boolean): void {
   if (stopped || !(gap < Number.POSITIVE_INFINITY)) sums[STOPPED] = stopped ? COLLAPSED : DIVERGED;
   // Only a tangent that turns negative can fail here; the next solve then does not converge and says so.
   else if (dirty >= 0) refactor(work, dirty > 0 ? dirty - 1 : 0);
+}
+
+/**
+ * C v and C a of the new step, where C is a full matrix, as products: from the solve's own equation they would take in what the
+ * updated inverse is off by, step after step.
+ */
+function dampFully({ n, w }: NonlinearWork, { damping, side, column }: FullWork): void {
+  for (let i = 0, p = 0; i < n; i++, p += STRIDE) {
+    side[i] = w[p + NEXT_V];
+    column[i] = w[p + NEXT];
+  }
+  for (let i = 0, p = 0, at = 0; i < n; i++, p += STRIDE) {
+    let force = 0;
+    let rate = 0;
+    for (let c = 0; c < n; c++, at++) {
+      force += damping[at] * side[c];
+      rate += damping[at] * column[c];
+    }
+    w[p + FULL_FORCE] = force;
+    w[p + DAMPING_RATE] = rate;
+  }
 }
 
 /** Moves the other laws and the dampers to their trials, and adds the work of the way there. */
