@@ -29,7 +29,7 @@ export function BenchTable({ bench: { rows, reference, motion }, modes, inUse, o
   const caption =
     reference === null
       ? `Schemes and steps under ${motion}`
-      : `Errors under ${motion} against ${methodWords(reference.method)} at 1/${reference.parts} of the interval; bold: under ${printQuantity(AIM, 'percent', 'si', 0)} %`;
+      : `Errors under ${motion} against ${methodWords(reference.method)} at 1/${reference.parts} of the interval; bold: under ${printQuantity(AIM, 'percent', 'si', 0)} %; time as measured once`;
   const onKeyDown = (event: KeyboardEvent) => {
     const way = event.key === 'ArrowDown' ? 1 : event.key === 'ArrowUp' ? -1 : 0;
     if (way === 0) return;
@@ -100,18 +100,17 @@ export function BenchTable({ bench: { rows, reference, motion }, modes, inUse, o
                 <Modal accuracy={row.first} />
                 <Modal accuracy={row.highest} />
                 <td className="use">
-                  {isInUse(row, inUse) ? (
-                    <span className="accent small">in use</span>
-                  ) : row.state === 'done' ? (
+                  {(row.state === 'done' || isInUse(row, inUse)) && (
                     <Button
                       kind="text"
                       size="low"
                       aria-label={`Use this: ${methodWords(row.method)}, step ${shortSeconds(row.step)} s`}
-                      onClick={() => takeRow(row)}
+                      aria-pressed={isInUse(row, inUse)}
+                      onClick={() => !isInUse(row, inUse) && takeRow(row)}
                     >
-                      Use this
+                      {isInUse(row, inUse) ? 'in use' : 'Use this'}
                     </Button>
-                  ) : null}
+                  )}
                 </td>
               </tr>
             )),
