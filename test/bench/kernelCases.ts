@@ -122,6 +122,24 @@ export function twinInput(problem: Problem, repeats: number): string {
   ].join('\n');
 }
 
+/** A yielding case as its C twin reads it: with our own iteration, or with full Newton. */
+export function yieldingInput(which: KernelCase, newton: boolean, repeats: number): string {
+  const { problem } = kernelProblem(which);
+  const { records } = workspace(problem);
+  const { prepared, method, step, steps, ground } = problem;
+  const { n } = prepared.arrays;
+  const column = (field: number) => Array.from({ length: n }, (_, i) => records[i * FIELD.STRIDE + field]).join(' ');
+  const { MASS, K, HEIGHT, FLOOR_DASHPOT, STOREY_DASHPOT, STRENGTH, K_YIELD, FORCE_TOLERANCE } = FIELD;
+  const { am, af, beta, gamma } = method;
+  const law = which.law?.kind === 'bouc-wen' ? 1 : 0;
+  const exponent = which.law?.kind === 'bouc-wen' ? which.law.exponent : 1;
+  return [
+    [law, newton ? 1 : 0, n, steps, repeats, step, am, af, beta, gamma, exponent, records[FORCE_TOLERANCE]].join(' '),
+    ...[MASS, K, HEIGHT, FLOOR_DASHPOT, STOREY_DASHPOT, STRENGTH, K_YIELD].map(column),
+    Array.from(ground).join(' '),
+  ].join('\n');
+}
+
 /** Times the march where it runs (Node or the browser): microseconds a run, median and least, and one answer to compare. */
 export function timeKernel(
   which: KernelCase,
@@ -137,8 +155,8 @@ export function timeKernel(
     sums.fill(0);
     work.advance(0, problem.steps);
   };
-  for (let i = 0; i < 60; i++) once();
-  const batch = 5;
+  for (let i = 0; i < 40; i++) once();
+  const batch = 3;
   const times: number[] = [];
   for (let i = 0; i < 41; i++) {
     const start = now();

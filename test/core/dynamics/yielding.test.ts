@@ -175,7 +175,8 @@ describe('[DYN-9] the march of yielding frames', () => {
       const frame = yielding(BILINEAR, { damper: { coefficient: 4e5, exponent } });
       const result = run(frame, quiet, 0.02, { scale: 2, tail: 2, stopDrift: 1 });
       expect(result.ending).toBeNull();
-      expect(result.marching.halvings).toBe(0);
+      // The ground grows a thousand million times within a step there.
+      expect(result.marching.halvings).toBeLessThan(3);
     }
   });
 
