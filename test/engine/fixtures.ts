@@ -16,6 +16,20 @@ export function frameOf(storeys: number, stiffness = 1.2e8): Frame {
   };
 }
 
+/** As above, each storey yields, the first has a damper. */
+export function yieldingFrameOf(storeys: number): Frame {
+  const frame = frameOf(storeys);
+  const law = { kind: 'bilinear', strength: 3e5, hardening: 0.05 } as const;
+  return {
+    ...frame,
+    storeys: frame.storeys.map((storey, i) => ({
+      ...storey,
+      law,
+      ...(i === 0 ? { damper: { coefficient: 4e5, exponent: 0.5 } } : {}),
+    })),
+  };
+}
+
 /** A decaying pair of sines: no randomness, no symmetry. */
 export function samplesOf(count: number, seed = 1): Float64Array {
   return Float64Array.from(

@@ -4,7 +4,7 @@ import { inlineEngine } from '../../src/engine/inline.ts';
 import { createPool } from '../../src/engine/pool.ts';
 import type { Endpoint, Engine, FromWorker, ToWorker } from '../../src/engine/protocol.ts';
 import { type Fake, fakeEnd, threadEnd } from './ends.ts';
-import { ANALYSIS, frameOf, requestOf, samplesOf } from './fixtures.ts';
+import { ANALYSIS, frameOf, requestOf, samplesOf, yieldingFrameOf } from './fixtures.ts';
 
 const engines: Engine[] = [];
 afterEach(() => {
@@ -39,17 +39,21 @@ const failure = (id: number, message: string): FromWorker => ({
 });
 
 describe('the same bits on every side', () => {
-  it('inline, message channel, thread and the door itself agree to the last bit', async () => {
+  it.each([
+    ['elastic', frameOf(3)],
+    ['yielding', yieldingFrameOf(3)],
+  ])('inline, message channel, thread and the door itself agree to the last bit: %s', async (kind, frame) => {
     const expected = runCase(
-      { frame: frameOf(3), analysis: ANALYSIS, motion: { interval: 0.01, scale: 1, acceleration: samplesOf(800) } },
+      { frame, analysis: ANALYSIS, motion: { interval: 0.01, scale: 1, acceleration: samplesOf(800) } },
       { histories: true },
     );
     expect(Math.max(...expected.storeys.peakDrift)).toBeGreaterThan(0);
+    expect(expected.histories?.nonlinear?.yielding.includes(1) ?? false).toBe(kind === 'yielding');
     const inline = inlineEngine();
     engines.push(inline);
     inline.putMotion('a', samplesOf(800));
     for (const engine of [inline, channels(2).engine, poolOf(1, threadEnd)]) {
-      const reply = await engine.run('q', requestOf('a', frameOf(3), true));
+      const reply = await engine.run('q', requestOf('a', frame, true));
       expect(reply).toEqual({ status: 'done', value: expected, took: expect.any(Number) });
     }
   });
