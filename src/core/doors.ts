@@ -6,7 +6,7 @@ import { problemOf } from './dynamics/problem.ts';
 import type { Run, RunCase, Want } from './dynamics/run.ts';
 import { type PreparedFrame, prepareFrame } from './frame/prepare.ts';
 
-export { type AutoRun, runAtAutoStep } from './dynamics/runAtAutoStep.ts';
+export { runAtAutoStep } from './dynamics/runAtAutoStep.ts';
 export { stepErrorOf } from './dynamics/stepError.ts';
 export { type PreparedFrame, prepareFrame } from './frame/prepare.ts';
 export { measuresOf } from './motion/measures.ts';

@@ -10,7 +10,7 @@ export interface Expected {
   learn(weight: number, took: number): void;
 }
 
-export function expectedTime(): Expected {
+function expectedTime(): Expected {
   let rate = FIRST_RATE;
   return {
     of: (weight) => weight * rate,

@@ -49,12 +49,14 @@ export function withHistories(request: RunRequest): RunRequest {
 function askOf({ frame, prepared, analysis }: Case, motion: Case['motions'][number], frameKey: string): Ask {
   const { name, samples, interval, scale, count } = motion;
   const { method, step, tail, stopDrift } = analysis;
-  const range = rangeOf();
+  const made = new Map<number, RunAsk>();
   return {
     motion: name,
     record: JSON.stringify([name, samples, interval]),
-    ...range,
+    ...rangeOf(),
     at(parts) {
+      const known = made.get(parts);
+      if (known) return known;
       const request: RunRequest = {
         frameKey,
         frame,
@@ -63,7 +65,9 @@ function askOf({ frame, prepared, analysis }: Case, motion: Case['motions'][numb
         want: { histories: false },
       };
       const key = JSON.stringify([frameKey, method, tail, stopDrift, samples, interval, scale, parts]);
-      return { key, request, weight: weightOf(request, count) };
+      const one = { key, request, weight: weightOf(request, count) };
+      made.set(parts, one);
+      return one;
     },
   };
 

@@ -9,7 +9,7 @@ export interface Drawn {
   readonly acceleration: Float64Array;
 }
 
-export const KINDS = ['elastic', 'bilinear', 'peak-oriented', 'bouc-wen', 'flag'] as const;
+const KINDS = ['elastic', 'bilinear', 'peak-oriented', 'bouc-wen', 'flag'] as const;
 
 /**
  * Frames of 1 to 4 storeys with first periods of 0.15 to 1.5 s, each law in turn, from elastic to a ductility of about 10; some with
