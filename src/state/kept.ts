@@ -1,6 +1,6 @@
 import { type Fault, faultLine, type Result } from '../core/fault.ts';
 import { migrated } from '../document/migrations.ts';
-import { PROJECT_FORMAT, PROJECT_VERSION, type Project } from '../document/project.ts';
+import { type LawRow, PROJECT_FORMAT, PROJECT_VERSION, type Project } from '../document/project.ts';
 import type { Draft } from './document.ts';
 
 /** The document as the browser's store holds it: a project on its way, with cells not typed or not readable, samples apart. */
@@ -67,7 +67,9 @@ function faultsOfShape(document: unknown): string[] {
     check(`frame.storeys[${i}].name`, typeof row?.name === 'string');
     for (const key of ['height', 'mass', 'stiffness']) check(`frame.storeys[${i}].${key}`, isTyped(row?.[key]));
     check(`frame.storeys[${i}].gravity`, row?.gravity === undefined || isTyped(row.gravity));
-    check(`frame.storeys[${i}].law`, objectOf(row?.law)?.kind === 'elastic');
+    check(`frame.storeys[${i}].law`, isLaw(objectOf(row?.law)));
+    check(`frame.storeys[${i}].damper`, row?.damper === undefined || holds(objectOf(row.damper), DAMPER));
+    check(`frame.storeys[${i}].role`, [undefined, 'storey', 'isolator'].includes(row?.role as string | undefined));
   }
   check('motions', Array.isArray(project?.motions));
   for (const [i, entry] of listOf(project?.motions).entries()) {
@@ -81,8 +83,28 @@ function faultsOfShape(document: unknown): string[] {
   check('analysis.step', isTyped(analysis?.step) || isTyped(objectOf(analysis?.step)?.parts));
   for (const key of ['tail', 'stopDrift']) check(`analysis.${key}`, isTyped(analysis?.[key]));
   for (const key of ['drift', 'factor']) check(`limits.${key}`, isTyped(limits?.[key]));
+  check('limits.isolator', limits?.isolator === undefined || isTyped(limits.isolator));
   check('limits.source', typeof limits?.source === 'string');
   return wrong;
+}
+
+/** Numbers of each law, and of a damper. */
+const LAWS: Readonly<Record<LawRow['kind'], readonly string[]>> = {
+  elastic: [],
+  bilinear: ['strength', 'hardening'],
+  'peak-oriented': ['strength', 'hardening'],
+  'bouc-wen': ['strength', 'hardening', 'exponent', 'beta', 'gamma'],
+  flag: ['strength', 'hardening', 'ratio'],
+};
+const DAMPER: readonly string[] = ['coefficient', 'exponent'];
+
+function isLaw(law: Record<string, unknown> | null): boolean {
+  const kind = law?.kind;
+  return typeof kind === 'string' && Object.hasOwn(LAWS, kind) && holds(law, LAWS[kind as LawRow['kind']]);
+}
+
+function holds(part: Record<string, unknown> | null, numbers: readonly string[]): boolean {
+  return part !== null && numbers.every((key) => isTyped(part[key]));
 }
 
 function isDamping(damping: Record<string, unknown> | null): boolean {
