@@ -26,7 +26,8 @@ export function DampingPicture() {
   return (
     <figure className="damping-picture">
       <figcaption className="quiet small">
-        Ratio in % of critical against period in s; dots: modes of this frame; dotted: asked for; shaded: half to twice
+        Ratio in % of critical against period in s; dots: modes of this frame; dotted: asked for
+        {picture?.damping.kind !== 'modal' && '; shaded: half to twice'}
       </figcaption>
       <div ref={place} className="damping-plot">
         {spec !== null && picture !== null && <Plot spec={spec} label={dampingSentence(picture)} />}

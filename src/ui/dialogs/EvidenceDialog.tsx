@@ -38,7 +38,7 @@ function EvidenceOf({ answers, onClose }: { readonly answers: Answers; readonly 
     <Dialog
       title={TITLE}
       onClose={onClose}
-      width={1240}
+      width={answers.case.analysis.step === 'auto' ? 1360 : 1080}
       foot={
         <>
           <Button onClick={() => setSession({ dialog: 'analysis' })}>Method and step</Button>

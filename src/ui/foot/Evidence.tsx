@@ -41,7 +41,7 @@ export function Evidence() {
           <Worded words={methodWords(analysis.method)} from="," />
         </Choice>
         <Choice>
-          step {shortNumber(answers.step.size)} s{stepOrigin(answers)}
+          step {stepSizes(answers)} s{stepOrigin(answers)}
         </Choice>
         {stepErrors !== null && <StepError errors={Object.values(stepErrors)} />}
         <Halved runs={answers.runs} />
@@ -110,6 +110,13 @@ function StepError({ errors }: { readonly errors: readonly number[] }) {
       <span className="long">, aim below 1 %</span>
     </li>
   );
+}
+
+/** "0.005", or the finest and the coarsest of the suite. */
+function stepSizes({ runs }: Answers): string {
+  const sizes = runs.map(({ run }) => run.step);
+  const [least, most] = [shortNumber(Math.min(...sizes)), shortNumber(Math.max(...sizes))];
+  return least === most ? most : `${least} to ${most}`;
 }
 
 function stepOrigin({ case: from, evidence }: Answers): string {

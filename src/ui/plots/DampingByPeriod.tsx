@@ -54,7 +54,7 @@ export function DampingByPeriod({ layout, tokens, old }: DampingByPeriodProps) {
               asked for
             </span>
           )}
-          {kind !== 'none' && (
+          {kind !== 'none' && kind !== 'modal' && (
             <span>
               <i className="key-shade" />
               half to twice

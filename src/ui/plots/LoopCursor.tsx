@@ -1,6 +1,6 @@
 import { useLayoutEffect, useMemo, useRef } from 'react';
 import { followTime } from '../strip/followTime.ts';
-import { valueAt } from '../strip/panelContent.ts';
+import { endOf, valueAt } from '../strip/panelContent.ts';
 import type { Loop } from './loop.ts';
 import { type LoopAxes, reachOf } from './loopAxes.ts';
 import { MARGIN } from './template.ts';
@@ -15,6 +15,7 @@ export function LoopCursor({ loop, axes }: { readonly loop: Loop; readonly axes:
   const dot = useRef<SVGCircleElement>(null);
   const words = useRef<SVGTextElement>(null);
   const path = useMemo(() => trailOf(loop, axes), [loop, axes]);
+  const end = endOf({ values: loop.drift, interval: loop.interval });
   useLayoutEffect(
     () =>
       followTime((time) => {
@@ -33,9 +34,9 @@ export function LoopCursor({ loop, axes }: { readonly loop: Loop; readonly axes:
         text.setAttribute('y', (left ? Math.max(6, y - 8) : below).toFixed(1));
         text.setAttribute('text-anchor', left ? 'end' : 'start');
         const decimals = axes.force.decimals === 0 ? 0 : 1;
-        text.textContent = `${axes.drift.print(drift, axes.drift.decimals)} ${axes.drift.unit}, ${axes.force.print(value, decimals)} ${axes.force.unit}`;
+        text.textContent = `${axes.drift.print(drift, axes.drift.decimals)} ${axes.drift.unit}, ${axes.force.print(value, decimals)} ${axes.force.unit}${time > end + loop.interval ? ', the end' : ''}`;
       }),
-    [loop, axes, path],
+    [loop, axes, path, end],
   );
   const { firstYield } = loop;
   return (

@@ -27,6 +27,9 @@ const PERIODS = [0.005, 0.01, 0.02, 0.05, 0.1, 0.2, 0.5, 1, 2, 4, 8, 16];
 /** Higher than so many times the largest ratio that is wanted or comes out in the named modes, the axis is cut. */
 const TALLEST = 1.6;
 
+/** Under so much of the axis there is no room for a name below a mark. */
+const LOW = 0.2;
+
 /** Ratio of critical damping against period: the curve of the description, this frame's modes on it, the ratios that were asked for. */
 export function dampingPlot({ damping, modes, ratios }: DampingPicture, size: Size, tokens: Tokens): PlotSpec {
   const percent = axisUnitOf('percent', 'si', 0);
@@ -85,12 +88,12 @@ export function dampingPlot({ damping, modes, ratios }: DampingPicture, size: Si
         zeroline: false,
       },
       yaxis: axis(tokens, [0, end], upward, tickWords(percent, upward)),
-      shapes: band(wanted, percent.onAxis, tokens),
+      shapes: damping.kind === 'modal' ? [] : band(wanted, percent.onAxis, tokens),
       annotations: modes.slice(0, NAMED).map(({ period }, i) => ({
         x: Math.log10(period),
         y: marks[i],
-        // Clear of the line of the ratio that was asked for.
-        ...(marks[i] < percent.onAxis(wanted[0] ?? 0)
+        // Clear of the line of the ratio that was asked for, and of the numbers of the axis.
+        ...(marks[i] < percent.onAxis(wanted[0] ?? 0) && marks[i] > LOW * end
           ? { yanchor: 'top' as const, yshift: -4 }
           : { yanchor: 'bottom' as const, yshift: 4 }),
         text: `T<sub>${i + 1}</sub>`,
@@ -101,7 +104,7 @@ export function dampingPlot({ damping, modes, ratios }: DampingPicture, size: Si
   };
 }
 
-/** From half of the least ratio asked for to twice the largest: outside of it a mode that matters is cautioned. */
+/** From half of the least ratio asked for to twice the largest: outside of it a mode that matters is cautioned (modal damping gives each mode its own). */
 function band(wanted: readonly number[], onAxis: (ratio: number) => number, tokens: Tokens): Partial<Shape>[] {
   if (wanted.length === 0) return [];
   return [

@@ -15,7 +15,7 @@ import { useSize } from '../plots/useSize.ts';
 import { type Band, stackGeometry } from './geometry.ts';
 import { MotionStrip } from './MotionStrip.tsx';
 import { Playing } from './Playing.tsx';
-import { contentOf, valueAt } from './panelContent.ts';
+import { contentOf, endOf, valueAt } from './panelContent.ts';
 import { timeScale } from './scale.ts';
 import { TimeCursor } from './TimeCursor.tsx';
 import { TimePanel } from './TimePanel.tsx';
@@ -97,7 +97,7 @@ export function GroundStack() {
       const seconds = `${printQuantity(time, 'time', system)} s`;
       const content = contents[slot] ?? null;
       let words = '';
-      if (content !== null) {
+      if (content !== null && time <= endOf(content) + content.interval) {
         const unit = unitOfContent(content, system);
         const value = unit.print(valueAt(content.values, content.interval, time), unit.decimals);
         words = [seconds, `${value} ${unit.unit}`, content.kind === 'energy' ? 'input' : content.place, letter]

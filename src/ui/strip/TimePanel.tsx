@@ -10,7 +10,7 @@ import { EnergyKey } from './EnergyKey.tsx';
 import { ENERGY_NAMES } from './energyLook.ts';
 import { followTime } from './followTime.ts';
 import type { Band } from './geometry.ts';
-import { type PanelContent, TIME_PANELS, type TimePanelKind, valueAt } from './panelContent.ts';
+import { endOf, type PanelContent, TIME_PANELS, type TimePanelKind, valueAt } from './panelContent.ts';
 import type { TimeScale } from './scale.ts';
 import { AROUND, namedLayers, timePlot, unitOfContent } from './timePlot.ts';
 
@@ -92,6 +92,11 @@ function HistoryWords({ content, system }: { readonly content: PanelContent; rea
     return followTime((time) => {
       const { current } = now;
       if (current === null) return;
+      const end = endOf(content);
+      if (time > end + interval) {
+        current.textContent = `nothing after ${printQuantity(end, 'time', system)} s`;
+        return;
+      }
       const atPeak = quantity === 'percent' && Math.abs(time - peak.time) <= interval / 2;
       current.textContent = `${print.print(valueAt(values, interval, time), print.decimals)} now${atPeak ? ', the peak' : ''}`;
     });

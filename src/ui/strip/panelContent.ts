@@ -131,6 +131,11 @@ export function largestAt(values: Float64Array): number {
   return at;
 }
 
+/** When a history ends [s]: a run that collapsed has nothing after it. */
+export function endOf({ values, interval }: Pick<PanelContent, 'values' | 'interval'>): number {
+  return Math.max(0, values.length - 1) * interval;
+}
+
 /** A history at a time, straight between its entries; its end value beyond them. */
 export function valueAt(values: Float64Array, interval: number, time: number): number {
   if (values.length === 0) return Number.NaN;

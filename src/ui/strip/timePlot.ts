@@ -111,7 +111,9 @@ function layers(
     trace(content.values, content.interval, scale, unit, { line: { color: tokens.ink, width: 1.4, simplify: false } }),
   );
   const time = scale.time(0.57 * scale.width);
-  const at = Math.min(content.values.length - 1, Math.round(time / content.interval));
+  const at = Math.round(time / content.interval);
+  // A run that ended before has no layers there: they are named beside the plot.
+  if (at >= content.values.length) return { data, named: [] };
   const named = content.stack.flatMap(({ part, sum }, i): Partial<Annotations>[] => {
     const below = i === 0 ? 0 : content.stack[i - 1].sum[at];
     if (unit.onAxis(sum[at] - below) * pixels < NAMED_FROM) return [];
