@@ -10,7 +10,7 @@ const { AM, AF, BETA, GAMMA, H } = NOW;
 /** Rank-one updates after which the inverse is made afresh, so that rounding does not gather. Own choice. */
 const FRESH_AFTER = 200;
 /** An update that leaves less of the determinant than this cancels figures (a damper that comes loose): made afresh instead. Own choice. */
-const CANCELS = 1e-2;
+const CANCELS = 0.1;
 
 /** The step's matrix from row `from` up, from the lines as they stand; false where it is not positive definite. */
 export function refactor(work: NonlinearWork, from: number): boolean {

@@ -254,8 +254,8 @@ function isOff(w: Float64Array, p: number): boolean {
 
 /** Takes the step: state, laws, energies, peaks. */
 function commit(work: NonlinearWork, j: number, settles: boolean): void {
-  const { n, w, now, full, sums } = work;
-  if (work.smooth) take(work);
+  const { n, w, now, full, sums, smooth } = work;
+  if (smooth) take(work);
   if (full !== null) dampFully(work, full);
   let above = 0;
   let dashpotAbove = 0;
@@ -276,7 +276,7 @@ function commit(work: NonlinearWork, j: number, settles: boolean): void {
     const f = w[p + TRIAL_FORCE];
     if (w[p + LAW] === BILINEAR) bilinearCommit(w, p);
     else if (w[p + LAW] === ELASTIC) elasticCommit(w, p);
-    const damper = w[p + DAMPER_FORCE];
+    const damper = smooth ? w[p + DAMPER_FORCE] : 0;
     const shear = f + damper;
     const geometric = w[p + P_OVER_H] * d;
     const restoring = shear - geometric;
@@ -292,7 +292,8 @@ function commit(work: NonlinearWork, j: number, settles: boolean): void {
     dampingShear += fd;
     push += m * du;
     kinetic += m * v * v;
-    strain += w[p + WORK] + w[p + DAMPER_WORK] - 0.5 * geometric * d;
+    strain += w[p + WORK] - 0.5 * geometric * d;
+    if (smooth) strain += w[p + DAMPER_WORK];
     overturning += shear * w[p + HEIGHT];
     w[p + DAMPING_FORCE] = fd;
     w[p + TOTAL] = total;

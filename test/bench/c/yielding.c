@@ -26,7 +26,7 @@ typedef struct {
   double *m, *k, *height, *cf, *cs, *strength, *kYield, *ground;
   double *u, *v, *a, *rhs, *next, *l, *perPivot, *fd, *total, *drift, *force, *z, *work, *trialDrift, *trialForce, *tangent;
   double *trialZ, *unloading, *intercept, *slope, *storeyForce, *coupling, *uAhead, *vAhead, *driftAhead, *rateAhead, *load;
-  double *trialRate, *dMax, *dAt, *oMax, *uMax, *vMax, *tMax, *sMax, *yAt;
+  double *trialRate, *perGap, *perMass, *dMax, *dAt, *oMax, *uMax, *vMax, *tMax, *sMax, *yAt;
   double input, damping, kinetic, strain, solves;
 } March;
 
@@ -39,10 +39,10 @@ static inline __attribute__((always_inline)) void trialBilinear(March *w, int i)
 }
 
 static inline __attribute__((always_inline)) void commitBilinear(March *w, int i) {
-  const double d0 = w->drift[i], f0 = w->force[i], d1 = w->trialDrift[i], f1 = w->trialForce[i], k = w->k[i], h = w->kYield[i];
-  const double step = d1 - d0, rise = f1 - f0, free = k > h ? (rise - h * step) / (k - h) : step, middle = f0 + k * free;
-  w->work[i] += 0.5 * ((f0 + middle) * free + (middle + f1) * (step - free));
-  w->drift[i] = d1;
+  const double f0 = w->force[i], f1 = w->trialForce[i], step = w->trialDrift[i] - w->drift[i];
+  const double above = f1 - f0 - w->kYield[i] * step;
+  w->work[i] += 0.5 * ((f0 + f1) * step + above * (step - above * w->perGap[i]));
+  w->drift[i] = w->trialDrift[i];
   w->force[i] = f1;
 }
 
@@ -242,7 +242,7 @@ static inline __attribute__((always_inline)) void commit(March *w, int j, double
     const double dashpot = w->cs[i] * w->trialRate[i], fd = w->cf[i] * v + dashpot - dashpotAbove, m = w->m[i];
     w->storeyForce[i] = f + dashpot;
     dashpotAbove = dashpot;
-    const double total = (above - f - fd) / m, du = u - w->u[i];
+    const double total = (above - f - fd) * w->perMass[i], du = u - w->u[i];
     dampingStep += (fd + w->fd[i]) * du;
     push += m * du;
     kinetic += m * v * v;
@@ -310,7 +310,7 @@ int main(void) {
   w.ground = row(w.steps + 1, 1);
   double **made[] = {&w.u, &w.v, &w.a, &w.rhs, &w.next, &w.l, &w.perPivot, &w.fd, &w.total, &w.drift, &w.force, &w.z, &w.work,
                      &w.trialDrift, &w.trialForce, &w.tangent, &w.trialZ, &w.unloading, &w.intercept, &w.slope, &w.storeyForce,
-                     &w.coupling, &w.uAhead, &w.vAhead, &w.driftAhead, &w.rateAhead, &w.load, &w.trialRate, &w.dMax, &w.dAt,
+                     &w.coupling, &w.uAhead, &w.vAhead, &w.driftAhead, &w.rateAhead, &w.load, &w.trialRate, &w.perGap, &w.perMass, &w.dMax, &w.dAt,
                      &w.oMax, &w.uMax, &w.vMax, &w.tMax, &w.sMax, &w.yAt};
   const int count = sizeof made / sizeof *made;
   for (int i = 0; i < count; i++) *made[i] = row(n, 0);
@@ -321,6 +321,8 @@ int main(void) {
     for (int i = 0; i < n; i++) {
       w.a[i] = -w.ground[0];
       w.slope[i] = w.tangent[i] = w.k[i];
+      w.perMass[i] = 1 / w.m[i];
+      w.perGap[i] = 1 / (w.k[i] - w.kYield[i]);
       /* The offset of the bilinear law's lines stands in z. */
       if (!law) w.z[i] = w.strength[i] * (1 - w.kYield[i] / w.k[i]);
     }

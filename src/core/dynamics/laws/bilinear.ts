@@ -1,11 +1,12 @@
 import { FIELD } from '../record.ts';
 import type { LawBehaviour } from './law.ts';
 
-const { K, K_YIELD, STRENGTH, LAW_A, DRIFT, FORCE, WORK, TRIAL_DRIFT, TRIAL_FORCE, TANGENT } = FIELD;
+const { K, K_YIELD, STRENGTH, LAW_A, LAW_B, DRIFT, FORCE, WORK, TRIAL_DRIFT, TRIAL_FORCE, TANGENT } = FIELD;
 
 /**
  * Bilinear with kinematic hardening: elastic between two parallel lines of slope K_YIELD, +-(1 - h) Fy + K_YIELD x; without
- * hardening elastic-perfectly plastic. Its state is where it is: DRIFT and FORCE; LAW_A holds the lines' offset (1 - h) Fy.
+ * hardening elastic-perfectly plastic. Its state is where it is: DRIFT and FORCE; LAW_A holds the lines' offset (1 - h) Fy,
+ * LAW_B 1 / (K - K_YIELD).
  * Source: Prager (1956), J. Appl. Mech. 23, 493-496 (kinematic hardening); in this form Chopra, Dynamics of Structures, section
  * 7.1 (both from memory).
  */
@@ -13,6 +14,7 @@ export const bilinear: LawBehaviour = { begin, trial, commit, recoverable };
 
 function begin(w: Float64Array, at: number): void {
   w[at + LAW_A] = w[at + STRENGTH] * (1 - w[at + K_YIELD] / w[at + K]);
+  w[at + LAW_B] = 1 / (w[at + K] - w[at + K_YIELD]);
 }
 
 export function trial(w: Float64Array, at: number): void {
@@ -27,21 +29,15 @@ export function trial(w: Float64Array, at: number): void {
   w[at + TANGENT] = inside ? k : h;
 }
 
-/** The path is elastic as far as the line that bounds it, then along that line. */
+/** The path is elastic as far as the line that bounds it, then along that line: with the chord's trapezoid goes the triangle beside it. */
 export function commit(w: Float64Array, at: number): void {
-  const d0 = w[at + DRIFT];
   const f0 = w[at + FORCE];
-  const d1 = w[at + TRIAL_DRIFT];
   const f1 = w[at + TRIAL_FORCE];
-  const k = w[at + K];
-  const h = w[at + K_YIELD];
-  const step = d1 - d0;
-  const rise = f1 - f0;
-  // Elastic as far as a drift of `free`: k free + h (step - free) = rise.
-  const free = k > h ? (rise - h * step) / (k - h) : step;
-  const middle = f0 + k * free;
-  w[at + WORK] += 0.5 * ((f0 + middle) * free + (middle + f1) * (step - free));
-  w[at + DRIFT] = d1;
+  const step = w[at + TRIAL_DRIFT] - w[at + DRIFT];
+  // What the elastic part rose by above the line's slope, (K - K_YIELD) x its drift.
+  const above = f1 - f0 - w[at + K_YIELD] * step;
+  w[at + WORK] += 0.5 * ((f0 + f1) * step + above * (step - above * w[at + LAW_B]));
+  w[at + DRIFT] = w[at + TRIAL_DRIFT];
   w[at + FORCE] = f1;
 }
 
