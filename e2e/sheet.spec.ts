@@ -10,7 +10,7 @@ test('typing stiffness follows at once and makes the caution about the drift go 
   await expect(cautions(page)).toContainText('Limit exceeded: storey 2');
   await cell(page, 2, 'stiffness').click();
   const before = await verdict(page).textContent();
-  await page.keyboard.type('430');
+  await page.keyboard.type('520');
   await expect(verdict(page)).not.toHaveText(before ?? '');
   await expect(cautions(page)).not.toContainText('Limit exceeded: storey 2');
   await page.keyboard.press('Escape');
@@ -128,9 +128,10 @@ test('a reload finds everything, a half-typed cell included', async ({ page }) =
   await page.keyboard.press('Enter');
   await cell(page, 2, 'height').click();
   await page.keyboard.type('4.3');
+  // The answer follows the typing, and what was typed is kept, a moment after it.
+  await page.waitForTimeout(1000);
   await expect(verdict(page)).toHaveText(/^Storey \d+ governs/);
   const shown = await verdict(page).textContent();
-  await page.waitForTimeout(600);
   await page.reload();
   await expect(verdict(page)).toHaveText(shown ?? '');
   await expect(cell(page, 5, 'stiffness')).toContainText('512');

@@ -32,7 +32,8 @@ export interface GridProps {
   /** The panel of a law is open. */
   readonly panel: boolean;
   readonly onPaste: (text: string) => void;
-  readonly onLaw: (storey: number) => void;
+  /** Opens the panel of a storey's law; null closes it. */
+  readonly onLaw: (storey: number | null) => void;
 }
 
 /** The storey table: one tab stop, every cell within reach of the keys. */
@@ -70,6 +71,12 @@ export function Grid(props: GridProps) {
   }, [cell.storey, cell.column, edited]);
 
   const onKeyDown = (event: KeyboardEvent) => {
+    if (panel) {
+      // The panel is on its way: a key that is meant for it must not move the cell.
+      if (event.key === 'Escape') onLaw(null);
+      event.preventDefault();
+      return;
+    }
     wanted.current = true;
     if (!sheetKey(event, keyboard)) {
       wanted.current = false;

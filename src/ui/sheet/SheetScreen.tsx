@@ -1,4 +1,4 @@
-import { lazy, useCallback, useLayoutEffect, useMemo, useRef, useState } from 'react';
+import { lazy, useCallback, useEffect, useLayoutEffect, useMemo, useRef, useState } from 'react';
 import { toDisplay } from '../../core/units/quantities.ts';
 import { effectiveProject, useDocument } from '../../state/document.ts';
 import { useResults } from '../../state/results.ts';
@@ -20,7 +20,7 @@ import { Ground } from './Ground.tsx';
 import { Heads } from './Heads.tsx';
 import { open } from './keys.ts';
 import { LimitCell } from './LimitCell.tsx';
-import { PasteDialog } from './PasteDialog.tsx';
+import { fetchLater, LawPanel, PasteDialog } from './later.ts';
 import { rowsOf } from './rows.ts';
 import { AccelerationPlot, ShearPlot } from './SidePlots.tsx';
 import { SpokenVerdict } from './SpokenVerdict.tsx';
@@ -36,7 +36,6 @@ import './grid.css';
 import './drawing.css';
 
 const GroundStack = lazy(() => import('../strip/GroundStack.tsx').then((module) => ({ default: module.GroundStack })));
-const LawPanel = lazy(() => import('./LawPanel.tsx').then((module) => ({ default: module.LawPanel })));
 const SquarePanels = lazy(() =>
   import('../plots/SquarePanels.tsx').then((module) => ({ default: module.SquarePanels })),
 );
@@ -120,6 +119,7 @@ export function SheetScreen({ onOpen, onExample }: SheetScreenProps) {
   const statistic = { mean: 'Mean', median: 'Median', max: 'Largest' }[answers?.measure ?? 'mean'];
   const tall = rows.total > free + 40;
   useCursorAtPeak();
+  useEffect(fetchLater, []);
   // A building taller than the sheet opens at the storey that is shown, not at the roof.
   const opened = useRef(false);
   useLayoutEffect(() => {
@@ -290,7 +290,15 @@ export function SheetScreen({ onOpen, onExample }: SheetScreenProps) {
         </Boundary>
       )}
       {pasted !== null && (
-        <PasteDialog text={pasted} cell={shownCell} columns={columns} system={system} onClose={() => setPasted(null)} />
+        <Boundary part="The pasted block">
+          <PasteDialog
+            text={pasted}
+            cell={shownCell}
+            columns={columns}
+            system={system}
+            onClose={() => setPasted(null)}
+          />
+        </Boundary>
       )}
     </div>
   );

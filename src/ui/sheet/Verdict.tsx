@@ -4,10 +4,11 @@ import type { Fault } from '../../core/fault.ts';
 import type { Project } from '../../document/project.ts';
 import { edit, useDocument } from '../../state/document.ts';
 import { runNow, stop, useResults } from '../../state/results.ts';
+import { Boundary } from '../controls/Boundary.tsx';
 import { Button } from '../controls/Button.tsx';
 import { faultSentence } from '../controls/field.ts';
 import { CautionMark, Icon } from '../controls/Icon.tsx';
-import { Mends } from './Mends.tsx';
+import { Mends } from './later.ts';
 
 export interface VerdictProps {
   readonly letters: Readonly<Record<string, string>>;
@@ -51,7 +52,9 @@ export function Verdict({ letters }: VerdictProps) {
   if (failed !== undefined && envelope.incomplete.length > 0) {
     return (
       <Line kind="over stopped" mark headline={verdict.headline} detail={verdict.detail}>
-        <Mends failed={failed} letter={letters[failed.motion] ?? failed.motion} why={verdict.detail} />
+        <Boundary part="What can be done">
+          <Mends failed={failed} letter={letters[failed.motion] ?? failed.motion} why={verdict.detail} />
+        </Boundary>
       </Line>
     );
   }
