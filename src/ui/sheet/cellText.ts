@@ -7,7 +7,7 @@ import { COLUMN_QUANTITIES, type InputColumn } from './columns.ts';
 const LONGEST = 8;
 
 /** The value of a cell; null where there is none. */
-export function cellValue(row: StoreyRow, column: Exclude<InputColumn, 'law'>): Typed {
+function cellValue(row: StoreyRow, column: Exclude<InputColumn, 'law'>): Typed {
   switch (column) {
     case 'strength':
     case 'hardening':
