@@ -23,20 +23,20 @@ export function partFaults(motions: readonly Timed[], { step, tail }: Analysis):
 export function stabilityFaults(
   motions: readonly Timed[],
   { step, method, tail }: Analysis,
-  { modes }: PreparedFrame,
+  prepared: PreparedFrame,
 ): Fault[] {
   return once(motions, (motion) => {
     const { interval } = motion;
     if (step === 'auto') {
-      const unstable = stabilityFault(modes, method, interval / MOST_PARTS);
+      const unstable = stabilityFault(prepared, method, interval / MOST_PARTS);
       if (unstable !== null) {
         const message = `halving stops at ${MOST_PARTS} parts of the interval, and ${unstable.message}`;
         return [{ ...unstable, message, mend: 'Take a scheme that is stable at any step, or type a shorter step' }];
       }
-      return countFaults(motion, 2 * leastParts(modes, method, interval).parts, tail);
+      return countFaults(motion, 2 * leastParts(prepared, method, interval).parts, tail);
     }
     const fitted = stepOf(step, interval);
-    const unstable = fitted.ok ? stabilityFault(modes, method, fitted.value.size) : null;
+    const unstable = fitted.ok ? stabilityFault(prepared, method, fitted.value.size) : null;
     return unstable === null ? [] : [unstable];
   });
 }

@@ -72,10 +72,11 @@ export function stepErrorsOf(runs: readonly FoundRun[]): Readonly<Record<string,
   return Object.fromEntries(runs.flatMap(({ motion, stepError }) => (stepError === null ? [] : [[motion, stepError]])));
 }
 
-function stepFacts(runs: Answers['runs'], { analysis, prepared: { modes } }: Case): Answers['step'] {
+function stepFacts(runs: Answers['runs'], { analysis, prepared }: Case): Answers['step'] {
+  const { modes } = prepared;
   const size = Math.max(...runs.map(({ run }) => run.step));
   const shortestPeriod = modes[modes.length - 1].period;
-  return { size, shortestPeriod, overShortest: size / shortestPeriod, limit: stepLimit(modes, analysis.method) };
+  return { size, shortestPeriod, overShortest: size / shortestPeriod, limit: stepLimit(prepared, analysis.method) };
 }
 
 /** Records do not change: their share is looked up at each keystroke, computed once. */

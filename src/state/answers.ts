@@ -60,6 +60,8 @@ export interface ResultsState {
   readonly answers: Answers | null;
   /** Modes of the frame as it stands, even without motions; null where the frame cannot stand. */
   readonly modes: readonly Mode[] | null;
+  /** How much stiffer than in those modes the frame can get, core/frame/stiffening.ts [-]. */
+  readonly stiffening: number;
   /** Why the document does not run. */
   readonly faults: readonly Fault[];
   /** In words, which field changed since the answers shown: "storey 2 stiffness is now 470". */
@@ -80,6 +82,7 @@ export const resultsStore = createStore<ResultsState>(() => ({
   waits: false,
   answers: null,
   modes: null,
+  stiffening: 1,
   faults: [],
   changed: null,
   progress: null,

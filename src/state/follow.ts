@@ -1,5 +1,6 @@
 import type { Run } from '../core/dynamics/run.ts';
 import type { Fault } from '../core/fault.ts';
+import type { Swaying } from '../core/frame/stiffening.ts';
 import { type Case, caseOf } from '../document/case.ts';
 import type { Project } from '../document/project.ts';
 import type { Engine } from '../engine/protocol.ts';
@@ -60,7 +61,7 @@ export function follow(
   const failures = new Map<string, Fault>();
   let project: Project | null = null;
   let question: Question | null = null;
-  let modes: ResultsState['modes'] = null;
+  let swaying: Swaying | null = null;
   /** Run with histories, and the key of what it was computed from. */
   let full: { readonly key: string; readonly run: Run } | null = null;
   let startedAt: number | null = null;
@@ -80,7 +81,7 @@ export function follow(
     search.forgetFailures();
     const nothing = now.frame.storeys.length === 0 || !now.motions.some((motion) => motion.used);
     question = result.ok && !nothing ? questionOf(result.value) : null;
-    modes = result.ok && now.frame.storeys.length > 0 ? result.value.prepared.modes : null;
+    swaying = result.ok && now.frame.storeys.length > 0 ? result.value.prepared : null;
     cancelUnwanted();
     if (nothing) {
       rest({ status: 'empty', answers: null, chosen: null, stepErrors: null, changed: null, faults: faultsOf(result) });
@@ -128,7 +129,7 @@ export function follow(
       });
     }
     const progress = { done: doneOf(asking), of: asking.asks.length, startedAt };
-    set({ status: 'running', waits: false, faults: [], changed: changedSince(), progress, modes });
+    set({ status: 'running', waits: false, faults: [], changed: changedSince(), progress, ...swayingNow() });
   }
 
   function submit(asking: Question): void {
@@ -278,7 +279,11 @@ export function follow(
     timers.tick.clear();
     timers.pause.clear();
     const changed = change.status === 'stale' ? changedSince() : null;
-    set({ slow: false, waits: false, progress: null, arrived: [], changed, modes, ...change });
+    set({ slow: false, waits: false, progress: null, arrived: [], changed, ...swayingNow(), ...change });
+  }
+
+  function swayingNow(): Pick<ResultsState, 'modes' | 'stiffening'> {
+    return { modes: swaying?.modes ?? null, stiffening: swaying?.stiffening ?? 1 };
   }
 
   function tick(): void {

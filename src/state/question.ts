@@ -73,7 +73,7 @@ function askOf({ frame, prepared, analysis }: Case, motion: Case['motions'][numb
 
   function rangeOf(): Pick<Ask, 'first' | 'most' | 'least'> {
     if (step === 'auto') {
-      const least = leastParts(prepared.modes, method, interval);
+      const least = leastParts(prepared, method, interval);
       return { first: least.parts, most: Math.max(least.parts, mostParts(count, interval, tail)), least };
     }
     const typed = stepOf(step, interval);

@@ -94,7 +94,7 @@ describe('[EVI-5] step "auto" behind the answers', () => {
     expect(evidence.map(({ parts }) => parts)).toEqual(found.map(({ parts }) => parts));
     expect(evidence.map(({ auto }) => auto)).toEqual(found.map(({ why, converged }) => ({ why, converged })));
     expect(now().answers?.evidenceSentence).toMatch(/^Drifts are converged to 0\.\d %; energy balances to /);
-    const least = leastParts(caseNow().prepared.modes, caseNow().analysis.method, 0.02).parts;
+    const least = leastParts(caseNow().prepared, caseNow().analysis.method, 0.02).parts;
     expect(Math.max(...partsNow())).toBeGreaterThan(least);
     await expect
       .poll(() => now().chosen?.run.step)

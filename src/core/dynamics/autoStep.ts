@@ -1,4 +1,5 @@
 import type { Mode } from '../frame/modes.ts';
+import type { Swaying } from '../frame/stiffening.ts';
 import type { MethodChoice, Run } from './run.ts';
 import { stepErrorOf } from './stepError.ts';
 import { stepLimit } from './steps.ts';
@@ -34,10 +35,11 @@ export function modesThatMatter(modes: readonly Mode[]): number {
 }
 
 /** Where the search for a step begins: the first of 1, 2, 4 ... MOST_PARTS that keeps steps a period and the stability limit. */
-export function leastParts(modes: readonly Mode[], choice: MethodChoice, interval: number): LeastParts {
+export function leastParts(frame: Swaying, choice: MethodChoice, interval: number): LeastParts {
+  const { modes } = frame;
   const mode = modesThatMatter(modes);
   const bySteps = (STEPS_A_PERIOD * interval) / modes[mode - 1].period;
-  const limit = stepLimit(modes, choice);
+  const limit = stepLimit(frame, choice);
   const byLimit = limit === null ? 0 : interval / limit;
   const wanted = Math.max(1, bySteps, byLimit);
   let parts = 1;

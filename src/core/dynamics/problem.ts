@@ -27,7 +27,7 @@ export function problemOf(prepared: PreparedFrame, { analysis, motion }: RunCase
   const step = stepOf(analysis.step, motion.interval);
   if (!step.ok) throw new RangeError(`step: ${step.faults[0].message}`);
   const { size, parts } = step.value;
-  const unstable = stabilityFault(prepared.modes, analysis.method, size);
+  const unstable = stabilityFault(prepared, analysis.method, size);
   if (unstable) throw new RangeError(`step: ${unstable.message}`);
   if (motion.acceleration.length < 2)
     throw new RangeError(`motion: ${motion.acceleration.length} samples, expected at least 2`);

@@ -22,7 +22,7 @@ export interface AutoRun {
 export function runAtAutoStep(prepared: PreparedFrame, runCase: RunCase, want: Want): AutoRun {
   const { analysis, motion } = runCase;
   const { interval, acceleration } = motion;
-  const least = leastParts(prepared.modes, analysis.method, interval);
+  const least = leastParts(prepared, analysis.method, interval);
   const most = Math.max(least.parts, mostParts(acceleration.length, interval, analysis.tail));
   const at = (parts: number, histories: boolean): Run => {
     const one: RunCase = { ...runCase, analysis: { ...analysis, step: { parts } } };

@@ -55,17 +55,18 @@ export interface BenchResult {
 
 /** Every scheme at every step, scheme by scheme, coarsest step first. */
 export function benchPlan(
-  { modes, dampingRatios }: PreparedFrame,
+  frame: PreparedFrame,
   interval: number,
   methods: readonly MethodChoice[],
   parts: readonly number[],
 ): BenchPlan[] {
+  const { modes, dampingRatios } = frame;
   const last = modes.length - 1;
   return methods.flatMap((choice) =>
     parts.map((n): BenchPlan => {
       const method = methodOf(choice);
       const step = interval / n;
-      const limit = stepLimit(modes, choice);
+      const limit = stepLimit(frame, choice);
       const accuracy = (mode: Mode, r: number) => modeAccuracy(method, mode.frequency, dampingRatios[r], step);
       return {
         method: choice,

@@ -1,5 +1,5 @@
 import type { Fault, Result } from '../fault.ts';
-import type { Mode } from '../frame/modes.ts';
+import type { Swaying } from '../frame/stiffening.ts';
 import { methodOf, stabilityLimit } from './methods.ts';
 import type { MethodChoice, StepChoice } from './run.ts';
 
@@ -57,8 +57,8 @@ export function stepOf(step: StepChoice, interval: number): Result<Step> {
 }
 
 /** Fault where the step passes the scheme's stability limit for the highest mode; the limit in seconds is in it. */
-export function stabilityFault(modes: readonly Mode[], choice: MethodChoice, step: number): Fault | null {
-  const limit = stepLimit(modes, choice);
+export function stabilityFault(frame: Swaying, choice: MethodChoice, step: number): Fault | null {
+  const limit = stepLimit(frame, choice);
   if (limit === null || step <= limit) return null;
   return {
     code: 'beyond-stability-limit',
@@ -68,10 +68,10 @@ export function stabilityFault(modes: readonly Mode[], choice: MethodChoice, ste
   };
 }
 
-/** Largest stable step [s] of a scheme for these modes; null where any step is stable. */
-export function stepLimit(modes: readonly Mode[], choice: MethodChoice): number | null {
+/** Largest stable step [s] of a scheme for a frame, on the stiffest branches that it has; null where any step is stable. */
+export function stepLimit({ modes, stiffening }: Swaying, choice: MethodChoice): number | null {
   const limit = stabilityLimit(methodOf(choice));
-  return Number.isFinite(limit) ? limit / modes[modes.length - 1].frequency : null;
+  return Number.isFinite(limit) ? limit / (modes[modes.length - 1].frequency * Math.sqrt(stiffening)) : null;
 }
 
 function short(seconds: number): string {

@@ -3,6 +3,7 @@ import { type DampingMatrix, dampingMatrix, modalDampingRatios } from './damping
 import type { Frame } from './frame.ts';
 import { type FrameArrays, frameArrays } from './matrices.ts';
 import { type Mode, modesOf } from './modes.ts';
+import { stiffeningOf } from './stiffening.ts';
 
 /** Everything a run needs of the frame that does not depend on the motion: made once, used for each motion. */
 export interface PreparedFrame {
@@ -12,6 +13,8 @@ export interface PreparedFrame {
   readonly damping: DampingMatrix;
   /** Ratio of critical damping of each mode [-]. */
   readonly dampingRatios: Float64Array;
+  /** How much stiffer than at its start a storey can get, see stiffening.ts [-]. */
+  readonly stiffening: number;
 }
 
 /**
@@ -48,5 +51,9 @@ export function prepareFrame(frame: Frame): Result<PreparedFrame> {
     };
     return { ok: false, faults: [fault] };
   }
-  return { ok: true, value: { frame, arrays, modes, damping, dampingRatios } };
+  const stiffening = stiffeningOf(
+    frame.storeys.map(({ law }) => law),
+    arrays,
+  );
+  return { ok: true, value: { frame, arrays, modes, damping, dampingRatios, stiffening } };
 }

@@ -14,6 +14,7 @@ import { StepSection } from './StepSection.tsx';
 export function AnalysisDialog({ onClose }: { readonly onClose: () => void }) {
   const project = useDocument(effectiveProject);
   const modes = useResults((state) => state.modes);
+  const stiffening = useResults((state) => state.stiffening);
   const faults = useResults((state) => state.faults);
   const close = () => {
     commitOpenDraft();
@@ -41,7 +42,7 @@ export function AnalysisDialog({ onClose }: { readonly onClose: () => void }) {
         </>
       }
     >
-      <MethodSection analysis={project.analysis} modes={modes} faults={faults} />
+      <MethodSection analysis={project.analysis} frame={modes && { modes, stiffening }} faults={faults} />
       <StepSection project={project} modes={modes} faults={faults} />
       <DampingSection frame={project.frame} modes={modes} faults={faults} />
       <PDeltaSection pDelta={project.frame.pDelta} faults={faults} />

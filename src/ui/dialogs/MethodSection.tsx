@@ -2,7 +2,7 @@ import { type Method, methodOf, spectralRadiusAtInfinity } from '../../core/dyna
 import type { MethodChoice } from '../../core/dynamics/run.ts';
 import { stepLimit } from '../../core/dynamics/steps.ts';
 import { type Fault, never } from '../../core/fault.ts';
-import type { Mode } from '../../core/frame/modes.ts';
+import type { Swaying } from '../../core/frame/stiffening.ts';
 import { printQuantity } from '../../core/units/quantities.ts';
 import type { AnalysisRow } from '../../document/project.ts';
 import { edit } from '../../state/document.ts';
@@ -30,12 +30,13 @@ const START: { readonly [K in MethodChoice['kind']]: Extract<MethodChoice, { kin
 
 export interface MethodSectionProps {
   readonly analysis: AnalysisRow;
-  readonly modes: readonly Mode[] | null;
+  /** null while the frame cannot stand. */
+  readonly frame: Swaying | null;
   readonly faults: readonly Fault[];
 }
 
 /** The time-stepping scheme, its numbers, and what they bring. */
-export function MethodSection({ analysis: { method }, modes, faults }: MethodSectionProps) {
+export function MethodSection({ analysis: { method }, frame, faults }: MethodSectionProps) {
   const scheme = schemeOf(method);
   return (
     <Section
@@ -56,7 +57,7 @@ export function MethodSection({ analysis: { method }, modes, faults }: MethodSec
         />
       </Line>
       <Numbers method={method} />
-      {scheme === null ? null : <Facts facts={factsOf(scheme, method, modes)} />}
+      {scheme === null ? null : <Facts facts={factsOf(scheme, method, frame)} />}
       <Faults faults={faults} under="analysis.method" shown={FIELDS} />
     </Section>
   );
@@ -132,18 +133,14 @@ function schemeOf(method: MethodChoice): Method | null {
   }
 }
 
-function factsOf(
-  scheme: Method,
-  choice: MethodChoice,
-  modes: readonly Mode[] | null,
-): readonly (readonly [string, string])[] {
+function factsOf(scheme: Method, choice: MethodChoice, frame: Swaying | null): readonly (readonly [string, string])[] {
   return [
     [
       'Order',
       scheme.order === 2 ? 'second: half the step, a quarter of the error' : 'first: half the step, half the error',
     ],
     ['Damping of its own', dampingWords(scheme)],
-    ['Stability', stabilityWords(choice, modes)],
+    ['Stability', stabilityWords(choice, frame)],
   ];
 }
 
@@ -154,8 +151,8 @@ function dampingWords(scheme: Method): string {
   return `the highest modes keep ${printQuantity(radius, 'ratio', 'si', 2)} of their amplitude a step`;
 }
 
-function stabilityWords(choice: MethodChoice, modes: readonly Mode[] | null): string {
-  if (modes === null) return 'known once the frame stands';
-  const limit = stepLimit(modes, choice);
+function stabilityWords(choice: MethodChoice, frame: Swaying | null): string {
+  if (frame === null) return 'known once the frame stands';
+  const limit = stepLimit(frame, choice);
   return limit === null ? 'stable at any step' : `stable up to a step of ${shortSeconds(limit)} s for this frame`;
 }

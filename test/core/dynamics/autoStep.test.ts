@@ -32,23 +32,23 @@ describe('[EVI-2] where the search begins', () => {
     expect(modes.slice(0, mode).reduce((sum, m) => sum + m.effectiveMassRatio, 0)).toBeGreaterThanOrEqual(0.95);
     expect(modes.slice(0, mode - 1).reduce((sum, m) => sum + m.effectiveMassRatio, 0)).toBeLessThan(0.95);
     const { period } = modes[mode - 1];
-    expect(leastParts(modes, AVERAGE, period / 20.001)).toEqual({ parts: 1, why: { kind: 'interval' }, enough: true });
-    expect(leastParts(modes, AVERAGE, period / 19.9)).toEqual({
+    expect(leastParts(whole, AVERAGE, period / 20.001)).toEqual({ parts: 1, why: { kind: 'interval' }, enough: true });
+    expect(leastParts(whole, AVERAGE, period / 19.9)).toEqual({
       parts: 2,
       why: { kind: 'steps-a-period', mode },
       enough: true,
     });
-    expect(leastParts(modes, AVERAGE, period / 4.9)).toMatchObject({ parts: 8 });
-    expect(leastParts(modes, AVERAGE, 4 * period)).toMatchObject({ parts: MOST_PARTS, enough: false });
+    expect(leastParts(whole, AVERAGE, period / 4.9)).toMatchObject({ parts: 8 });
+    expect(leastParts(whole, AVERAGE, 4 * period)).toMatchObject({ parts: MOST_PARTS, enough: false });
   });
   test('the stability limit where it asks for more', () => {
     const stiff = shearFrame([3e5, 1e3], [1.6e8, 1e9]);
     const central: MethodChoice = { kind: 'central-difference' };
-    const { parts, why } = leastParts(prepared(stiff).modes, central, 0.01);
+    const { parts, why } = leastParts(prepared(stiff), central, 0.01);
     if (why.kind !== 'stability') throw new Error(why.kind);
     expect(0.01 / parts).toBeLessThanOrEqual(why.limit);
     expect(0.02 / parts).toBeGreaterThan(why.limit);
-    expect(leastParts(prepared(stiff).modes, AVERAGE, 0.01).why.kind).toBe('interval');
+    expect(leastParts(prepared(stiff), AVERAGE, 0.01).why.kind).toBe('interval');
   });
   test('a record so long that the run at half the step could not be held is given fewer parts', () => {
     expect(mostParts(20_000, 0.01, 5)).toBe(64);
@@ -108,7 +108,7 @@ describe('[EVI-4] a run at the step that halving comes to', () => {
     expect(stepError).toBe(stepErrorOf(at(parts), at(2 * parts)));
     expect(stepError).toBeLessThan(AIM);
     expect(converged).toBe(true);
-    const least = leastParts(modes, AVERAGE, 0.02).parts;
+    const least = leastParts(whole, AVERAGE, 0.02).parts;
     expect(parts).toBeGreaterThan(least);
     for (let n = least; n < parts; n *= 2) expect(stepErrorOf(at(n), at(2 * n))).toBeGreaterThanOrEqual(AIM);
     expect(why).toBe(`${parts} parts of the interval of 0.02 s, the first with a step error under 1 %`);

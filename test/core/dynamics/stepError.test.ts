@@ -9,7 +9,7 @@ import { type Drawn, drawFrames } from '../../support/randomFrames.ts';
 const OPTIONS = { tail: 0.5, stopDrift: 5 };
 const at = ({ frame, acceleration, interval }: Drawn, parts: number): Run =>
   run(frame, acceleration, interval, { ...OPTIONS, step: { parts } });
-const least = ({ frame, interval }: Drawn) => leastParts(prepared(frame).modes, AVERAGE, interval).parts;
+const least = ({ frame, interval }: Drawn) => leastParts(prepared(frame), AVERAGE, interval).parts;
 const yields = ({ frame }: Drawn) => frame.storeys.some(({ law }) => law.kind !== 'elastic');
 
 /** Largest error of a peak drift over the largest peak drift, against a run at a sixteenth of the step [-]. */
