@@ -22,6 +22,15 @@ const PLACES: readonly (readonly [string, (page: Page) => Promise<void>])[] = [
   ['keys dialog', (page) => page.getByRole('button', { name: 'Keys' }).click()],
   ['law panel', (page) => cell(page, 1, 'law').click()],
   ['stopped run', stopRun],
+  ['evidence dialog', (page) => page.getByRole('button', { name: /^Evidence: / }).click()],
+  [
+    'schemes side by side',
+    async (page) => {
+      await page.getByRole('button', { name: /^Evidence: / }).click();
+      await page.getByRole('button', { name: 'Compare schemes' }).click();
+      await expect(page.getByText(/^\d+ of \d+ runs done/)).toBeVisible();
+    },
+  ],
   ['analysis dialog', (page) => page.getByRole('button', { name: /^step / }).click()],
 ];
 

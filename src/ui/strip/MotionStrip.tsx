@@ -88,7 +88,8 @@ export const MotionStrip = memo(function MotionStrip({ axis, band, scale, system
           <path d={`M${x(ended.time)} 0V${band.height}`} className="s-signal" strokeDasharray="2 3" />
           <text
             x={x(ended.time) + (x(ended.time) > width / 2 ? -6 : 6)}
-            y={band.height - 8}
+            // Above the words of the strong motion.
+            y={band.height - 18}
             className={`signal halo ${x(ended.time) > width / 2 ? 'end' : ''}`}
           >
             {ended.words}

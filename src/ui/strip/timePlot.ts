@@ -7,11 +7,14 @@ import { thinned } from '../plots/thin.ts';
 import { evenAxis, risingAxis, tickWords } from '../plots/ticks.ts';
 import type { Tokens } from '../plots/tokens.ts';
 import { ENERGY_NAMES, layerFill } from './energyLook.ts';
-import { type EnergyPart, type PanelContent, valueAt } from './panelContent.ts';
+import { type EnergyPart, endOf, type PanelContent, valueAt } from './panelContent.ts';
 import type { TimeScale } from './scale.ts';
 
 /** A layer thinner than this carries no name [px]. */
 const NAMED_FROM = 15;
+
+/** Room that the name of the input takes [px]. */
+const ROOM = 36;
 
 /** A limit further out than so many times the peak is not drawn: the history would be a flat line. */
 const FAR = 3;
@@ -139,14 +142,17 @@ function word(text: string, x: number, y: number, color: string, tokens: Tokens)
   return { x, y, text, showarrow: false, font: { family: tokens.sans, size: 11, color, weight: 600 } };
 }
 
-/** The input is named where its line ends. */
+/** The input is named where its line ends: before it at the end of the axis, behind it where the run ended early. */
 function inputWord({ content, scale, tokens }: TimePlotProps, unit: AxisUnit): Partial<Annotations> {
-  const value = valueAt(content.values, content.interval, scale.range[1]);
+  const end = endOf(content);
+  const early = end < scale.time(scale.width - ROOM);
+  const at = early ? end : scale.range[1];
+  const value = valueAt(content.values, content.interval, at);
   return {
-    ...word('input', scale.range[1], unit.onAxis(value), tokens.ink, tokens),
-    xanchor: 'right',
-    xshift: -4,
-    yanchor: 'bottom',
+    ...word('input', at, unit.onAxis(value), tokens.ink, tokens),
+    xanchor: early ? 'left' : 'right',
+    xshift: early ? 4 : -4,
+    yanchor: early ? 'middle' : 'bottom',
   };
 }
 
