@@ -13,16 +13,21 @@ const visit = (key) => {
 };
 for (const [key, chunk] of Object.entries(manifest)) if (chunk.isEntry) visit(key);
 
-const lazy = new Set(
-  Object.values(manifest)
-    .map(({ file }) => file)
-    .filter((file) => !first.has(file)),
-);
-// The manifest does not list workers: every script that it does not know to be lazy counts.
-const scripts = readdirSync('dist/assets', { recursive: true })
-  .map((name) => `assets/${name}`)
-  .filter((name) => name.endsWith('.js') && !lazy.has(name));
+// The manifest does not list what a worker is built of: its file and what that imports statically, from the text.
+const beside = 'dist/assets';
+const ofWorkers = new Set();
+const follow = (name) => {
+  if (ofWorkers.has(name)) return;
+  ofWorkers.add(name);
+  const text = readFileSync(`${beside}/${name}`, 'utf8');
+  for (const [, imported] of text.matchAll(/(?:from|import)\s*"\.\/([^"]+\.js)"/g)) follow(imported);
+};
+for (const name of readdirSync(beside)) if (/^worker-.*\.js$/.test(name)) follow(name);
+const scripts = [...first]
+  .filter((file) => file.endsWith('.js'))
+  .concat([...ofWorkers].map((name) => `assets/${name}`));
 
+if (ofWorkers.size === 0) throw new Error('dist/assets holds no worker');
 if (first.size === 0) throw new Error('dist/.vite/manifest.json names no entry');
 
 export default [

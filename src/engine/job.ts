@@ -1,9 +1,8 @@
-import { type PreparedFrame, prepareFrame, type RunUnderWay, startRun } from '../core/doors.ts';
+import { type RunUnderWay, startRun } from '../core/doors.ts';
 import type { Run } from '../core/dynamics/run.ts';
-import { faultLine } from '../core/fault.ts';
-import type { Frame } from '../core/frame/frame.ts';
-import type { FromWorker, Outcome, RunJob, ToWorker, WorkerJob } from './protocol.ts';
-import { readFile } from './reading.ts';
+import type { PreparedFrame } from '../core/frame/prepare.ts';
+import type { FromWorker, Outcome, ReadJob, RunJob, ToWorker } from './protocol.ts';
+import type { readFile } from './reading.ts';
 import type { Turns } from './turns.ts';
 
 /** A slice ends after so many milliseconds at the first chance; with a chunk of steps on top it stays under 20. */
@@ -22,14 +21,14 @@ const WORTH_TRANSFER = 4096;
 
 interface RunUnderHand {
   readonly job: RunJob;
-  readonly frame: Frame;
+  readonly prepared: PreparedFrame;
   march: RunUnderWay | null;
   /** Steps of the next chunk. */
   steps: number;
   /** [ms] so far. */
   took: number;
 }
-type UnderHand = RunUnderHand | { readonly job: Exclude<WorkerJob, RunJob> };
+type UnderHand = RunUnderHand | { readonly job: ReadJob; readonly read: typeof readFile };
 
 /**
  * The far side of the protocol, the same in a worker and on the page's own thread: takes messages, works through its jobs in
@@ -40,8 +39,9 @@ export function jobs(
   turns: Turns,
 ): (message: ToWorker) => void {
   const motions = new Map<string, Float64Array>();
-  const prepared = new WeakMap<Frame, PreparedFrame>();
-  let frame: Frame | null = null;
+  let prepared: PreparedFrame | null = null;
+  /** Files that wait for their reader. */
+  const unread = new Set<number>();
   let queue: UnderHand[] = [];
   let waiting = false;
   let lastPost = 0;
@@ -56,16 +56,36 @@ export function jobs(
         return;
       case 'work':
         if (message.drop.length > 0) queue = queue.filter(({ job }) => !message.drop.includes(job.id));
-        for (const job of message.jobs) queue.push(job.kind === 'run' ? underHand(job) : { job });
-        queue.sort((a, b) => a.job.priority - b.job.priority || a.job.id - b.job.id);
-        turn();
+        for (const id of message.drop) unread.delete(id);
+        for (const job of message.jobs) {
+          if (job.kind === 'run') queue.push(underHand(job));
+          else void fetchReader(job);
+        }
+        order();
+    }
+  }
+
+  function order(): void {
+    queue.sort((a, b) => a.job.priority - b.job.priority || a.job.id - b.job.id);
+    turn();
+  }
+
+  /** The reader of records is loaded with the first file: most sessions never need it, and the first answer must not wait for it. */
+  async function fetchReader(job: ReadJob): Promise<void> {
+    unread.add(job.id);
+    try {
+      const { readFile: read } = await import('./reading.ts');
+      if (unread.delete(job.id)) queue.push({ job, read });
+      order();
+    } catch (error) {
+      if (unread.delete(job.id)) post({ kind: 'news', outcomes: [failure(job.id, error)], progress: null }, []);
     }
   }
 
   function underHand(job: RunJob): RunUnderHand {
-    if (job.frame) frame = job.frame;
-    if (!frame) throw new TypeError('a run without its frame, and none was sent before');
-    return { job, frame, march: null, steps: FIRST_STEPS, took: 0 };
+    if (job.prepared) prepared = job.prepared;
+    if (!prepared) throw new TypeError('a run without its frame, and none was sent before');
+    return { job, prepared, march: null, steps: FIRST_STEPS, took: 0 };
   }
 
   function turn(): void {
@@ -100,7 +120,7 @@ export function jobs(
       if (!('march' in under)) {
         const { file, bytes, answers } = under.job;
         const before = performance.now();
-        const value = readFile(file, new Uint8Array(bytes), answers);
+        const value = under.read(file, new Uint8Array(bytes), answers);
         transfer.push(...buffersOf(value));
         return { id, kind: 'read', value, took: performance.now() - before };
       }
@@ -109,7 +129,7 @@ export function jobs(
       if (run.histories) transfer.push(...buffersOf(run.histories));
       return { id, kind: 'run', value: run, took: under.took };
     } catch (error) {
-      return { id, kind: 'failed', message: error instanceof Error ? error.message : String(error) };
+      return failure(id, error);
     }
   }
 
@@ -126,27 +146,22 @@ export function jobs(
     return over ? under.march.finish() : null;
   }
 
-  function start({ job, frame }: RunUnderHand): RunUnderWay {
+  function start({ job, prepared }: RunUnderHand): RunUnderWay {
     const acceleration = motions.get(job.motion.samples);
     if (!acceleration) throw new TypeError(`samples ${job.motion.samples} were not sent`);
     const { interval, scale } = job.motion;
     return startRun(
-      ready(frame),
-      { frame, analysis: job.analysis, motion: { interval, scale, acceleration } },
+      prepared,
+      { frame: prepared.frame, analysis: job.analysis, motion: { interval, scale, acceleration } },
       job.want,
     );
   }
 
-  function ready(frame: Frame): PreparedFrame {
-    const known = prepared.get(frame);
-    if (known) return known;
-    const result = prepareFrame(frame);
-    if (!result.ok) throw new RangeError(result.faults.map(faultLine).join(' '));
-    prepared.set(frame, result.value);
-    return result.value;
-  }
-
   return receive;
+}
+
+function failure(id: number, error: unknown): Outcome {
+  return { id, kind: 'failed', message: error instanceof Error ? error.message : String(error) };
 }
 
 function progressOf(under: UnderHand | undefined): { readonly id: number; readonly share: number } | null {

@@ -172,16 +172,16 @@ export function createPool({ size, make, fallback, silent = SILENT }: PoolOption
       transfer.push(bytes);
       return { kind: 'read', id, priority, file: task.file, bytes, answers: task.answers };
     }
-    const { frameKey, frame, analysis, motion, want } = task.request;
+    const { frameKey, prepared, analysis, motion, want } = task.request;
     const known = samples.get(motion.samples);
     if (known && !slot.motions.has(motion.samples)) {
       slot.motions.add(motion.samples);
       const copy = known.slice();
       slot.end.post({ kind: 'motion', digest: motion.samples, samples: copy }, [copy.buffer]);
     }
-    const sent = slot.frameKey === frameKey ? null : frame;
+    const sent = slot.frameKey === frameKey ? null : prepared;
     slot.frameKey = frameKey;
-    return { kind: 'run', id, priority, frame: sent, analysis, motion, want };
+    return { kind: 'run', id, priority, prepared: sent, analysis, motion, want };
   }
 
   function hear(slot: Slot, message: FromWorker): void {

@@ -1,5 +1,5 @@
 import type { Analysis, Run, Want } from '../core/dynamics/run.ts';
-import type { Frame } from '../core/frame/frame.ts';
+import type { PreparedFrame } from '../core/frame/prepare.ts';
 import type { MotionMeasures, RecordAnswers, RecordReading } from '../core/motion/reading.ts';
 
 /**
@@ -9,9 +9,10 @@ import type { MotionMeasures, RecordAnswers, RecordReading } from '../core/motio
 
 /** One frame under one motion; the samples were sent before, by digest. */
 export interface RunRequest {
-  /** Digest of frame: the worker keeps the last prepared frame by it. */
+  /** Digest of the frame: it crosses to a worker once. */
   readonly frameKey: string;
-  readonly frame: Frame;
+  /** Prepared by who asks: its modes are shown anyway, and no worker has to find them again. */
+  readonly prepared: PreparedFrame;
   readonly analysis: Analysis;
   readonly motion: { readonly samples: string; readonly interval: number; readonly scale: number };
   readonly want: Want;
@@ -70,11 +71,11 @@ export interface ReadAnswer {
 }
 
 /** A run as it crosses: without its frame where that is the one that crossed last to this worker. */
-export interface RunJob extends Omit<RunRequest, 'frame' | 'frameKey'> {
+export interface RunJob extends Omit<RunRequest, 'prepared' | 'frameKey'> {
   readonly kind: 'run';
   readonly id: number;
   readonly priority: number;
-  readonly frame: Frame | null;
+  readonly prepared: PreparedFrame | null;
 }
 
 /** A file to read as it crosses; the bytes are transferred. */

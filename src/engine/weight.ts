@@ -15,7 +15,7 @@ const LAW: Readonly<Record<Law['kind'], number>> = {
 const DAMPER = 16;
 
 /** What a run costs, in storey-steps of a linear frame. */
-export function weightOf({ frame, analysis, motion }: RunRequest, samples: number): number {
+export function weightOf({ prepared: { frame }, analysis, motion }: RunRequest, samples: number): number {
   const { step, tail } = analysis;
   const parts = step === 'auto' ? 1 : typeof step === 'number' ? motion.interval / step : step.parts;
   const cost = Math.max(...frame.storeys.map(costOf));

@@ -38,8 +38,8 @@ export function answersOf({ key, case: from }: Question, { runs: found, samplesO
     const values = samplesOf(samples);
     return { name, interval, ...(values ? { lastOverPeak: lastOverPeak(values) } : {}) };
   });
-  const evidence = found.map(({ run, stepError, auto }, i) =>
-    evidenceOf(prepared, run, motions[i].interval, stepError, auto),
+  const evidence = found.map(({ run, stepError, auto, half }, i) =>
+    evidenceOf(prepared, run, motions[i].interval, stepError, auto, half),
   );
   const cautions = cautionsOf({
     envelope,

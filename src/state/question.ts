@@ -46,7 +46,7 @@ export function withHistories(request: RunRequest): RunRequest {
   return { ...request, want: { histories: true } };
 }
 
-function askOf({ frame, prepared, analysis }: Case, motion: Case['motions'][number], frameKey: string): Ask {
+function askOf({ prepared, analysis }: Case, motion: Case['motions'][number], frameKey: string): Ask {
   const { name, samples, interval, scale, count } = motion;
   const { method, step, tail, stopDrift } = analysis;
   const made = new Map<number, RunAsk>();
@@ -59,7 +59,7 @@ function askOf({ frame, prepared, analysis }: Case, motion: Case['motions'][numb
       if (known) return known;
       const request: RunRequest = {
         frameKey,
-        frame,
+        prepared,
         analysis: { ...analysis, step: { parts } },
         motion: { samples, interval, scale },
         want: { histories: false },

@@ -1,6 +1,7 @@
 import type { Analysis } from '../../src/core/dynamics/run.ts';
 import type { Frame } from '../../src/core/frame/frame.ts';
 import type { RunRequest } from '../../src/engine/protocol.ts';
+import { prepared } from '../support/frames.ts';
 
 export function frameOf(storeys: number, stiffness = 1.2e8): Frame {
   return {
@@ -48,7 +49,7 @@ export const ANALYSIS: Analysis = {
 export function requestOf(samples: string, frame: Frame = frameOf(3), histories = false): RunRequest {
   return {
     frameKey: JSON.stringify(frame),
-    frame,
+    prepared: prepared(frame),
     analysis: ANALYSIS,
     motion: { samples, interval: 0.01, scale: 1 },
     want: { histories },

@@ -159,7 +159,8 @@ describe('order and messages', () => {
       const digests = end.received.flatMap((m) => (m.kind === 'motion' ? [m.digest] : []));
       expect(digests.length).toBe(new Set(digests).size);
       for (const work of worksOf(end)) {
-        const frames = work.kind === 'work' ? work.jobs.filter((job) => job.kind === 'run' && job.frame !== null) : [];
+        const frames =
+          work.kind === 'work' ? work.jobs.filter((job) => job.kind === 'run' && job.prepared !== null) : [];
         expect(frames.length).toBe(1);
       }
     }

@@ -273,7 +273,7 @@ describe('never stale as current', () => {
     }
     await at('current');
     const runs = engine.asked.filter(({ question }) => question.startsWith('run '));
-    const asked = new Set(runs.map(({ request }) => request.frame.storeys[0].stiffness));
+    const asked = new Set(runs.map(({ request }) => request.prepared.frame.storeys[0].stiffness));
     expect([...asked]).toEqual([6e7, 8e7]);
     expect(belongs()).toBe(true);
   });

@@ -2,6 +2,7 @@ import type { PreparedFrame } from '../frame/prepare.ts';
 import { methodOf } from './methods.ts';
 import { type Accuracy, modeAccuracy } from './modeAccuracy.ts';
 import type { Run } from './run.ts';
+import { type PeakErrors, peakErrorsOf } from './stepError.ts';
 
 /** How far the numbers of one run can be trusted. */
 export interface Evidence {
@@ -18,6 +19,8 @@ export interface Evidence {
   } | null;
   /** Estimated error of the peak drifts [-]; null while it is not known, and where the run ended early. */
   readonly stepError: number | null;
+  /** The same of the other peaks; null while the run at half the step is out, and where either ended early. */
+  readonly peakErrors: PeakErrors | null;
   /** [-] */
   readonly imbalance: number;
   /** Mean number of solves a step, and most of one step. */
@@ -37,6 +40,7 @@ export interface Evidence {
  * @param interval   of the motion [s]
  * @param stepError  null where it is not known
  * @param auto       how the step was chosen; null where it was typed
+ * @param half       the run at half the step; null while it is out
  */
 export function evidenceOf(
   { modes, dampingRatios }: PreparedFrame,
@@ -44,6 +48,7 @@ export function evidenceOf(
   interval: number,
   stepError: number | null,
   auto: Evidence['auto'] = null,
+  half: Run | null = null,
 ): Evidence {
   const { step, marching, energy } = run;
   const method = methodOf(run.method);
@@ -54,6 +59,7 @@ export function evidenceOf(
     parts: Math.round(interval / step),
     auto,
     stepError,
+    peakErrors: half && !half.ending && !run.ending ? peakErrorsOf(run, half) : null,
     imbalance: energy.imbalance,
     solvesAStep: marching.solves / done,
     mostSolves: marching.mostSolves,

@@ -9,7 +9,28 @@ import type { Run } from './run.ts';
  * @param half  the same case at step h / 2
  */
 export function stepErrorOf(run: Run, half: Run): number {
-  const [at, finer] = [run.storeys.peakDrift, half.storeys.peakDrift];
+  return changeOf(run.storeys.peakDrift, half.storeys.peakDrift);
+}
+
+/** Estimated errors of the other peaks [-], each as `stepErrorOf` has it for drifts: over the largest of its own kind. */
+export interface PeakErrors {
+  readonly shear: number;
+  readonly overturning: number;
+  readonly displacement: number;
+  /** Of total floor accelerations: where storeys yield they come right later than the drifts. */
+  readonly acceleration: number;
+}
+
+export function peakErrorsOf(run: Run, half: Run): PeakErrors {
+  return {
+    shear: changeOf(run.storeys.peakShear, half.storeys.peakShear),
+    overturning: changeOf(run.storeys.peakOverturning, half.storeys.peakOverturning),
+    displacement: changeOf(run.floors.peakDisplacement, half.floors.peakDisplacement),
+    acceleration: changeOf(run.floors.peakAcceleration, half.floors.peakAcceleration),
+  };
+}
+
+function changeOf(at: Float64Array, finer: Float64Array): number {
   let [change, largest] = [0, 0];
   for (let i = 0; i < at.length; i++) {
     change = Math.max(change, Math.abs(at[i] - finer[i]));
