@@ -119,9 +119,7 @@ describe('[BATCH-4] respond', () => {
     const { status, stdout, lines } = respond(folder);
     expect(status).toBe(0);
     expect(lines).toHaveLength(1);
-    expect(lines[0]).toMatch(
-      /did not finish: storey 1 lost its stability at \d\.\d\d s, drift 10\.\d %$/,
-    );
+    expect(lines[0]).toMatch(/did not finish: storey 1 lost its stability at \d\.\d\d s, drift 10\.\d %$/);
     const response = JSON.parse(read(folder, 'response.json'));
     const [run] = response.runs;
     expect(run).toMatchObject({ completed: false, stepError: null, reason: { storey: 1 } });
