@@ -35,7 +35,7 @@ export interface Pace {
   readonly typing: number;
 }
 
-const PACE: Pace = { quick: 50, pause: 120, long: 3000, shown: 400, evidence: 200, typing: 800 };
+const PACE: Pace = { quick: 50, pause: 120, long: 3000, shown: 400, evidence: 200, typing: 250 };
 
 export interface Follower {
   runNow(): void;

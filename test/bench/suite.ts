@@ -4,8 +4,8 @@ import { emptyProject } from '../../src/document/empty.ts';
 import { writeProject } from '../../src/document/file.ts';
 import type { MotionEntry, Project } from '../../src/document/project.ts';
 
-/** A project file of so many equal-looking storeys under so many seeded synthetic motions of 4,000 samples. */
-export function suiteFile(storeys: number, motions: number): string {
+/** A project file of so many equal-looking storeys under so many seeded synthetic motions of 4,000 samples; where they yield, to a ductility of some 2 to 5. */
+export function suiteFile(storeys: number, motions: number, yields = false): string {
   const samples = new Map<string, Float64Array>();
   const entries = Array.from({ length: motions }, (_, i): MotionEntry => {
     const acceleration = syntheticMotion({
@@ -40,7 +40,9 @@ export function suiteFile(storeys: number, motions: number): string {
         height: 3.5,
         mass: 4e5,
         stiffness: 8e8 * (1 - (0.6 * i) / storeys),
-        law: { kind: 'elastic' },
+        law: yields
+          ? { kind: 'bilinear', strength: 6e6 * (1 - (0.6 * i) / storeys), hardening: 0.03 }
+          : { kind: 'elastic' },
       })),
       damping: { kind: 'rayleigh', modes: [1, 3], ratios: [0.05, 0.05] },
       pDelta: false,
