@@ -10,7 +10,7 @@ const executablePath = await findChromium();
 export default defineConfig({
   testDir: '.',
   outputDir: '../test-results',
-  workers: 1,
+  workers: 2,
   retries: 0,
   // Two shared cores: a limit for what hangs, not for what is slow.
   timeout: 180_000,

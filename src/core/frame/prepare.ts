@@ -27,13 +27,16 @@ export function prepareFrame(frame: Frame): Result<PreparedFrame> {
   const faults: Fault[] = [];
   for (let i = 0; i < arrays.n; i++) {
     if (!(arrays.netStiffness[i] > 0)) {
+      // A ratio, so that the sentence holds in whatever units are shown.
+      const share = arrays.gravityAbove[i] / (arrays.height[i] * arrays.stiffness[i]);
+      const isolator = i === 0 && arrays.isolated;
       faults.push({
         code: 'unstable-under-gravity',
         where: `frame.storeys[${i}].stiffness`,
-        message: `storey ${i + 1} is unstable under gravity: its stiffness of ${arrays.stiffness[i].toPrecision(4)} N/m is not above P/h = ${(
-          arrays.gravityAbove[i] / arrays.height[i]
-        ).toPrecision(4)} N/m`,
-        mend: 'Make the storey stiffer, lighten what stands above it, or turn P-Delta off',
+        message: `storey ${i + 1} is unstable under gravity: P/(k h), the load above it over stiffness x height, is ${share.toPrecision(3)} and must stay under 1`,
+        mend: isolator
+          ? 'Make the isolator stiffer or its row taller (h is the height over which the load leans), lighten what stands above it, or turn P-Delta off'
+          : 'Make the storey stiffer, lighten what stands above it, or turn P-Delta off',
       });
     }
   }

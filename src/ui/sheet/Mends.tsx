@@ -38,7 +38,9 @@ export function Mends({ failed, letter, why }: MendsProps) {
       </Button>
       {step !== 'auto' && (
         <Button size="low" aria-label={`Halve the step and try ${letter}`} onClick={halve}>
-          Halve the step<span className="roomy">and try {letter}</span>
+          <span>
+            Halve the step<span className="roomy"> and try {letter}</span>
+          </span>
         </Button>
       )}
       <Popover button={`Leave ${letter} out`} label={`Leave ${letter} out`} className="button plain low" align="right">
