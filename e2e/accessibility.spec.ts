@@ -34,6 +34,8 @@ const PLACES: readonly (readonly [string, (page: Page) => Promise<void>])[] = [
   ['analysis dialog', (page) => page.getByRole('button', { name: /^step / }).click()],
 ];
 
+test.describe.configure({ mode: 'parallel' });
+
 for (const colorScheme of ['light', 'dark'] as const) {
   for (const [place, go] of PLACES) {
     test(`no accessibility violation: ${place}, ${colorScheme}`, async ({ browser, baseURL }) => {
@@ -47,7 +49,10 @@ for (const colorScheme of ['light', 'dark'] as const) {
       await openDemo(page);
       await go(page);
       await page.waitForTimeout(800);
-      const { violations } = await new AxeBuilder({ page }).analyze();
+      const axe = new AxeBuilder({ page });
+      // The dark theme changes colours and nothing else.
+      if (colorScheme === 'dark') axe.withRules(['color-contrast', 'link-in-text-block']);
+      const { violations } = await axe.analyze();
       expect(violations.map(({ id, nodes }) => `${id} at ${nodes[0]?.target.join(' ')}`)).toEqual([]);
       await context.close();
     });

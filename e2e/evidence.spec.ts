@@ -12,7 +12,9 @@ test('the evidence says how good the numbers are, by motion and by mode', async 
   await expect(evidenceLine(page)).toContainText('step error');
   await page.getByRole('button', { name: /^Evidence: / }).click();
   const dialog = page.getByRole('dialog', { name: 'How good are these numbers?' });
-  await expect(dialog).toContainText(/Drifts are converged to 0\.\d %, storey shears to 0\.\d+ % and floor accelerations to 0\.\d %; energy balances to/);
+  await expect(dialog).toContainText(
+    /Drifts are converged to 0\.\d %, storey shears to 0\.\d+ % and floor accelerations to 0\.\d %; energy balances to/,
+  );
   await expect(dialog.getByRole('region', { name: 'Evidence by motion' }).getByRole('row')).toHaveCount(1 + 7);
   await expect(dialog.getByRole('region', { name: /each mode$/ }).getByRole('row')).toHaveCount(1 + 8);
   await page.keyboard.press('Escape');

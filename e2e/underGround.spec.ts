@@ -1,4 +1,3 @@
-import AxeBuilder from '@axe-core/playwright';
 import { expect, type Page, test } from '@playwright/test';
 
 const cursor = (page: Page) => page.getByRole('slider', { name: 'Time cursor' });
@@ -84,25 +83,3 @@ test('a motion left out asks for its reason, and the suite says so', async ({ pa
   await page.getByRole('button', { name: /^Response/ }).click();
   await expect(page.getByText(new RegExp(`${count - 1} of ${count} motions`)).first()).toBeVisible();
 });
-
-for (const theme of ['light', 'dark'] as const) {
-  test(`no accessibility violation under the ground, in the dialogs and on the motions, ${theme}`, async ({ page }) => {
-    const check = async () => expect((await new AxeBuilder({ page }).analyze()).violations).toEqual([]);
-    if (theme === 'dark') await page.getByRole('button', { name: 'Dark' }).click();
-    await expect(page.locator('.plot .main-svg').first()).toBeVisible();
-    await check();
-    for (const open of ['Tables', 'Keys']) {
-      await page.getByRole('button', { name: open, exact: true }).click();
-      await expect(page.getByRole('dialog', { name: open })).toBeVisible();
-      await check();
-      await page.keyboard.press('Escape');
-    }
-    await page.getByRole('button', { name: /^Newmark/ }).click();
-    await expect(page.getByRole('dialog', { name: 'Analysis' })).toBeVisible();
-    await check();
-    await page.keyboard.press('Escape');
-    await page.getByRole('button', { name: /^Motions/ }).click();
-    await expect(page.getByRole('checkbox', { name: /^Use / }).first()).toBeVisible();
-    await check();
-  });
-}

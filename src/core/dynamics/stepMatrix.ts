@@ -3,7 +3,7 @@ import type { FullWork, NonlinearWork } from './nonlinearWork.ts';
 import { FIELD, NOW } from './record.ts';
 
 const { MASS, FLOOR_DASHPOT, STOREY_DASHPOT, MULTIPLIER, PER_PIVOT, INTERCEPT, SLOPE, P_OVER_H, STRIDE } = FIELD;
-const { K, DRIFT, FORCE, DAMPER, EXPONENT, STICK } = FIELD;
+const { K, TANGENT, DRIFT, FORCE, DAMPER, EXPONENT, STICK } = FIELD;
 const { DAMPER_INTERCEPT, DAMPER_SLOPE, LINE, LINE_DRIFT, LINE_RATE, COUPLING } = FIELD;
 const { AM, AF, BETA, GAMMA, H } = NOW;
 
@@ -41,6 +41,7 @@ export function refactor(work: NonlinearWork, from: number): boolean {
 export function freshLines({ n, w }: NonlinearWork): void {
   for (let i = 0, p = 0; i < n; i++, p += STRIDE) {
     w[p + SLOPE] = w[p + K];
+    w[p + TANGENT] = w[p + K];
     w[p + INTERCEPT] = w[p + FORCE] - w[p + K] * w[p + DRIFT];
     freshDamperLine(w, p);
   }
