@@ -346,7 +346,7 @@ function commit(work: NonlinearWork, j: number, settles: boolean): void {
   if (sums[YIELDED] !== 0 && Math.abs(dampingShear) > sums[DAMPING_SHEAR]) sums[DAMPING_SHEAR] = Math.abs(dampingShear);
   if (stopped || !(gap < Number.POSITIVE_INFINITY)) sums[STOPPED] = stopped ? COLLAPSED : DIVERGED;
   // Only a tangent that turns negative can fail here; the next solve then does not converge and says so.
-  else if (dirty >= 0) refactor(work, dirty > 0 ? dirty - 1 : 0);
+  else if (dirty >= 0) renew(work, dirty);
 }
 
 /**
