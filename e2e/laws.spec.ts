@@ -1,5 +1,5 @@
 import { expect, type Page, test } from '@playwright/test';
-import { cell, openDemo, pasteBlock, verdict } from './support.ts';
+import { cell, downloaded, openDemo, pasteBlock, pickFile, verdict } from './support.ts';
 
 const answer = (page: Page, storey: number, what: string) =>
   page.getByRole('gridcell', { name: new RegExp(`^Storey ${storey}, ${what}`) });
@@ -168,4 +168,49 @@ test('a storey unstable under gravity is refused at its cell', async ({ page }) 
   await expect(verdict(page)).toHaveText(/^Out of date/);
   await page.keyboard.press('Escape');
   await expect(verdict(page)).toHaveText(/governs/);
+});
+
+test('a frame of all laws is saved, reloaded and opened again: the same numbers', async ({ page }) => {
+  /** The whole table of storeys under each motion, as the file that is taken away. */
+  const table = async (): Promise<string> => {
+    await page.getByRole('button', { name: 'Tables' }).click();
+    const dialog = page.getByRole('dialog', { name: 'Tables' });
+    await dialog.getByText('N, m, kg').click();
+    await dialog.getByRole('navigation', { name: 'Tables' }).getByRole('button').nth(1).click();
+    const button = dialog.getByRole('button', { name: /^Download storey-response-by-motion/ });
+    await expect(button).toBeEnabled();
+    const { text } = await downloaded(page, () => button.click());
+    await page.keyboard.press('Escape');
+    return text;
+  };
+  await openDemo(page);
+  for (const [storey, law] of [
+    [1, 'Bilinear'],
+    [3, 'Bouc-Wen'],
+    [4, 'Flag'],
+    [8, 'Elastic'],
+  ] as const) {
+    await cell(page, storey, 'law').click();
+    await panel(page)
+      .getByRole('radio', { name: new RegExp(`^${law}`) })
+      .click();
+    await page.keyboard.press('Escape');
+  }
+  await expect(cell(page, 4, 'law')).toHaveAccessibleName(/flag/i);
+  await expect(verdict(page)).toHaveText(/^Storey \d+ governs/);
+  await expect(answer(page, 8, 'ductility')).toHaveText('none');
+  const [shown, numbers] = [await verdict(page).textContent(), await table()];
+  expect(numbers).toMatch(/ductility/i);
+  const project = await downloaded(page, () => page.getByRole('button', { name: 'Save the project file' }).click());
+
+  await page.reload();
+  await expect(verdict(page)).toHaveText(shown ?? '');
+  expect(await table()).toBe(numbers);
+
+  await page.getByRole('button', { name: 'New project' }).click();
+  await expect(verdict(page)).not.toHaveText(/governs/);
+  const file = { name: project.name, mimeType: 'application/json', buffer: Buffer.from(project.text) };
+  await pickFile(page, () => page.getByRole('button', { name: /^Open/ }).first().click(), file);
+  await expect(verdict(page)).toHaveText(shown ?? '');
+  expect(await table()).toBe(numbers);
 });
