@@ -1,7 +1,7 @@
 import type { Project } from './project.ts';
 
 /**
- * The empty sheet: no storey, no motion, 5 % in every mode, average acceleration at each sample, five seconds of free vibration (five
+ * The empty sheet: no storey, no motion, 5 % in every mode, average acceleration at a step found by halving, five seconds of free vibration (five
  * periods of one second, as long as the frame's own is not known), a limit that is only a start.
  */
 export function emptyProject(): Project {
@@ -9,7 +9,7 @@ export function emptyProject(): Project {
     title: '',
     frame: { storeys: [], damping: { kind: 'modal', ratios: [0.05] }, pDelta: false },
     motions: [],
-    analysis: { method: { kind: 'newmark', beta: 0.25, gamma: 0.5 }, step: { parts: 1 }, tail: 5, stopDrift: 0.1 },
+    analysis: { method: { kind: 'newmark', beta: 0.25, gamma: 0.5 }, step: 'auto', tail: 5, stopDrift: 0.1 },
     limits: { drift: 0.02, factor: 1, source: '' },
   };
 }

@@ -33,6 +33,7 @@ export function suiteFile(storeys: number, motions: number, yields = false): str
   });
   const project: Project = {
     ...emptyProject(),
+    analysis: { ...emptyProject().analysis, step: { parts: 1 } },
     title: `Bench, ${storeys} storeys, ${motions} motions`,
     frame: {
       storeys: Array.from({ length: storeys }, (_, i) => ({
