@@ -137,8 +137,15 @@ test('a collapse is named with storey and time; its three mends', async ({ page 
   await leave.click();
   const reason = page.getByRole('textbox', { name: /Why . is left out/ });
   await expect(reason).toBeFocused();
+  await expect(reason).toHaveValue('');
+  await page.keyboard.press('Enter');
+  await expect(reason).toBeVisible();
   await reason.fill('its site is another');
   await page.keyboard.press('Enter');
+  await expect(reason).toHaveCount(0);
+  await expect(page.locator('[role="grid"] :focus')).toHaveCount(1);
+  await page.keyboard.press('Enter');
+  await expect(page.getByRole('button', { name: /^Motions/ })).toContainText('1 left out');
   await expect(page.getByRole('button', { name: `Leave ${letter} out` })).toHaveCount(0);
   await page.keyboard.press('Control+Shift+Digit2');
   await expect(page.getByRole('textbox', { name: /left out/ })).toHaveValue('its site is another');

@@ -8,7 +8,8 @@ export interface PopoverProps {
   readonly label: string;
   readonly className?: string;
   readonly align?: 'left' | 'right';
-  readonly children: ReactNode;
+  /** The controls, or what makes them where one of them closes the panel. */
+  readonly children: ReactNode | ((close: () => void) => ReactNode);
 }
 
 /** A button with a small panel of controls: Esc or a click elsewhere closes it and the focus goes back to the button. */
@@ -60,7 +61,7 @@ export function Popover({ button, label, className = 'button text low', align = 
             anchor.current?.focus();
           }}
         >
-          {children}
+          {typeof children === 'function' ? children(() => setOpen(false)) : children}
         </div>
       )}
     </>

@@ -6,18 +6,17 @@ import type { MotionRun } from '../../state/results.ts';
 import { setSession, setTime } from '../../state/session.ts';
 import { Button } from '../controls/Button.tsx';
 import { commitOpenDraft } from '../controls/field.ts';
+import { focusSheet } from '../controls/focusSheet.ts';
 import { Popover } from '../controls/Popover.tsx';
 
 export interface MendsProps {
   /** The run that did not reach its end. */
   readonly failed: MotionRun;
   readonly letter: string;
-  /** Why, in words: the reason that is offered where the motion is left out. */
-  readonly why: string;
 }
 
 /** What can be done about a motion that did not finish. */
-export function Mends({ failed, letter, why }: MendsProps) {
+export function Mends({ failed, letter }: MendsProps) {
   const { motion, run } = failed;
   const { ending } = run;
   const step = useDocument((state) => state.project.analysis.step);
@@ -43,16 +42,29 @@ export function Mends({ failed, letter, why }: MendsProps) {
           </span>
         </Button>
       )}
-      <Popover button={`Leave ${letter} out`} label={`Leave ${letter} out`} className="button plain low" align="right">
-        <LeaveOut motion={motion} letter={letter} why={why} />
+      <Popover
+        // What was typed of one motion is never said of the next.
+        key={motion}
+        button={`Leave ${letter} out`}
+        label={`Leave ${letter} out`}
+        className="button plain low"
+        align="right"
+      >
+        {(close) => <LeaveOut motion={motion} letter={letter} onDone={close} />}
       </Popover>
     </>
   );
 }
 
-/** A motion is left out for a reason, and the note names both. */
-function LeaveOut({ motion, letter, why }: { readonly motion: string; readonly letter: string; readonly why: string }) {
-  const [reason, setReason] = useState(why);
+interface LeaveOutProps {
+  readonly motion: string;
+  readonly letter: string;
+  readonly onDone: () => void;
+}
+
+/** A motion is left out for a reason that somebody types (that it did not finish is none), and the note names both. */
+function LeaveOut({ motion, letter, onDone }: LeaveOutProps) {
+  const [reason, setReason] = useState('');
   const id = useId();
   const given = reason.trim() !== '';
   return (
@@ -66,16 +78,12 @@ function LeaveOut({ motion, letter, why }: { readonly motion: string; readonly l
           const at = project.motions.findIndex(({ name }) => name === motion);
           return withMotion(project, at, false, reason.trim());
         });
+        onDone();
+        focusSheet();
       }}
     >
       <label htmlFor={id}>Why {letter} is left out; the note says so</label>
-      <input
-        id={id}
-        className="field"
-        value={reason}
-        onFocus={(event) => event.target.select()}
-        onChange={(event) => setReason(event.target.value)}
-      />
+      <input id={id} className="field" value={reason} onChange={(event) => setReason(event.target.value)} />
       <Button kind="primary" size="medium" type="submit" disabled={!given}>
         Leave {letter} out
       </Button>

@@ -53,7 +53,7 @@ export function Verdict({ letters }: VerdictProps) {
     return (
       <Line kind="over stopped" mark headline={verdict.headline} detail={verdict.detail}>
         <Boundary part="What can be done">
-          <Mends failed={failed} letter={letters[failed.motion] ?? failed.motion} why={verdict.detail} />
+          <Mends failed={failed} letter={letters[failed.motion] ?? failed.motion} />
         </Boundary>
       </Line>
     );
