@@ -49,6 +49,7 @@ test('the whole job by keyboard alone: new frame, typed rows, a record, a stiffe
   await expect(dialog.getByRole('button', { name: /^Add 1 record/ })).toBeEnabled();
   await page.keyboard.press('Control+Enter');
   await expect(dialog).toBeHidden();
+  expect(await focused(page)).toMatch(/^Storey \d/);
   await expect(verdict(page)).toHaveText(/^Storey \d governs/);
   // The cursor, play and pause, the motion's peak; then the tables.
   await tabTo(/^Time cursor|^Ground motion/);

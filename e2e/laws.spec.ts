@@ -154,7 +154,11 @@ test('a collapse is named with storey and time; its three mends', async ({ page 
 test('an isolator under the frame: by the panel, named, with a limit of its own', async ({ page }) => {
   await openDemo(page);
   await cell(page, 1, 'law').click();
-  await panel(page).getByRole('checkbox', { name: 'Isolator' }).check();
+  const box = panel(page).getByRole('checkbox', { name: 'Isolator' });
+  await box.check();
+  await page.keyboard.press('Control+Z');
+  await expect(box).not.toBeChecked();
+  await box.check();
   await expect(page.getByRole('rowheader', { name: /isolator/ })).toHaveCount(1);
   await panel(page)
     .getByRole('textbox', { name: /isolator displacement/ })

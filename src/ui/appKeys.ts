@@ -9,6 +9,10 @@ export interface AppActions {
   readonly save: () => void;
 }
 
+/** What text is typed into, and lists whose letters choose: a checkbox or a slider has no undo of its own to keep. */
+const TEXT_LIKE =
+  'input:not([type="checkbox"], [type="radio"], [type="range"], [type="button"], [type="file"]), textarea, select';
+
 /** Keys that work anywhere. Fields keep the ones they need for themselves. */
 export function appKey(event: KeyboardEvent, actions: AppActions): void {
   if (event.defaultPrevented || document.querySelector('dialog[open]') !== null) return;
@@ -16,7 +20,7 @@ export function appKey(event: KeyboardEvent, actions: AppActions): void {
 }
 
 function take(event: KeyboardEvent, actions: AppActions): boolean {
-  const field = event.target instanceof HTMLElement && event.target.matches('input, textarea, select');
+  const field = event.target instanceof HTMLElement && event.target.matches(TEXT_LIKE);
   const control = event.ctrlKey || event.metaKey;
   if (control && event.shiftKey && /^Digit[123]$/.test(event.code)) {
     setSession({ screen: event.code === 'Digit2' ? 'motions' : 'sheet' });

@@ -1,5 +1,6 @@
 import { type ReactNode, useEffect, useId, useRef } from 'react';
 import { IconButton } from './Button.tsx';
+import { focusSheet } from './focusSheet.ts';
 
 export interface DialogProps {
   readonly title: string;
@@ -39,6 +40,12 @@ export function Dialog({ title, onClose, width = 560, foot, sticky = false, chil
       keep.disconnect();
       dialog?.close();
       if (before instanceof HTMLElement || before instanceof SVGElement) before.focus();
+      // What opened it may be gone with what was done in it, now or once the page is drawn again.
+      const lost = () => document.activeElement === document.body || document.activeElement === null;
+      if (lost()) focusSheet();
+      requestAnimationFrame(() => {
+        if (lost()) focusSheet();
+      });
     };
   }, []);
   return (

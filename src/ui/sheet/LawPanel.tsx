@@ -174,7 +174,8 @@ const STOPS = 'button:not(:disabled):not([tabindex="-1"]), input:not(:disabled)'
 
 /** Esc closes; Tab goes round in the panel; Enter on a law that is chosen is the end of it. */
 function panelKey(event: KeyboardEvent, panel: HTMLElement | null, onClose: () => void): void {
-  event.stopPropagation();
+  // Undo, redo and save are the app's.
+  if (!event.ctrlKey && !event.metaKey) event.stopPropagation();
   const { target } = event;
   if (
     event.key === 'Escape' ||
