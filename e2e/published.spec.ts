@@ -42,6 +42,7 @@ test('the published five-storey frame, typed in and shaken by the record through
   // A step of an eighth of the interval: the fifth mode then has 119 steps a period.
   await page.getByRole('button', { name: /^step / }).click();
   const analysis = page.getByRole('dialog');
+  await analysis.getByText('Parts of each interval').click();
   await analysis.getByRole('textbox', { name: /Parts of the interval/ }).fill('8');
   await page.keyboard.press('Enter');
   await page.keyboard.press('Escape');

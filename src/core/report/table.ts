@@ -23,6 +23,12 @@ export interface Table {
   readonly columns: readonly Column[];
 }
 
+/** Decimals that show three figures of each value, and no more than it has: 2 of 0.01, 4 of 0.0025. */
+export function decimalsOf(values: readonly number[]): number {
+  const decimals = (value: number) => String(Number(value.toPrecision(3))).split('.')[1]?.length ?? 0;
+  return Math.max(0, ...values.map(decimals));
+}
+
 /** Values of ground-up arrays from the roof down, as the sheet shows them; nulls where there is none (NaN, what is not finite). */
 export function roofFirst(values: ArrayLike<number | null> | null | undefined, n: number): Cell[] {
   return Array.from({ length: n }, (_, row) => {

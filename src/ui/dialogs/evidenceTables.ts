@@ -1,9 +1,8 @@
 import type { Evidence } from '../../core/dynamics/evidence.ts';
 import type { Mode } from '../../core/frame/modes.ts';
-import type { Column, Table } from '../../core/report/table.ts';
+import { type Column, decimalsOf, type Table } from '../../core/report/table.ts';
 import type { Answers } from '../../state/results.ts';
 import { letterOf } from '../controls/letters.ts';
-import { shortSeconds } from './shortSeconds.ts';
 
 /** The steps that the runs of an answer took, each with the motions that took it, finest first. */
 export interface StepGroup {
@@ -143,9 +142,4 @@ export function modeEvidence(modes: readonly Mode[], { modes: accuracy }: Eviden
       ),
     ],
   };
-}
-
-/** Decimals that show three figures of each, none more than it has. */
-function decimalsOf(seconds: readonly number[]): number {
-  return Math.max(0, ...seconds.map((value) => shortSeconds(value).split('.')[1]?.length ?? 0));
 }

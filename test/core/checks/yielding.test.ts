@@ -51,6 +51,27 @@ const codesOf = (
   }).map(({ code, text }) => `${code}: ${text}`);
 const having = (list: string[], code: string) => list.filter((line) => line.startsWith(`${code}:`));
 
+describe('[CHK-6] a storey that comes down once it yields', () => {
+  const runs = suiteOf(yielding(), 1);
+  /** P/(k h) of the first storey, by its gravity load. */
+  const leaning = (share: number): Frame => {
+    const frame = yielding();
+    const [first, ...rest] = frame.storeys.map((storey) => ({ ...storey, gravity: 0 }));
+    return {
+      ...frame,
+      pDelta: true,
+      storeys: [{ ...first, gravity: share * first.stiffness * first.height }, ...rest],
+    };
+  };
+  test('is said where P-Delta takes more than hardening gives, and not beside it', () => {
+    expect(having(codesOf(leaning(0.031), runs), 'softens-past-yield')).toEqual([
+      'softens-past-yield: Storey 1: past yield P-Delta takes more than hardening gives, P/(k h) 3.1 % against 3.0 %',
+    ]);
+    expect(having(codesOf(leaning(0.029), runs), 'softens-past-yield')).toEqual([]);
+    expect(having(codesOf({ ...leaning(0.031), pDelta: false }, runs), 'softens-past-yield')).toEqual([]);
+  });
+});
+
 describe('[CHK-5] an isolator', () => {
   const runs = suiteOf(isolated, 3);
   const moves = (i: number) => runs[i].run.storeys.peakDrift[0];
@@ -67,6 +88,17 @@ describe('[CHK-5] an isolator', () => {
     expect(envelopeOf(runs, limits, [], yielding()).isolator).toBeNull();
     const { isolator } = envelopeOf(runs, { ...limits, isolator: 0.2, factor: 0.5 }, [], isolated);
     expect(isolator?.ratio).toBeCloseTo(largest / 0.2, 12);
+  });
+  test('without a limit, or with nothing that damps it, is cautioned', () => {
+    expect(having(codesOf(isolated, runs), 'isolator-without-limit')).toHaveLength(1);
+    expect(having(codesOf(isolated, runs, {}, { ...limits, isolator: 0.2 }), 'isolator-without-limit')).toEqual([]);
+    expect(having(codesOf(isolated, runs), 'isolator-undamped')).toEqual([]);
+    const law = { kind: 'elastic' } as const;
+    const bare = { ...isolated, storeys: isolated.storeys.map((storey) => ({ ...storey, law })) };
+    expect(having(codesOf(bare, runs), 'isolator-undamped')).toHaveLength(1);
+    const [first, ...rest] = bare.storeys;
+    const damped = { ...bare, storeys: [{ ...first, damper: { coefficient: 1e5, exponent: 1 } }, ...rest] };
+    expect(having(codesOf(damped, runs), 'isolator-undamped')).toEqual([]);
   });
   test('over its limit is said first, and governs where it is worse than the storeys', () => {
     const tight = { ...limits, drift: 0.9, isolator: largest / 1.07 };

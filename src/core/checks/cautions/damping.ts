@@ -57,6 +57,7 @@ function forceCautions({ runs, prepared: { frame } }: CautionInput): Caution[] {
     if (share > worst) [worst, who] = [share, motion];
   }
   if (who === '') return [];
-  const text = `Damping on the initial stiffness carries up to ${percent(worst, 0)} of the peak base shear while storeys are past yield, in ${who}: compare with damping on the tangent stiffness`;
+  const compare = damping.kind === 'rayleigh' ? 'damping on the tangent stiffness' : 'less damping';
+  const text = `Damping on the initial stiffness carries up to ${percent(worst, 0)} of the peak base shear while storeys are past yield, in ${who}: compare with ${compare}`;
   return [{ code: 'damping-carries-shear', text, cause: { kind: 'damping' } }];
 }

@@ -10,7 +10,45 @@ const STILL_MOVING = 0.05;
 
 /** Drift that gathers, frames that still move at the end, and drifts that the model does not reach. */
 export function storeyCautions(input: CautionInput): Caution[] {
-  return [...gathering(input), ...moving(input), ...beyondLinear(input)];
+  return [...softening(input), ...isolator(input), ...gathering(input), ...moving(input), ...beyondLinear(input)];
+}
+
+/**
+ * A storey whose post-yield stiffness is less than P-Delta takes comes down once it yields: h < P / (k h). Statics of a storey;
+ * published check F2 on the post-yield branch.
+ */
+function softening({ prepared: { frame, arrays } }: CautionInput): Caution[] {
+  const down = indices(frame.storeys.length, (i) => {
+    const { law } = frame.storeys[i];
+    return law.kind !== 'elastic' && law.hardening * arrays.stiffness[i] < arrays.gravityAbove[i] / arrays.height[i];
+  });
+  if (down.length === 0) return [];
+  const share = (i: number) => arrays.gravityAbove[i] / (arrays.height[i] * arrays.stiffness[i]);
+  const worst = down.reduce((at, i) => (share(i) > share(at) ? i : at));
+  const { law } = frame.storeys[worst];
+  const hardening = law.kind === 'elastic' ? 0 : law.hardening;
+  const others = down.length > 1 ? `, and ${down.length - 1} more` : '';
+  const text = `Storey ${worst + 1}${others}: past yield P-Delta takes more than hardening gives, P/(k h) ${percent(share(worst), 1)} against ${percent(hardening, 1)}`;
+  return [{ code: 'softens-past-yield', text, cause: { kind: 'storey', storey: worst } }];
+}
+
+/** An isolator that nothing is compared with, and one that nothing damps (it is left out of Rayleigh damping; project-file page, Roles). */
+function isolator({ prepared: { frame }, limits }: CautionInput): Caution[] {
+  const [first] = frame.storeys;
+  if (first?.role !== 'isolator') return [];
+  const cause = { kind: 'storey', storey: 0 } as const;
+  const out: Caution[] = [];
+  if (limits.isolator === undefined) {
+    const text = 'Isolator displacement is compared with nothing: no limit is typed';
+    out.push({ code: 'isolator-without-limit', text, cause });
+  }
+  const damped = first.law.kind !== 'elastic' || (first.damper?.coefficient ?? 0) > 0 || frame.damping.kind === 'modal';
+  if (!damped) {
+    const text =
+      'Nothing damps the isolator: its law is elastic, it has no damper, and damping of the frame leaves it out';
+    out.push({ code: 'isolator-undamped', text, cause });
+  }
+  return out;
 }
 
 function gathering({ envelope: { drift, measure }, prepared }: CautionInput): Caution[] {

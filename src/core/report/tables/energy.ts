@@ -1,6 +1,6 @@
 import { endingWords } from '../../checks/verdict.ts';
 import { type ReportRun, type ReportSource, yields } from '../source.ts';
-import type { Cell, Column, Table } from '../table.ts';
+import { type Cell, type Column, decimalsOf, type Table } from '../table.ts';
 
 /** Energies at the end of each run, of relative motion, with the evidence that the step was small enough. */
 export function energyBalance({ prepared, runs }: ReportSource): Table {
@@ -22,7 +22,10 @@ export function energyBalance({ prepared, runs }: ReportSource): Table {
       column('dampers', 'Dampers', 'energy', ({ run }) => run.energy.dampers),
       column('hysteretic', 'Hysteretic', 'energy', ({ run }) => run.energy.hysteretic),
       column('imbalance', 'Largest imbalance', 'percent', ({ run }) => run.energy.imbalance),
-      column('step', 'Step', 'time', ({ run }) => run.step),
+      {
+        ...column('step', 'Step', 'time', ({ run }) => run.step),
+        decimals: decimalsOf(runs.map(({ run }) => run.step)),
+      },
       ...(runs.some(({ stepWhy }) => stepWhy !== undefined)
         ? [column('stepWhy', 'Why this step', 'text', ({ stepWhy }) => stepWhy ?? null)]
         : []),

@@ -5,7 +5,7 @@ import type { Damping, Storey } from '../../frame/frame.ts';
 import { STANDARD_GRAVITY } from '../../units/constants.ts';
 import type { Quantity } from '../../units/quantities.ts';
 import type { ReportMotion, ReportSource } from '../source.ts';
-import { type Cell, type Column, roofFirst, type Table } from '../table.ts';
+import { type Cell, type Column, decimalsOf, roofFirst, type Table } from '../table.ts';
 import { storeyColumns } from './storeyColumns.ts';
 
 /** The storeys as they were computed, roof first. What no storey of the frame has is left out. */
@@ -87,7 +87,10 @@ export function motionInputs({ motions }: ReportSource): Table {
       column('motion', 'Motion', 'text', ({ name }) => name),
       column('used', 'Used', 'text', ({ used }) => (used ? 'yes' : 'no')),
       column('reason', 'Reason for leaving out', 'text', ({ reason }) => reason ?? null),
-      column('interval', 'Interval', 'time', ({ interval }) => interval),
+      {
+        ...column('interval', 'Interval', 'time', ({ interval }) => interval),
+        decimals: decimalsOf(motions.map(({ interval }) => interval)),
+      },
       column('samples', 'Samples', 'count', ({ count }) => count),
       column('scale', 'Scale', 'ratio', ({ scale }) => scale),
       column('peak', 'Peak as read', 'acceleration', ({ peakAcceleration }) => peakAcceleration),
