@@ -3,7 +3,7 @@ import { queueDraw } from './drawQueue.ts';
 import { clearPlot, drawPlot, type PlotSpec } from './plotly.ts';
 
 export interface PlotProps {
-  /** Makes what is to be drawn, when its turn comes; null: nothing to draw yet. A new function is a new drawing. */
+  /** Makes what is to be drawn, when its turn comes; null: nothing, and what was drawn goes. A new function is a new drawing. */
   readonly spec: (() => PlotSpec | null) | null;
   /** What it shows, in a sentence. */
   readonly label: string;
@@ -17,15 +17,29 @@ export function Plot({ spec, label, old = false }: PlotProps) {
   const [failed, setFailed] = useState(false);
   useEffect(() => {
     const element = place.current;
-    if (element === null || spec === null) return;
-    return queueDraw(element, async () => {
+    if (element === null) return;
+    if (spec === null) {
+      clearPlot(element);
+      return;
+    }
+    let wanted = true;
+    const withdraw = queueDraw(element, async () => {
+      if (!wanted) return;
       const made = spec();
-      if (made === null) return;
+      if (made === null) {
+        clearPlot(element);
+        return;
+      }
       await drawPlot(element, made).then(
         () => setFailed(false),
         () => setFailed(true),
       );
     });
+    return () => {
+      // Its turn may have come already: it is out of the queue, and not drawn yet.
+      wanted = false;
+      withdraw();
+    };
   }, [spec]);
   useEffect(() => {
     const element = place.current;
@@ -35,7 +49,10 @@ export function Plot({ spec, label, old = false }: PlotProps) {
   }, []);
   return (
     <>
-      <div ref={place} className={`plot ${old ? 'old' : ''}`} role="img" aria-label={label} />
+      <div className={`plot ${old ? 'old' : ''}`} role="img" aria-label={label}>
+        {/* The library keeps classes of its own on its element: nothing else may write there. */}
+        <div ref={place} />
+      </div>
       {failed && (
         <p className="plot-failed small quiet">The plots could not be loaded: reload the page. The numbers stand.</p>
       )}

@@ -17,7 +17,7 @@ export interface ShownRun {
 
 /**
  * The chosen motion's run with histories. While a newer one is on its way the last one stays, with the motion and storey that
- * it belongs to; once the frame has another number of storeys, none is shown. The panels follow the bars: theirs is a rendering
+ * it belongs to; once there are no answers, or the frame has another number of storeys, none is shown. The panels follow the bars: theirs is a rendering
  * of its own, after the answers stand on the sheet.
  */
 export function useShownRun(): { readonly shown: ShownRun | null; readonly old: boolean } {
@@ -33,7 +33,8 @@ export function useShownRun(): { readonly shown: ShownRun | null; readonly old: 
     return { motion, run: chosen.run, answers, storey: Math.min(storey, heights.length - 1), heights };
   }, [chosen, answers, motion, storey]);
   const last = useRef(shown);
-  if (shown !== null) last.current = shown;
+  // No answers at all: another document, in which nothing was run yet.
+  if (shown !== null || answers === null) last.current = shown;
   const kept =
     answers !== null && last.current?.heights.length === answers.case.frame.storeys.length ? last.current : null;
   const late = useLate(shown === null);
