@@ -11,6 +11,18 @@ export interface Fault {
   readonly message: string;
   /** What to do about it, in one sentence. */
   readonly mend: string;
+  /** Where a number is out of its range: the numbers of the sentence, so that they can be said in other units. */
+  readonly range?: Range;
+}
+
+export type RangeRule = 'above' | 'at least' | 'below' | 'at most' | 'possible';
+
+/** A number [SI] and what it must be: `above` a bound, or `possible`, which is within what any building has. */
+export interface Range {
+  readonly value: number;
+  readonly rule: RangeRule;
+  /** [SI] */
+  readonly bound: number;
 }
 
 export type Result<T> =

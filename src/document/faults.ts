@@ -1,5 +1,6 @@
 import type * as z from 'zod/mini';
-import type { Fault } from '../core/fault.ts';
+import type { Fault, RangeRule } from '../core/fault.ts';
+import { typeWords } from './faultWords.ts';
 
 /** All that a schema found wrong, as faults with place and mend. `from` is the object that was checked, `at` where it stands. */
 export function faultsOf(error: z.core.$ZodError, from: unknown, at = ''): Fault[] {
@@ -48,7 +49,7 @@ function faultsOfIssue(issue: Issue, from: unknown, at: string): Fault[] {
 }
 
 function outOfRange(issue: Extract<Issue, { code: 'too_small' | 'too_big' }>, where: string, value: unknown): Fault {
-  const [bound, side, open] =
+  const [bound, side, open]: [number, Exclude<RangeRule, 'possible'>, boolean] =
     issue.code === 'too_small'
       ? [Number(issue.minimum), issue.inclusive ? 'at least' : 'above', !issue.inclusive]
       : [Number(issue.maximum), issue.inclusive ? 'at most' : 'below', !issue.inclusive];
@@ -63,12 +64,13 @@ function outOfRange(issue: Extract<Issue, { code: 'too_small' | 'too_big' }>, wh
     return fault('wrong-count', where, `has ${count} ${what}, must have ${side} ${bound}`, mend);
   }
   const code = bound === 0 && open ? 'not-positive' : 'out-of-range';
-  return fault(
+  const words = fault(
     code,
     where,
     `is ${shown(value)}, must be ${side} ${short(bound)}`,
-    `Type a number ${side === 'above' || side === 'below' ? side : `of ${side}`} ${short(bound)}`,
+    typeWords(side, short(bound)),
   );
+  return typeof value === 'number' ? { ...words, range: { value, rule: side, bound } } : words;
 }
 
 function wanted(issue: Issue): string {

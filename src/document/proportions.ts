@@ -30,6 +30,7 @@ export function proportionFaults(storeys: readonly unknown[]): Fault[] {
         where: `frame.storeys[${i}].${key}`,
         message,
         mend: 'Check its figures and unit',
+        range: { value, rule: 'possible', bound: value < LEAST ? LEAST : MOST },
       });
     }
     if (isPossible(mass) && isPossible(stiffness)) rows.push({ mass, stiffness });

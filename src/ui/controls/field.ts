@@ -1,6 +1,7 @@
 import type { Fault } from '../../core/fault.ts';
 import { printQuantity, printTyped, type Quantity, type System } from '../../core/units/quantities.ts';
 import { readQuantity } from '../../core/units/read.ts';
+import { faultAndMend } from '../../document/faultWords.ts';
 import { fieldOf, readAt } from '../../document/fields.ts';
 import type { Project, Typed } from '../../document/project.ts';
 import { commitDraft, documentStore, setDraft } from '../../state/document.ts';
@@ -90,21 +91,6 @@ function stepLabel(project: Project, path: string, value: Typed, system: System)
   return `${fieldOf(path).label(project)} ${say(readAt(project, path))} to ${say(value)}`;
 }
 
-/** A fault as one sentence with its place: "storey 3, height is not typed yet". */
-export function faultSentence(project: Project, { where, message }: Fault): string {
-  return `${placeWords(project, where)} ${message}`;
-}
-
-function placeWords(project: Project, where: string): string {
-  try {
-    const label = fieldOf(where).label(project);
-    return label.charAt(0).toLowerCase() + label.slice(1);
-  } catch {
-    // A place that nobody types into, such as the frame as a whole.
-    return where;
-  }
-}
-
 /** Gives up the edit of a field. */
 export function giveUpField(path: string): void {
   if (documentStore.getState().draft?.path === path) setDraft(null);
@@ -143,5 +129,5 @@ export function wordsOf(project: Project, path: string, system: System, fault: F
     }
     if (reading.kind === 'unreadable') return `${reading.why}: ${reading.mend}`;
   }
-  return fault === undefined ? null : `${fault.message}: ${fault.mend}`;
+  return fault === undefined ? null : faultAndMend(fault, system);
 }

@@ -1,5 +1,7 @@
 import type { ReactNode } from 'react';
 import type { Fault } from '../../core/fault.ts';
+import { faultWords } from '../../document/faultWords.ts';
+import { useSession } from '../../state/session.ts';
 
 export interface SectionProps {
   readonly title: string;
@@ -67,14 +69,18 @@ export function Faults({
   readonly shown?: readonly string[];
 }) {
   const here = faults.filter(({ where }) => where.startsWith(under) && !shown.includes(where));
+  const system = useSession((state) => state.system);
   if (here.length === 0) return null;
   return (
     <ul className="subject-faults">
-      {here.map(({ where, message, mend }) => (
-        <li key={where + message}>
-          {message}. {mend}.
-        </li>
-      ))}
+      {here.map((fault) => {
+        const { message, mend } = faultWords(fault, system);
+        return (
+          <li key={fault.where + message}>
+            {message}. {mend}.
+          </li>
+        );
+      })}
     </ul>
   );
 }

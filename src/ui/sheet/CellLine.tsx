@@ -1,6 +1,7 @@
 import type { Fault } from '../../core/fault.ts';
 import { printQuantity, type System, unitOf } from '../../core/units/quantities.ts';
 import { cellFacts } from '../../document/cellFacts.ts';
+import { faultAndMend } from '../../document/faultWords.ts';
 import { fieldOf, readAt } from '../../document/fields.ts';
 import type { Project } from '../../document/project.ts';
 import { documentStore, useDocument } from '../../state/document.ts';
@@ -54,9 +55,7 @@ export function CellLine({ project, system, cell, faults, onEdit }: CellLineProp
         {fault === undefined ? (
           <span className="fact">{cellFacts(project, path, system) || 'Enter chooses another law'}</span>
         ) : (
-          <span className="wrong">
-            {fault.message}: {fault.mend}
-          </span>
+          <span className="wrong">{faultAndMend(fault, system)}</span>
         )}
       </>
     );

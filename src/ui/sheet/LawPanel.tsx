@@ -1,5 +1,6 @@
 import { type KeyboardEvent, useEffect, useId, useLayoutEffect, useRef, useState } from 'react';
 import { cellFacts } from '../../document/cellFacts.ts';
+import { faultAndMend } from '../../document/faultWords.ts';
 import type { Typed } from '../../document/project.ts';
 import { effectiveProject, useDocument } from '../../state/document.ts';
 import { useResults } from '../../state/results.ts';
@@ -111,7 +112,7 @@ export function LawPanel({ storey, onClose }: LawPanelProps) {
       </div>
       <p className="law-facts">
         {others.length > 0 ? (
-          <span className="field-words">{others.map(({ message, mend }) => `${message}: ${mend}`).join('; ')}</span>
+          <span className="field-words">{others.map((fault) => faultAndMend(fault, system)).join('; ')}</span>
         ) : (
           cellFacts(project, path, system)
         )}

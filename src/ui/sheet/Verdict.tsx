@@ -1,12 +1,14 @@
 import { useEffect, useState } from 'react';
 import { verdictOf } from '../../core/checks/verdict.ts';
 import type { Fault } from '../../core/fault.ts';
+import type { System } from '../../core/units/quantities.ts';
+import { faultSentence } from '../../document/faultWords.ts';
 import type { Project } from '../../document/project.ts';
 import { edit, useDocument } from '../../state/document.ts';
 import { runNow, stop, useResults } from '../../state/results.ts';
+import { useSession } from '../../state/session.ts';
 import { Boundary } from '../controls/Boundary.tsx';
 import { Button } from '../controls/Button.tsx';
-import { faultSentence } from '../controls/field.ts';
 import { CautionMark, Icon } from '../controls/Icon.tsx';
 import { Mends } from './later.ts';
 
@@ -23,11 +25,16 @@ export function Verdict({ letters }: VerdictProps) {
   const changed = useResults((state) => state.changed);
   const faults = useResults((state) => state.faults);
   const project = useDocument((state) => state.project);
+  const system = useSession((state) => state.system);
 
   if (status === 'running' && slow) return <Running />;
   if (status === 'empty' || answers === null) {
     return (
-      <Line kind="quiet-verdict" headline="Nothing to check yet" detail={missing(project) ?? why(project, faults)} />
+      <Line
+        kind="quiet-verdict"
+        headline="Nothing to check yet"
+        detail={missing(project) ?? why(project, faults, system)}
+      />
     );
   }
   if (status === 'stale') {
@@ -35,7 +42,7 @@ export function Verdict({ letters }: VerdictProps) {
       <Line
         kind="old"
         headline={`Out of date${changed === null ? '' : `: ${inSentence(changed)}`}`}
-        detail={waits ? '' : why(project, faults)}
+        detail={waits ? '' : why(project, faults, system)}
       >
         {waits && (
           <Button kind="primary" size="medium" onClick={runNow}>
@@ -90,10 +97,10 @@ function inSentence(label: string): string {
   return label.charAt(0).toLowerCase() + label.slice(1);
 }
 
-function why(project: Project, faults: readonly Fault[]): string {
+function why(project: Project, faults: readonly Fault[], system: System): string {
   const first = faults[0];
   if (first === undefined) return 'the answers are those of the last run';
-  return `${faultSentence(project, first)}${faults.length > 1 ? `; ${faults.length} things to settle` : ''}`;
+  return `${faultSentence(project, first, system)}${faults.length > 1 ? `; ${faults.length} things to settle` : ''}`;
 }
 
 interface LineProps {
