@@ -17,6 +17,7 @@ import { lendingTo } from './lending.ts';
 import { type Ask, type Question, questionOf, type RunAsk, withHistories } from './question.ts';
 import { recentRuns } from './recent.ts';
 import { sessionStore } from './session.ts';
+import { standingFrame } from './standing.ts';
 import { stepSearch } from './stepSearch.ts';
 import { timer } from './timer.ts';
 
@@ -81,7 +82,7 @@ export function follow(
     search.forgetFailures();
     const nothing = now.frame.storeys.length === 0 || !now.motions.some((motion) => motion.used);
     question = result.ok && !nothing ? questionOf(result.value) : null;
-    swaying = result.ok && now.frame.storeys.length > 0 ? result.value.prepared : null;
+    swaying = standingFrame(now, result);
     cancelUnwanted();
     if (nothing) {
       rest({ status: 'empty', answers: null, chosen: null, stepErrors: null, changed: null, faults: faultsOf(result) });

@@ -303,6 +303,23 @@ describe('never stale as current', () => {
 });
 
 describe('nothing to compute', () => {
+  it('a fault beside the frame leaves its modes; one in it takes them', async () => {
+    begin();
+    await at('current');
+    const before = now().modes?.map(({ period }) => period);
+    const { project } = suite;
+    for (const change of [
+      { analysis: { ...project.analysis, step: { parts: 0 } } },
+      { frame: { ...project.frame, damping: { kind: 'modal' as const, ratios: [-1] } } },
+    ]) {
+      edit('a fault', () => ({ ...project, ...change }));
+      expect(now().status).toBe('stale');
+      expect(now().modes?.map(({ period }) => period)).toEqual(before);
+    }
+    edit('a fault in the frame', () => withStorey(project, 1, { stiffness: -1 }));
+    expect(now()).toMatchObject({ status: 'stale', modes: null });
+  });
+
   it('no motion in use: modes and no answers; the first motion answers', async () => {
     begin({ ...suite.project, motions: [] });
     expect(now()).toMatchObject({ status: 'empty', answers: null, chosen: null });

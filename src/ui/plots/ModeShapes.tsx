@@ -17,14 +17,16 @@ export interface ModeShapesProps {
   readonly layout: SquareLayout;
   readonly tokens: Tokens;
   readonly system: System;
-  readonly old: boolean;
 }
 
 /** Widths of a shape take so much of the panel each [px]. */
 const ROOM = 88;
 
-/** The first modes side by side, on the levels of the building, with period and share of the mass. */
-export function ModeShapes({ layout, tokens, system, old }: ModeShapesProps) {
+/**
+ * The first modes side by side, on the levels of the building, with period and share of the mass. They are those of the frame
+ * as it stands, and so never out of date with the runs.
+ */
+export function ModeShapes({ layout, tokens, system }: ModeShapesProps) {
   const modes = useResults((state) => state.modes);
   const project = useDocument(effectiveProject);
   const size = plotSize(layout);
@@ -46,8 +48,8 @@ export function ModeShapes({ layout, tokens, system, old }: ModeShapesProps) {
       legend={<span>shapes to their largest floor</span>}
       table={modes === null || levels === null ? null : () => modesTable(modes, levels)}
     >
-      <Plot spec={spec} label={sentence(modes)} old={old} />
-      {spec === null && <p className="nothing quiet small">No frame that stands yet.</p>}
+      <Plot spec={spec} label={sentence(modes)} />
+      {modes === null && <p className="nothing quiet small">No frame that stands yet.</p>}
     </SquareFrame>
   );
 }

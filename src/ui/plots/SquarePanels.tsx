@@ -44,7 +44,7 @@ function Square({ kind, layout }: { readonly kind: SquareKind; readonly layout: 
     case 'force':
       return <ForceDrift {...common} shown={shown} />;
     case 'modes':
-      return <ModeShapes {...common} />;
+      return <ModeShapes layout={layout} tokens={tokens} system={system} />;
     case 'damping':
       return <DampingByPeriod {...common} />;
     case 'profile':
