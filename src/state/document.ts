@@ -3,6 +3,7 @@ import { createStore } from 'zustand/vanilla';
 import { emptyProject } from '../document/empty.ts';
 import { writeAt } from '../document/fields.ts';
 import type { Project, Typed } from '../document/project.ts';
+import { setSession } from './session.ts';
 import { type Counts, type History, NO_HISTORY, record, stepBack, stepForward, type Travelled } from './undo.ts';
 
 export type { Counts } from './undo.ts';
@@ -75,9 +76,10 @@ export function redo(): void {
   travel(stepForward(history, documentStore.getState().project));
 }
 
-/** Another project takes the place of this one (open, new, demo): undoable as one step. */
+/** Another project takes the place of this one (open, new, demo): undoable as one step. What was chosen in the old one is let go. */
 export function replace(label: string, project: Project): void {
   commit(label, () => project, { kind: 'step' }, null);
+  setSession({ time: 0, range: null, playing: false, storey: null, motion: null });
 }
 
 /** The kept document of the last session, or the demo: no undo step, nothing to take back. */

@@ -12,6 +12,7 @@ import {
   setDraft,
   undo,
 } from '../../src/state/document.ts';
+import { sessionStore, setSession } from '../../src/state/session.ts';
 import { projectOf, withStorey } from './projects.ts';
 
 const start = projectOf(3).project;
@@ -122,6 +123,12 @@ describe('undo and redo', () => {
     expect(now().project).toBe(other);
     undo();
     expect(now().project).toBe(start);
+  });
+
+  it('another project begins at its own beginning', () => {
+    setSession({ time: 12.5, range: [10, 14], playing: true, storey: 3, motion: 'B' });
+    replace('open other', projectOf(5).project);
+    expect(sessionStore.getState()).toMatchObject({ time: 0, range: null, playing: false, storey: null, motion: null });
   });
 });
 
