@@ -169,6 +169,14 @@ test('an isolator under the frame: by the panel, named, with a limit of its own'
     /displacement \d+ mm, limit 80 mm, \d\.\d\d of its limit/,
   );
   await expect(page.getByRole('img', { name: /^Peak drift ratio/ })).toContainText(/limit 80 mm/);
+  await cell(page, 1, 'height').click();
+  await page.keyboard.press('Alt+ArrowDown');
+  await expect(page.getByRole('rowheader')).toHaveCount(9);
+  await expect(page.getByRole('rowheader', { name: /^1.*isolator/ })).toHaveCount(1);
+  await cell(page, 1, 'height').click();
+  await page.keyboard.press('Alt+Shift+ArrowUp');
+  await expect(page.getByText('The isolator stays on the ground')).toBeVisible();
+  await expect(page.getByRole('rowheader', { name: /^1.*isolator/ })).toHaveCount(1);
 });
 
 test('a storey unstable under gravity is refused at its cell', async ({ page }) => {

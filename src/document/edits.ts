@@ -9,8 +9,13 @@ export { clearDamper, setDamper, setLaw, setRole } from './storeyParts.ts';
 
 const BLANK: StoreyRow = { name: '', height: null, mass: null, stiffness: null, law: { kind: 'elastic' } };
 
+/** The lowest place that a storey can take: 0 on the ground, 1 where an isolator stands there. */
+export function lowestPlace({ frame }: Project): number {
+  return frame.storeys[0]?.role === 'isolator' ? 1 : 0;
+}
+
 /**
- * Puts a storey in at an index (0: on the ground; count: under the roof).
+ * Puts a storey in at an index (0: on the ground, above an isolator where there is one; count: under the roof).
  * @param copyOf  index of the storey that it starts as a copy of (an isolator is copied as a storey); left out: blank
  * @throws RangeError beyond MAX_STOREYS (the screen asks before)
  */
@@ -19,7 +24,8 @@ export function addStorey(project: Project, at: number, copyOf?: number): Projec
   if (storeys.length >= MAX_STOREYS)
     throw new RangeError(`addStorey: ${storeys.length} storeys, expected fewer than ${MAX_STOREYS}`);
   const made = plain(copyOf === undefined ? BLANK : (storeys[copyOf] ?? BLANK));
-  return withStoreys(project, [...storeys.slice(0, at), made, ...storeys.slice(at)]);
+  const place = Math.max(at, lowestPlace(project));
+  return withStoreys(project, [...storeys.slice(0, place), made, ...storeys.slice(place)]);
 }
 
 export function removeStorey(project: Project, at: number): Project {
@@ -29,10 +35,13 @@ export function removeStorey(project: Project, at: number): Project {
   );
 }
 
+/** Moves a storey; an isolator stays on the ground, and what would go under it stays above. */
 export function moveStorey(project: Project, from: number, to: number): Project {
   const storeys = [...project.frame.storeys];
   const [moved] = storeys.splice(from, 1);
   if (moved === undefined) throw new RangeError(`moveStorey: storey ${from}, there are ${storeys.length}`);
+  const lowest = lowestPlace(project);
+  if (from < lowest || to < lowest) return project;
   storeys.splice(to, 0, moved);
   return withStoreys(project, storeys);
 }

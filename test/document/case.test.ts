@@ -147,6 +147,16 @@ describe('[DOC-4] an isolator', () => {
     expect(faults(moveStorey(floating, 2, 0))).toEqual([]);
     expect(setRole(floating, 2, 'storey')).toEqual(three());
   });
+  test('stays on the ground: what is put or moved under it stands above it', () => {
+    const project = setRole(three(), 0, 'isolator');
+    const roles = ({ frame }: Project) => frame.storeys.map(({ role }) => role);
+    expect(roles(addStorey(project, 0, 0))).toEqual(['isolator', undefined, undefined, undefined]);
+    expect(roles(addStorey(project, 0))).toEqual(['isolator', undefined, undefined, undefined]);
+    expect(moveStorey(project, 0, 1)).toBe(project);
+    expect(moveStorey(project, 1, 0)).toBe(project);
+    expect(roles(moveStorey(project, 2, 1))).toEqual(['isolator', undefined, undefined]);
+    expect(roles(removeStorey(project, 0))).toEqual([undefined, undefined]);
+  });
   test('its copies are storeys, and a frame of equal storeys is not made of it', () => {
     const project = setRole(writeAt(three(), 'frame.storeys[1].mass', 3e5), 0, 'isolator');
     expect(addStorey(project, 1, 0).frame.storeys.map(({ role }) => role)).toEqual([

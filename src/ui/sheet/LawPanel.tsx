@@ -134,10 +134,10 @@ export function LawPanel({ storey, onClose }: LawPanelProps) {
         />
         <span className="quiet small">strength stays each storey's own</span>
       </div>
-      {storey === 0 && (
+      {(storey === 0 || row.role === 'isolator') && (
         <div className="law-scope">
           <label className="check">
-            <input type="checkbox" checked={row.role === 'isolator'} onChange={() => isolate(0)} />
+            <input type="checkbox" checked={row.role === 'isolator'} onChange={() => isolate(storey)} />
             Isolator
           </label>
           {row.role === 'isolator' ? (

@@ -179,7 +179,7 @@ function RowMenu({ storey, row }: { readonly storey: number; readonly row: Row }
         { id: 'down', label: 'Move down', keys: 'Alt+Shift+↓', run: () => move(storey, false) },
         { id: 'remove', label: 'Remove', keys: 'Alt+Delete', run: () => remove(storey) },
         { id: 'damper', label: 'Damper', checked: damper !== undefined, run: () => toggleDamper(storey) },
-        ...(storey === 0
+        ...(storey === 0 || role === 'isolator'
           ? [{ id: 'isolator', label: 'Isolator', checked: role === 'isolator', run: () => isolate(storey) }]
           : []),
       ]}

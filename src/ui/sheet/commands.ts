@@ -1,4 +1,13 @@
-import { addStorey, clearDamper, moveStorey, removeStorey, setDamper, setLaw, setRole } from '../../document/edits.ts';
+import {
+  addStorey,
+  clearDamper,
+  lowestPlace,
+  moveStorey,
+  removeStorey,
+  setDamper,
+  setLaw,
+  setRole,
+} from '../../document/edits.ts';
 import { readAt, writeAt } from '../../document/fields.ts';
 import { lawLike } from '../../document/lawLike.ts';
 import { MAX_STOREYS, type Project, type StoreyRow } from '../../document/project.ts';
@@ -29,7 +38,8 @@ export function add(storey: number, where: 'above' | 'below'): void {
     setSession({ toast: `${MAX_STOREYS} storeys is the most a frame holds` });
     return;
   }
-  const at = before === 0 ? 0 : where === 'above' ? storey + 1 : storey;
+  const wanted = before === 0 ? 0 : where === 'above' ? storey + 1 : storey;
+  const at = Math.max(wanted, lowestPlace(documentStore.getState().project));
   edit(`storey ${at + 1} added`, (project) => addStorey(project, at, before === 0 ? undefined : storey));
   choose(at, column());
 }
@@ -48,6 +58,10 @@ export function move(storey: number, up: boolean): void {
   commitOpenDraft();
   const to = storey + (up ? 1 : -1);
   if (to < 0 || to >= count()) return;
+  if (Math.min(storey, to) < lowestPlace(documentStore.getState().project)) {
+    setSession({ toast: 'The isolator stays on the ground' });
+    return;
+  }
   edit(`storey ${storey + 1} moved ${up ? 'up' : 'down'}`, (project) => moveStorey(project, storey, to));
   choose(to, column());
 }
