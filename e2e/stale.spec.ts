@@ -33,4 +33,18 @@ test('what is out of date is grey, and drawn where it was', async ({ page }) => 
   await page.keyboard.type('abc');
   await expect(verdict(page)).toHaveText(/^Out of date/);
   expect(await places()).toEqual(before);
+  const colours = (selector: string, property: 'color' | 'stroke' | 'fill') =>
+    page
+      .locator(selector)
+      .evaluateAll((all, name) => [...new Set(all.map((one) => getComputedStyle(one)[name]))], property);
+  const grey = [
+    await page.evaluate(() => getComputedStyle(document.querySelector('.verdict .headline') as Element).color),
+  ];
+  expect(await colours('.time-label .now, .time-label.old p', 'color')).toEqual(grey);
+  expect(await colours('.loop-cursor > path', 'stroke')).toEqual(grey);
+  expect(await colours('.loop-cursor > :is(circle, text)', 'fill')).toEqual(grey);
+  expect(await colours('.foot .caution, .foot .facts b', 'color')).toEqual(grey);
+  expect(await colours('.foot.cautions .facts svg path', 'stroke')).toEqual(grey);
+  await expect(page.locator('.foot.cautions')).toContainText('as of the last finished run');
+  await expect(page.locator('.foot.evidence .as-of')).toBeInViewport({ ratio: 1 });
 });

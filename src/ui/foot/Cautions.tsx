@@ -4,15 +4,18 @@ import { useResults } from '../../state/results.ts';
 import { setSession } from '../../state/session.ts';
 import { CautionMark } from '../controls/Icon.tsx';
 import { Popover } from '../controls/Popover.tsx';
+import { useOldAnswers } from './oldAnswers.ts';
 
 /** What to look at, worst first, and the duty that always stands there. A click goes to the cause. */
 export function Cautions() {
   const answers = useResults((state) => state.answers);
+  const old = useOldAnswers();
   const cautions = answers?.cautions ?? [];
   return (
-    <section className="foot cautions" aria-label="Cautions">
+    <section className={`foot cautions ${old ? 'old' : ''}`} aria-label="Cautions">
       <h2 className="foot-head">Cautions {cautions.length > 0 && cautions.length}</h2>
       <ul className="facts">
+        {old && answers !== null && <li className="as-of">as of the last finished run</li>}
         {cautions.slice(0, 4).map((caution) => (
           <CautionItem key={caution.code + caution.text} caution={caution} />
         ))}

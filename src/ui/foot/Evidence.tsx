@@ -2,11 +2,12 @@ import { printQuantity } from '../../core/units/quantities.ts';
 import { type Answers, useResults } from '../../state/results.ts';
 import { setSession } from '../../state/session.ts';
 import { dampingWords, methodWords } from './analysisWords.ts';
+import { useOldAnswers } from './oldAnswers.ts';
 
 /** How good the numbers are: what was assumed, the step, its error, the energy balance. The choices open their dialog. */
 export function Evidence() {
   const answers = useResults((state) => state.answers);
-  const status = useResults((state) => state.status);
+  const old = useOldAnswers();
   const stepErrors = useResults((state) => state.stepErrors);
   if (answers === null) {
     return (
@@ -19,7 +20,6 @@ export function Evidence() {
     );
   }
   const { frame, analysis } = answers.case;
-  const old = status === 'stale';
   return (
     <section className={`foot evidence ${old ? 'old' : ''}`} aria-label="Evidence">
       <h2 className="foot-head">
@@ -33,6 +33,7 @@ export function Evidence() {
         </button>
       </h2>
       <ul className="facts">
+        {old && <li className="as-of">of the last finished run, {clock(answers.at)}</li>}
         <Choice>
           <Worded words={dampingWords(frame.damping)} from=" in " />
         </Choice>
@@ -69,7 +70,6 @@ export function Evidence() {
             </>
           )}
         </li>
-        {old && <li>of the last finished run, {clock(answers.at)}</li>}
       </ul>
       <span className="at-end">
         {answers.runs.filter(({ run }) => run.ending === null).length} of {answers.case.motions.length} runs in{' '}

@@ -34,6 +34,7 @@ export function DampingByPeriod({ layout, tokens, old }: DampingByPeriodProps) {
   return (
     <SquareFrame
       layout={layout}
+      old={old}
       kind="damping"
       words="% of critical against s"
       legend={

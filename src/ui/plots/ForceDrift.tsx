@@ -54,6 +54,7 @@ export function ForceDrift({ layout, tokens, system, old, shown }: ForceDriftPro
   return (
     <SquareFrame
       layout={layout}
+      old={old}
       kind="force"
       words={words}
       legend={

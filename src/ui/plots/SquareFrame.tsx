@@ -35,16 +35,18 @@ export interface SquareFrameProps {
   /** What can be chosen of it, in the menu of its name. */
   readonly options?: readonly MenuItem[];
   readonly table: (() => Table) | null;
+  /** What is shown is no longer the document's. */
+  readonly old?: boolean;
   readonly children: ReactNode;
 }
 
 /** One of the two panels under the answers: name, what it shows, key, plot. */
-export function SquareFrame({ layout, kind, words, legend, options, table, children }: SquareFrameProps) {
+export function SquareFrame({ layout, kind, words, legend, options, table, old = false, children }: SquareFrameProps) {
   const { slot, left, width, narrow } = layout;
   const name = SQUARES.find((entry) => entry.kind === kind)?.name ?? '';
   const size = plotSize(layout);
   return (
-    <div className="square" style={{ left, width }}>
+    <div className={`square ${old ? 'old' : ''}`} style={{ left, width }}>
       <div className="square-head">
         <PanelMenu
           label={name}

@@ -39,6 +39,7 @@ export function StoreyEnergy({ layout, tokens, system, old, shown }: StoreyEnerg
   return (
     <SquareFrame
       layout={layout}
+      old={old}
       kind="storey-energy"
       words={words}
       legend={

@@ -40,6 +40,7 @@ export function StoreyProfile({ kind, layout, tokens, system, old }: StoreyProfi
   return (
     <SquareFrame
       layout={layout}
+      old={old}
       kind={kind}
       words={`level in ${length}${profile?.across ?? ''}`}
       legend={

@@ -100,7 +100,13 @@ export function GroundStack() {
       if (content !== null && time <= endOf(content) + content.interval) {
         const unit = unitOfContent(content, system);
         const value = unit.print(valueAt(content.values, content.interval, time), unit.decimals);
-        words = [seconds, `${value} ${unit.unit}`, content.kind === 'energy' ? 'input' : content.place, letter]
+        words = [
+          seconds,
+          `${value} ${unit.unit}`,
+          content.kind === 'energy' ? 'input' : content.place,
+          letter,
+          old ? 'last run' : '',
+        ]
           .filter((word) => word !== null && word !== '')
           .join(', ');
       } else if (onStrip && axis.samples !== null && axis.entry !== null && axis.scale !== null) {
@@ -117,7 +123,7 @@ export function GroundStack() {
       const over = left + label.offsetWidth > axisX + scale.width;
       label.style.transform = `translate(${Math.round(over ? axisX + place.x - 14 - label.offsetWidth : left)}px, ${Math.round(place.y - 30)}px)`;
     },
-    [panels, strip, scale, contents, axis, axisX, system, letter],
+    [panels, strip, scale, contents, axis, axisX, system, letter, old],
   );
   usePointer(stack, axisX, scale, axis.end, hover);
 
@@ -159,7 +165,7 @@ export function GroundStack() {
         )}
       </div>
       <div className="time-strip" style={{ left: axisX, width: axisWidth }}>
-        <MotionStrip axis={axis} band={strip} scale={scale} system={system} lit={lit} ended={ended} />
+        <MotionStrip axis={axis} band={strip} scale={scale} system={system} lit={lit} ended={ended} old={old} />
         <svg className="time-numbers" style={{ top: numbers - 14 }} width={axisWidth} height="18" aria-hidden="true">
           {scale.ticks.at.map((time, i) => (
             <text key={time} x={scale.x(time)} y="14" className="middle">

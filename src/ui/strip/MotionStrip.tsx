@@ -18,10 +18,12 @@ export interface MotionStripProps {
   readonly lit: { readonly samples: Float64Array; readonly interval: number; readonly factor: number } | null;
   /** Where the run ended early, in words, and when [s]; null where it ran to its end. */
   readonly ended: { readonly time: number; readonly words: string } | null;
+  /** That run is no longer the document's: its end is, the motion itself is not. */
+  readonly old: boolean;
 }
 
 /** The ground motion under the building: our own drawing, so that it is there at once. */
-export const MotionStrip = memo(function MotionStrip({ axis, band, scale, system, lit, ended }: MotionStripProps) {
+export const MotionStrip = memo(function MotionStrip({ axis, band, scale, system, lit, ended, old }: MotionStripProps) {
   const { samples, entry } = axis;
   const { width, ticks, x, range } = scale;
   const factor = axis.scale ?? 1;
@@ -85,12 +87,16 @@ export const MotionStrip = memo(function MotionStrip({ axis, band, scale, system
       )}
       {ended !== null && inside(ended.time) && (
         <g>
-          <path d={`M${x(ended.time)} 0V${band.height}`} className="s-signal" strokeDasharray="2 3" />
+          <path
+            d={`M${x(ended.time)} 0V${band.height}`}
+            className={old ? 's-rule' : 's-signal'}
+            strokeDasharray="2 3"
+          />
           <text
             x={x(ended.time) + (x(ended.time) > width / 2 ? -6 : 6)}
             // Above the words of the strong motion.
             y={band.height - 18}
-            className={`signal halo ${x(ended.time) > width / 2 ? 'end' : ''}`}
+            className={`${old ? '' : 'signal'} halo ${x(ended.time) > width / 2 ? 'end' : ''}`}
           >
             {ended.words}
           </text>

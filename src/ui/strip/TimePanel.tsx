@@ -49,7 +49,7 @@ export const TimePanel = memo(function TimePanel(props: TimePanelProps) {
   const title = unit === null ? name : `${name}, ${unit.unit}`;
   return (
     <>
-      <div className="time-label" style={{ top: band.label }}>
+      <div className={`time-label ${old ? 'old' : ''}`} style={{ top: band.label }}>
         <PanelMenu
           label={title}
           choices={TIME_PANELS}
