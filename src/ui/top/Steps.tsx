@@ -1,7 +1,8 @@
-import { printQuantity, printRatio } from '../../core/units/quantities.ts';
+import { printQuantity } from '../../core/units/quantities.ts';
 import { useDocument } from '../../state/document.ts';
 import { useResults } from '../../state/results.ts';
 import { type SessionState, setSession, useSession } from '../../state/session.ts';
+import { governingWords } from './governingWords.ts';
 
 /** The steps of the work: Frame and Response are the two ends of one screen. */
 export function Steps() {
@@ -40,15 +41,10 @@ export function Steps() {
 function Governing() {
   const answers = useResults((state) => state.answers);
   const status = useResults((state) => state.status);
-  const storey = answers?.envelope.governingStorey ?? -1;
-  const ratio = answers?.envelope.ratio?.[storey];
   if (status === 'stale') return <small>out of date</small>;
-  if (ratio === undefined) return <small> </small>;
-  return (
-    <small className={ratio > 1 ? 'alarm' : ''}>
-      storey {storey + 1} at {printRatio(ratio)}
-    </small>
-  );
+  if (answers === null) return <small> </small>;
+  const { words, over } = governingWords(answers.envelope);
+  return <small className={over ? 'alarm' : ''}>{words}</small>;
 }
 
 interface StepProps {
