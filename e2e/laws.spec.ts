@@ -187,6 +187,18 @@ test('a storey unstable under gravity is refused at its cell', async ({ page }) 
   await expect(verdict(page)).toHaveText(/^Out of date/);
   await page.keyboard.press('Escape');
   await expect(verdict(page)).toHaveText(/governs/);
+  // A weight far above makes it unstable: marked where it was typed too, and the verdict is the way to the storey.
+  await cell(page, 8, 'weight').click();
+  await page.keyboard.type('9000000');
+  await expect(cell(page, 1, 'stiffness')).toHaveAttribute('aria-invalid', 'true');
+  await expect(page.getByRole('textbox', { name: 'Storey 8, weight' })).toHaveAttribute('aria-invalid', 'true');
+  await expect(page.locator('.cell-line')).toContainText('storey 1 is unstable under gravity');
+  await page.keyboard.press('Enter');
+  const way = page.getByRole('button', { name: /^storey 1 is unstable under gravity.*; 8 things to settle$/ });
+  await way.click();
+  await expect(cell(page, 1, 'stiffness')).toBeFocused();
+  await page.keyboard.press('Control+Z');
+  await expect(verdict(page)).toHaveText(/governs/);
 });
 
 test('a frame of all laws is saved, reloaded and opened again: the same numbers', async ({ page }) => {

@@ -55,7 +55,7 @@ export function CellLine({ project, system, cell, faults, onEdit }: CellLineProp
         {fault === undefined ? (
           <span className="fact">{cellFacts(project, path, system) || 'Enter chooses another law'}</span>
         ) : (
-          <span className="wrong">{faultAndMend(fault, system)}</span>
+          <Wrong words={faultAndMend(fault, system)} />
         )}
       </>
     );
@@ -74,7 +74,8 @@ export function CellLine({ project, system, cell, faults, onEdit }: CellLineProp
   }
   const quantity = exists ? quantityOf(path) : null;
   const text = !exists ? '' : (draft?.text ?? fullText(row, column, system));
-  const fault = faults.find((entry) => entry.where === path);
+  const fault =
+    faults.find((entry) => entry.where === path) ?? (draft === null ? undefined : faults.find(brokenByEdit));
   const readings = exists ? readingsOf(path, text, system) : [];
   const typed = exists && (draft !== null || readAt(project, path) !== null);
   const wrong = typed && readings.length === 0 && text !== '' ? wordsOf(project, path, system, fault) : null;
@@ -107,12 +108,25 @@ export function CellLine({ project, system, cell, faults, onEdit }: CellLineProp
           ))}
         </span>
       )}
-      {wrong !== null && <span className="wrong">{wrong}</span>}
+      {wrong !== null && <Wrong words={wrong} />}
       {readings.length === 0 && wrong === null && (
         <span className="fact">{factOf(project, storey, column, system, draft?.text ?? null)}</span>
       )}
     </>
   );
+}
+
+function Wrong({ words }: { readonly words: string }) {
+  return (
+    <span className="wrong" title={words}>
+      {words}
+    </span>
+  );
+}
+
+/** A storey that what is being typed makes unstable: said where it is typed, wherever that is. */
+function brokenByEdit({ code }: Fault): boolean {
+  return code === 'unstable-under-gravity';
 }
 
 function unitOfColumn(column: InputColumn, system: System): string | null {

@@ -122,7 +122,8 @@ export function Grid(props: GridProps) {
   };
 
   const cover = selection === null ? null : coverOf(selection, columns);
-  const faulty = useMemo(() => faultyCells(faults), [faults]);
+  const editedPath = draft?.path ?? null;
+  const faulty = useMemo(() => faultyCells(faults, editedPath), [faults, editedPath]);
   return (
     <div
       ref={grid}
@@ -218,9 +219,11 @@ const ANSWERED = {
 
 const EMPTY_ROW = { name: '', height: null, mass: null, stiffness: null, law: { kind: 'elastic' } } satisfies Row;
 
-function faultyCells(faults: readonly Fault[]): ReadonlyMap<number, string> {
+/** Cells at fault; where an edit makes a storey unstable under gravity, the edited cell too. */
+function faultyCells(faults: readonly Fault[], edited: string | null): ReadonlyMap<number, string> {
   const cells = new Map<number, string>();
-  for (const { where } of faults) {
+  const unstable = faults.some(({ code }) => code === 'unstable-under-gravity');
+  for (const where of [...faults.map((fault) => fault.where), ...(unstable && edited !== null ? [edited] : [])]) {
     const cell = cellOf(where);
     if (cell !== null) cells.set(cell.storey, `${cells.get(cell.storey) ?? ''} ${cell.column}`.trim());
   }

@@ -168,7 +168,7 @@ export function SheetScreen({ onOpen, onExample }: SheetScreenProps) {
                 : { left: layout.answers.x, width: layout.answers.width }
             }
           >
-            <Verdict letters={letters} />
+            <Verdict letters={letters} onLaw={setLawOf} />
             <SpokenVerdict />
           </div>
           <Heads

@@ -2,7 +2,7 @@ import { useEffect, useState } from 'react';
 import { verdictOf } from '../../core/checks/verdict.ts';
 import type { Fault } from '../../core/fault.ts';
 import type { System } from '../../core/units/quantities.ts';
-import { faultSentence } from '../../document/faultWords.ts';
+import { faultSentence, faultWords } from '../../document/faultWords.ts';
 import type { Project } from '../../document/project.ts';
 import { edit, useDocument } from '../../state/document.ts';
 import { runNow, stop, useResults } from '../../state/results.ts';
@@ -10,14 +10,17 @@ import { useSession } from '../../state/session.ts';
 import { Boundary } from '../controls/Boundary.tsx';
 import { Button } from '../controls/Button.tsx';
 import { CautionMark, Icon } from '../controls/Icon.tsx';
+import { goTo } from './goTo.ts';
 import { Mends } from './later.ts';
 
 export interface VerdictProps {
   readonly letters: Readonly<Record<string, string>>;
+  /** Opens the panel of a storey's law. */
+  readonly onLaw: (storey: number) => void;
 }
 
 /** One sentence on what governs, or on why there is none; said aloud once a run. */
-export function Verdict({ letters }: VerdictProps) {
+export function Verdict({ letters, onLaw }: VerdictProps) {
   const status = useResults((state) => state.status);
   const slow = useResults((state) => state.slow);
   const waits = useResults((state) => state.waits);
@@ -27,22 +30,17 @@ export function Verdict({ letters }: VerdictProps) {
   const project = useDocument((state) => state.project);
   const system = useSession((state) => state.system);
 
+  const why = <Why project={project} system={system} faults={faults} onLaw={onLaw} />;
   if (status === 'running' && slow) return <Running />;
   if (status === 'empty' || answers === null) {
-    return (
-      <Line
-        kind="quiet-verdict"
-        headline="Nothing to check yet"
-        detail={missing(project) ?? why(project, faults, system)}
-      />
-    );
+    return <Line kind="quiet-verdict" headline="Nothing to check yet" detail={missing(project) ?? why} />;
   }
   if (status === 'stale') {
     return (
       <Line
         kind="old"
         headline={`Out of date${changed === null ? '' : `: ${inSentence(changed)}`}`}
-        detail={waits ? '' : why(project, faults, system)}
+        detail={waits ? '' : why}
       >
         {waits && (
           <Button kind="primary" size="medium" onClick={runNow}>
@@ -97,16 +95,37 @@ function inSentence(label: string): string {
   return label.charAt(0).toLowerCase() + label.slice(1);
 }
 
-function why(project: Project, faults: readonly Fault[], system: System): string {
+/** The first thing to settle, as the way to it; how many there are; the whole of it, with the mend, where the line is short. */
+function Why({ project, system, faults, onLaw }: WhyProps) {
   const first = faults[0];
-  if (first === undefined) return 'the answers are those of the last run';
-  return `${faultSentence(project, first, system)}${faults.length > 1 ? `; ${faults.length} things to settle` : ''}`;
+  if (first === undefined) return <span className="detail">the answers are those of the last run</span>;
+  const sentence = faultSentence(project, first, system);
+  return (
+    <button
+      type="button"
+      className="to-fault"
+      title={`${sentence}. ${faultWords(first, system).mend}`}
+      onClick={() => goTo(first.where, onLaw)}
+    >
+      <span className="detail">
+        {sentence}
+        {faults.length > 1 && `; ${faults.length} things to settle`}
+      </span>
+    </button>
+  );
+}
+
+interface WhyProps {
+  readonly project: Project;
+  readonly system: System;
+  readonly faults: readonly Fault[];
+  readonly onLaw: (storey: number) => void;
 }
 
 interface LineProps {
   readonly kind: string;
   readonly headline: string;
-  readonly detail: string;
+  readonly detail: React.ReactNode;
   readonly mark?: boolean;
   readonly met?: boolean;
   readonly children?: React.ReactNode;
@@ -120,7 +139,13 @@ function Line({ kind, headline, detail, mark = false, met = false, children }: L
         {met && <Icon name="check" />}
         {headline}
       </span>
-      <span className="detail">{detail}</span>
+      {typeof detail === 'string' ? (
+        <span className="detail" title={detail}>
+          {detail}
+        </span>
+      ) : (
+        detail
+      )}
       {children !== undefined && <span className="mends">{children}</span>}
     </div>
   );
