@@ -48,7 +48,7 @@ function answer(file: string, read: OpenedProject, asked: Case, folder: OutFolde
       analysis,
       motion: { interval, scale, acceleration: samplesOf(read, motion.samples) },
     };
-    const { run, stepError, stepWhy } = answeredRun(asked.prepared, runCase, histories);
+    const { run, stepError, stepWhy, atHalf } = answeredRun(asked.prepared, runCase, histories);
     if (run.histories !== null) {
       folder.write(`histories-${names[m]}.csv`, csvOf(historiesTable(name, run), PLAIN_CSV));
       if (run.histories.every > 1) {
@@ -58,6 +58,7 @@ function answer(file: string, read: OpenedProject, asked: Case, folder: OutFolde
       }
     }
     if (stepWhy !== undefined) messages.push(`${file}: motion ${name}: step ${shortest(run.step)} s: ${stepWhy}`);
+    if (atHalf !== undefined) messages.push(`${file}: motion ${name}: ${atHalf}`);
     if (run.ending !== null) messages.push(`${file}: motion ${name}: did not finish: ${endingWords(run)}`);
     return { motion: name, run: { ...run, histories: null }, stepError, ...(stepWhy === undefined ? {} : { stepWhy }) };
   });
@@ -71,18 +72,21 @@ function answer(file: string, read: OpenedProject, asked: Case, folder: OutFolde
 }
 
 /** The run at the step that is typed, or at the one that halving comes to. */
-function answeredRun(
-  prepared: PreparedFrame,
-  runCase: RunCase,
-  histories: boolean,
-): Pick<ReportRun, 'run' | 'stepError' | 'stepWhy'> {
+function answeredRun(prepared: PreparedFrame, runCase: RunCase, histories: boolean): Answered {
   if (runCase.analysis.step === 'auto') {
-    const { run, stepError, why } = runAtAutoStep(prepared, runCase, { histories });
-    return { run, stepError, stepWhy: why };
+    const { run, stepError, why, converged } = runAtAutoStep(prepared, runCase, { histories });
+    const atHalf = 'no step that was tried is confirmed by its half: the answer is not converged';
+    return { run, stepError, stepWhy: why, ...(converged ? {} : { atHalf }) };
   }
   const run = wholeRun(prepared, runCase, histories);
-  return { run, stepError: stepErrorAt(prepared, runCase, run) };
+  if (run.ending !== null) return { run, stepError: null };
+  const half = halfRun(prepared, runCase, run);
+  if (half.ending === null) return { run, stepError: stepErrorOf(run, half) };
+  return { run, stepError: null, atHalf: `does not finish at half the step: ${endingWords(half)}` };
 }
+
+/** A run, and what the one at half its step says against it, in words. */
+type Answered = Pick<ReportRun, 'run' | 'stepError' | 'stepWhy'> & { readonly atHalf?: string };
 
 function wholeRun(prepared: PreparedFrame, runCase: RunCase, histories: boolean): Run {
   const run = startRun(prepared, runCase, { histories });
@@ -90,12 +94,9 @@ function wholeRun(prepared: PreparedFrame, runCase: RunCase, histories: boolean)
   return run.finish();
 }
 
-/** By a second run at half the step; null where one of the two did not come to its end. */
-function stepErrorAt(prepared: PreparedFrame, runCase: RunCase, run: Run): number | null {
-  if (run.ending !== null) return null;
+function halfRun(prepared: PreparedFrame, runCase: RunCase, run: Run): Run {
   const parts = 2 * Math.round(runCase.motion.interval / run.step);
-  const half = wholeRun(prepared, { ...runCase, analysis: { ...runCase.analysis, step: { parts } } }, false);
-  return half.ending === null ? stepErrorOf(run, half) : null;
+  return wholeRun(prepared, { ...runCase, analysis: { ...runCase.analysis, step: { parts } } }, false);
 }
 
 function sourceOf(read: OpenedProject, asked: Case, runs: readonly ReportRun[]): ReportSource {

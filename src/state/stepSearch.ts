@@ -37,7 +37,7 @@ export function stepSearch(runs: Recent<Run>): StepSearch {
   const known = (ask: Ask) => (parts: number) => runs.get(ask.at(parts).key);
 
   function whole(ask: Ask) {
-    return autoStep(ask.first, ask.most, known(ask));
+    return autoStep(ask.first, ask.most, known(ask), ask.least?.enough);
   }
 
   function shown(ask: Ask): number {
@@ -81,7 +81,7 @@ export function stepSearch(runs: Recent<Run>): StepSearch {
       const parts = shown(ask);
       const run = known(ask)(parts);
       const half = confirmed(ask)?.half;
-      const converged = run && half ? confirms(run, half) : null;
+      const converged = run && half ? confirms(run, half) && ask.least.enough : null;
       return { why: autoStepWords(parts, ask.at(parts).request.motion.interval, ask.least, converged), converged };
     },
     failed: (key) => void failures.add(key),

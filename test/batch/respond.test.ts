@@ -2,6 +2,7 @@ import { spawnSync } from 'node:child_process';
 import { existsSync, readdirSync, readFileSync } from 'node:fs';
 import { join, resolve } from 'node:path';
 import { describe, expect, test } from 'vitest';
+import { noise } from '../support/frames.ts';
 import { BARE_RECORD, batch, folderWith, projectOf, TIMED_RECORD } from './support.ts';
 
 const respond = (folder: string, ...more: string[]) =>
@@ -134,6 +135,32 @@ describe('[BATCH-4] respond', () => {
     expect(respond(folderOf(still)).lines).toEqual([]);
   });
 
+  test('a run that comes to its end, and not at half the step, says so', () => {
+    const law = { kind: 'bilinear', strength: 3e5, hardening: 0 };
+    const storeys = [law, { kind: 'elastic' }].map((law, i) => ({
+      name: `S${i}`,
+      height: 3,
+      mass: 2e5,
+      stiffness: 4e7,
+      law,
+    }));
+    const damping = { kind: 'rayleigh', modes: [1, 2], ratios: [0.05, 0.05] };
+    const project = projectOf({
+      frame: { storeys, damping, pDelta: true },
+      motions: [{ name: 'Motion A', interval: 0.05, acceleration: Array.from(noise(51, 300)) }],
+      analysis: { method: { kind: 'newmark', beta: 0.25, gamma: 0.5 }, step: 0.05 },
+    });
+    const folder = folderOf(project);
+    const { status, lines } = respond(folder);
+    expect({ status, lines }).toEqual({
+      status: 0,
+      lines: [
+        expect.stringMatching(/Motion A: does not finish at half the step: storey 1 lost its stability at 6\.63 s/),
+      ],
+    });
+    expect(JSON.parse(read(folder, 'response.json')).runs[0]).toMatchObject({ completed: true, stepError: null });
+  });
+
   test('every law, a damper and an isolator, at a step chosen by halving', () => {
     const { analysis } = projectOf() as { analysis: object };
     const project = projectOf({
@@ -163,8 +190,9 @@ describe('[BATCH-4] respond', () => {
     expect(hysteretic).toBeGreaterThan(0);
     expect(Math.abs(input - kinetic - strain - damping - dampers - hysteretic) / input).toBeLessThan(0.01);
     expect(imbalance).toBeLessThan(0.01);
-    expect(envelope.storeys[0].ratio).toBe(envelope.floors[0].displacement.max / 0.3);
-    expect(envelope.storeys[0].limit).toBe(0.3);
+    const { displacement } = envelope.floors[0];
+    expect(displacement).toMatchObject({ limit: 0.3, ratio: displacement.max / 0.3 });
+    expect(envelope.storeys[0]).toMatchObject({ limit: null, ratio: null });
     const [heads, row] = read(folder, 'energy.csv').split('\r\n');
     expect(heads).toContain(',Why this step,');
     expect(row).toContain('interval of 0.02 s');

@@ -10,6 +10,8 @@ export const AIM = 0.01;
 /** Steps a period for each mode needed for so much of the mass. Common practice; project-file page. */
 export const STEPS_A_PERIOD = 20;
 export const MASS_COVERED = 0.95;
+/** Two endings are alike only where their times differ by no more than this share. Own figure. */
+const SAME_TIME = 0.05;
 /** Steps of one run: the ground motion at each of them takes 160 MB. */
 export const MOST_STEPS = 2e7;
 
@@ -75,8 +77,14 @@ export type AutoStep =
  *
  * @param most   the most parts that are tried (`mostParts`)
  * @param runAt  the run at so many parts of the interval; undefined where it has not been run
+ * @param enough  as LeastParts: false where no number of parts keeps steps a period or the stability limit
  */
-export function autoStep(first: number, most: number, runAt: (parts: number) => Run | undefined): AutoStep {
+export function autoStep(
+  first: number,
+  most: number,
+  runAt: (parts: number) => Run | undefined,
+  enough = true,
+): AutoStep {
   for (let parts = first; ; parts *= 2) {
     const run = runAt(parts);
     if (!run) return { kind: 'ask', parts };
@@ -84,7 +92,7 @@ export function autoStep(first: number, most: number, runAt: (parts: number) => 
     if (!half) return { kind: 'ask', parts: 2 * parts };
     const converged = confirms(run, half);
     if (converged || parts >= most)
-      return { kind: 'settled', parts, run, stepError: errorBetween(run, half), converged };
+      return { kind: 'settled', parts, run, stepError: errorBetween(run, half), converged: converged && enough };
   }
 }
 
@@ -95,8 +103,11 @@ export function errorBetween(run: Run, half: Run): number | null {
 
 /** Whether the run at half the step confirms a run: both came to their end with a small step error, or both ended alike. */
 export function confirms(run: Run, half: Run): boolean {
-  if (run.ending && half.ending)
-    return run.ending.status === half.ending.status && run.ending.storey === half.ending.storey;
+  if (run.ending && half.ending) {
+    const [a, b] = [run.ending, half.ending];
+    const near = Math.abs(a.time - b.time) <= SAME_TIME * Math.max(a.time, b.time) + run.step;
+    return a.status === b.status && a.storey === b.storey && near;
+  }
   const error = errorBetween(run, half);
   return error !== null && error < AIM;
 }

@@ -1,12 +1,26 @@
-import { numberOf } from './laws/laws.ts';
+import { BOUC_WEN, FLAG } from './laws/laws.ts';
 import type { Problem } from './problem.ts';
 import { FIELD, SUM } from './record.ts';
 import type { Histories } from './run.ts';
 import { recoverableOf } from './storeyEnergies.ts';
 import type { Workspace } from './workspace.ts';
 
-const { U, TOTAL, P_OVER_H, DRIFT, FORCE, DAMPER_FORCE, DAMPER_WORK, WORK, LAW, K, K_YIELD, TANGENT, STRIDE } = FIELD;
-const BOUC_WEN = numberOf({ kind: 'bouc-wen', strength: 1, hardening: 0, exponent: 1, beta: 0.5, gamma: 0.5 });
+const {
+  U,
+  TOTAL,
+  P_OVER_H,
+  DRIFT,
+  FORCE,
+  DAMPER_FORCE,
+  DAMPER_WORK,
+  WORK,
+  LAW,
+  K,
+  K_YIELD,
+  STRENGTH,
+  TANGENT,
+  STRIDE,
+} = FIELD;
 
 /** Histories of one run may take so many bytes; beyond it only each k-th step is kept, and k is said. */
 const HISTORY_LIMIT = 64 * 1024 * 1024;
@@ -109,11 +123,20 @@ function gatherNonlinear(
   energy.hysteretic[at] = hysteretic;
 }
 
-/** On a line of the post-yield slope; of a smooth law, on a tangent nearer to that slope than to the initial one. */
+/**
+ * On a line of the post-yield slope, and of a flag on the upper one; of a smooth law, on a tangent nearer to that slope than to
+ * the initial one.
+ */
 function isPastYield(records: Float64Array, at: number): boolean {
   const [initial, yielding, tangent] = [records[at + K], records[at + K_YIELD], records[at + TANGENT]];
   if (yielding >= initial) return false;
-  return records[at + LAW] === BOUC_WEN ? tangent < 0.5 * (initial + yielding) : tangent <= yielding;
+  if (records[at + LAW] === BOUC_WEN) return tangent < 0.5 * (initial + yielding);
+  if (tangent > yielding) return false;
+  if (records[at + LAW] !== FLAG) return true;
+  // The lower line of a flag, on which it goes back, has the same slope.
+  const strength = records[at + STRENGTH];
+  const upper = strength * (1 - yielding / initial) + yielding * Math.abs(records[at + DRIFT]);
+  return Math.abs(records[at + FORCE]) > upper - 1e-9 * strength;
 }
 
 /** The histories as far as step `done`, in arrays of their own where the run ended early. */

@@ -43,8 +43,9 @@ export function startMarch(problem: Problem, choice: MethodChoice, want: Want): 
       // Histories are kept between steps; without them nothing is looked at, and the steps run in one go.
       while (!over() && done < end) {
         const to = histories ? done + 1 : end;
+        const from = done;
         done = work.advance(done, to);
-        if (histories) keepHistory(histories, problem, work, done);
+        if (histories && done > from) keepHistory(histories, problem, work, done);
       }
       return over();
     },
@@ -94,7 +95,7 @@ function runOf(
       peakDrift,
       peakDriftRatio: peakDrift.map((d, i) => d / height[i]),
       peakTime: column(FIELD.PEAK_STEP).map((at) => at * step),
-      ...residualsOf(records, n, done - residualFrom),
+      ...residualsOf(records, n, linear ? done - residualFrom : sums[SUM.SETTLED]),
       // Of an elastic storey without a damper, shear follows drift: its peak is k times the peak drift.
       peakShear: linear ? peakDrift.map((d, i) => stiffness[i] * d) : column(FIELD.PEAK_SHEAR),
       peakOverturning: column(FIELD.PEAK_OVERTURNING),

@@ -11,6 +11,8 @@ export interface NonlinearWork {
   /** Where damping is a full matrix: it, the inverse of the step's matrix, scratch. */
   readonly full: FullWork | null;
   readonly sums: Float64Array;
+  /** 1 while the step's matrix is that of the step and the lines as they stand, 0 where it is not positive definite. */
+  readonly holds: Uint8Array;
 }
 
 export interface FullWork {

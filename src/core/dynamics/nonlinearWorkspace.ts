@@ -62,6 +62,7 @@ export function nonlinearWorkspace(problem: Problem): Workspace {
     smooth: prepared.frame.storeys.some(({ law, damper }) => numberOf(law) > BILINEAR || damper !== undefined),
     full: fullWork(prepared, w, -ground[0]),
     sums,
+    holds: new Uint8Array(1),
   };
   if (!refactor(work, 0)) throw new RangeError("march: the step's matrix is not positive definite");
   return { records: w, sums, advance: (from, to) => yieldTo(work, ground, residualFrom, from, to) };

@@ -43,9 +43,21 @@ export function problemOf(prepared: PreparedFrame, { analysis, motion }: RunCase
     step: size,
     steps,
     ground: groundAtSteps(motion.acceleration, motion.scale, parts, steps),
-    // An isolator moves by more than a storey may: it has a limit of its own.
-    stopDrift: arrays.height.map((h, i) => (i === 0 && arrays.isolated ? Number.POSITIVE_INFINITY : stop * h)),
+    stopDrift: arrays.height.map((h, i) => (i === 0 && arrays.isolated ? isolatorStop(prepared) : stop * h)),
     residualFrom: Math.max(0, steps - Math.round(modes[0].period / size)),
     linear: !yields && !damped && !slab,
   };
+}
+
+/**
+ * Drift from which no force of an isolator's law can bring it back [m]: where P-Delta, (P / h) x, has grown to the post-yield
+ * line (1 - r) Fy + r k x, r the hardening. Infinity where hardening gives at least as much as P-Delta takes. A drift ratio would stop it
+ * where it works: an isolator's row is low and its displacement is what it is for.
+ * Source: statics; published check F2 on the post-yield branch.
+ */
+function isolatorStop({ frame, arrays }: PreparedFrame): number {
+  const [{ law }] = frame.storeys;
+  if (law.kind === 'elastic') return Number.POSITIVE_INFINITY;
+  const more = arrays.gravityAbove[0] / arrays.height[0] - law.hardening * arrays.stiffness[0];
+  return more > 0 ? ((1 - law.hardening) * law.strength) / more : Number.POSITIVE_INFINITY;
 }

@@ -81,7 +81,9 @@ export const SUM = Object.freeze({
   /** Largest |sum of the floors' damping forces| since a storey first yielded [N], and 1 once one has. */
   DAMPING_SHEAR: 11,
   YIELDED: 12,
-  SUMS: 13,
+  /** Steps summed for the residual. */
+  SETTLED: 13,
+  SUMS: 14,
 });
 
 /** What STOPPED says: under way, a storey passed its stop drift, the numbers left the finite range, a step did not converge. */

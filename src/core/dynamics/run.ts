@@ -66,7 +66,7 @@ export interface Histories {
   readonly nonlinear: {
     /** Force of the storey damper [N], a part of `shear`; storeys x count. */
     readonly damper: Float64Array;
-    /** 1 where the storey is past yield (its tangent is softer than the initial stiffness), storeys x count. */
+    /** 1 where the storey is past yield (on its post-yield branch), storeys x count. */
     readonly yielding: Uint8Array;
   } | null;
 }

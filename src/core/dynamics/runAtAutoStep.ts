@@ -30,7 +30,7 @@ export function runAtAutoStep(prepared: PreparedFrame, runCase: RunCase, want: W
   };
   const runs = new Map<number, Run>();
   for (;;) {
-    const found = autoStep(least.parts, most, (parts) => runs.get(parts));
+    const found = autoStep(least.parts, most, (parts) => runs.get(parts), least.enough);
     if (found.kind === 'ask') {
       runs.set(found.parts, at(found.parts, false));
       continue;

@@ -12,18 +12,26 @@ const FRESH_AFTER = 200;
 /** An update that leaves less of the determinant than this cancels figures (a damper that comes loose): made afresh instead. Own choice. */
 const CANCELS = 0.1;
 
-/** The step's matrix from row `from` up, from the lines as they stand; false where it is not positive definite. */
+/**
+ * The step's matrix from row `from` up, from the lines as they stand; false where it is not positive definite, which `holds`
+ * keeps until the next time.
+ */
 export function refactor(work: NonlinearWork, from: number): boolean {
-  const { n, w, now, full } = work;
+  const { n, w, now, full, holds } = work;
   const wf = 1 - now[AF];
   const b0 = wf * now[BETA] * now[H] * now[H];
   const g0 = wf * now[GAMMA] * now[H];
   const onMass = 1 - now[AM];
+  holds[0] = 0;
   for (let p = from * STRIDE; p < n * STRIDE; p += STRIDE) {
     gatherLine(w, p);
     w[p + COUPLING] = b0 * w[p + LINE_DRIFT] + g0 * w[p + LINE_RATE];
   }
-  if (full !== null) return invertInto(work, full);
+  if (full !== null) {
+    if (!invertInto(work, full)) return false;
+    holds[0] = 1;
+    return true;
+  }
   const top = (n - 1) * STRIDE;
   for (let p = from * STRIDE; p <= top; p += STRIDE) {
     const here = w[p + COUPLING];
@@ -34,6 +42,7 @@ export function refactor(work: NonlinearWork, from: number): boolean {
     w[p + MULTIPLIER] = multiplier;
     w[p + PER_PIVOT] = 1 / pivot;
   }
+  holds[0] = 1;
   return true;
 }
 
@@ -63,7 +72,10 @@ function gatherLine(w: Float64Array, p: number): void {
 
 /** The matrix again after the lines changed from storey `lowest` up; false where it is no longer positive definite. */
 export function renew(work: NonlinearWork, lowest: number): boolean {
-  return work.full === null ? refactor(work, lowest > 0 ? lowest - 1 : 0) : shiftInverse(work, work.full);
+  if (work.full === null) return refactor(work, lowest > 0 ? lowest - 1 : 0);
+  const shifted = shiftInverse(work, work.full);
+  work.holds[0] = shifted ? 1 : 0;
+  return shifted;
 }
 
 /** The inverse of the step's matrix where damping is full, afresh, from the couplings as they stand. */

@@ -25,7 +25,7 @@ const { TRIAL_DRIFT, TRIAL_FORCE, TANGENT, INTERCEPT, SLOPE, FORCE_TOLERANCE, DA
 const { DAMPER_FORCE, DAMPER_WORK, PEAK_RATE, STOREY_FORCE, TANGENT_FACTOR } = FIELD;
 const { COUPLING, LAST_DRIFT, LINE, LINE_DRIFT, LINE_RATE, NEXT_U, NEXT_V, PEAK_SHEAR, YIELD_STEP } = FIELD;
 const { INPUT, DAMPING, KINETIC, STRAIN, LARGEST_GAP, LARGEST_INPUT, STOPPED, SOLVES, MOST_SOLVES, HALVINGS } = SUM;
-const { CULPRIT, DAMPING_SHEAR, YIELDED } = SUM;
+const { CULPRIT, DAMPING_SHEAR, YIELDED, SETTLED } = SUM;
 const { AM, AF, BETA, GAMMA, H, AG_OLD, AG_NEW } = NOW;
 const { COLLAPSED, DIVERGED, NOT_CONVERGED } = STATE;
 
@@ -62,7 +62,7 @@ export function yieldTo(work: NonlinearWork, ground: Float64Array, settling: num
       now[AG_OLD] = agOld + rise * (at / whole);
       now[AG_NEW] = agOld + rise * ((at + part) / whole);
       const used = solve(work);
-      solves += used > 0 ? used : MOST;
+      solves += Math.abs(used);
       if (used > 0) {
         at += part;
         commit(work, j, j > settling && at === whole);
@@ -90,8 +90,12 @@ export function yieldTo(work: NonlinearWork, ground: Float64Array, settling: num
   return to;
 }
 
-/** Iterates until every law and damper is on its line. @returns the solves it took, 0 where it does not converge */
+/**
+ * Iterates until every law and damper is on its line.
+ * @returns the solves it took; 0, or that many below zero, where it does not converge or there is no matrix to solve with
+ */
 function solve(work: NonlinearWork): number {
+  if (work.holds[0] === 0) return 0;
   for (let count = 1; count <= MOST; count++) {
     loads(work);
     if (work.full !== null) solveFull(work, work.full);
@@ -99,9 +103,9 @@ function solve(work: NonlinearWork): number {
     const changed = work.smooth ? ask(work, own) : own;
     if (changed === work.n) return count;
     work.sums[CULPRIT] = changed;
-    if (!renew(work, changed)) return 0;
+    if (!renew(work, changed)) return -count;
   }
-  return 0;
+  return -MOST;
 }
 
 /** Upwards: the right-hand side from the lines as they stand, eliminated as it is made where C is tridiagonal. */
@@ -334,6 +338,7 @@ function commit(work: NonlinearWork, j: number, settles: boolean): void {
       }
     }
   }
+  if (settles) sums[SETTLED]++;
   const input = sums[INPUT] - (now[AG_OLD] + now[AG_NEW]) * push;
   const damping = sums[DAMPING] + dampingStep;
   sums[INPUT] = input;
@@ -345,7 +350,7 @@ function commit(work: NonlinearWork, j: number, settles: boolean): void {
   if (input > sums[LARGEST_INPUT]) sums[LARGEST_INPUT] = input;
   if (sums[YIELDED] !== 0 && Math.abs(dampingShear) > sums[DAMPING_SHEAR]) sums[DAMPING_SHEAR] = Math.abs(dampingShear);
   if (stopped || !(gap < Number.POSITIVE_INFINITY)) sums[STOPPED] = stopped ? COLLAPSED : DIVERGED;
-  // Only a tangent that turns negative can fail here; the next solve then does not converge and says so.
+  // Only a tangent that turns negative can fail here; the next step then begins with its half.
   else if (dirty >= 0) renew(work, dirty);
 }
 

@@ -9,8 +9,8 @@ const RESPONSE_VERSION = 1;
 
 /**
  * The response file: plain SI numbers, ground up, under the keys of the project-file page. Null wherever the suite is not
- * complete; `ductility` is absent for elastic storeys. An isolator has its own limit, a displacement [m]: its `limit` and `ratio`
- * are of `envelope.floors[0].displacement`, null where none is typed.
+ * complete; `ductility` is absent for elastic storeys. An isolator has its own limit, a displacement [m]: `limit` and
+ * `ratio` stand in `envelope.floors[0].displacement`, null where none is typed, and are null in `envelope.storeys[0]`.
  */
 export function responseOf({ prepared, runs, envelope }: Pick<ReportSource, 'prepared' | 'runs' | 'envelope'>) {
   const { frame, modes } = prepared;
@@ -42,7 +42,10 @@ export function responseOf({ prepared, runs, envelope }: Pick<ReportSource, 'pre
         };
       }),
       floors: frame.storeys.map((_, i) => ({
-        displacement: at(envelope.displacement, i),
+        displacement: {
+          ...at(envelope.displacement, i),
+          ...(i === 0 && envelope.isolator !== null ? envelope.isolator : {}),
+        },
         acceleration: at(envelope.acceleration, i),
       })),
       measure: envelope.measure,
@@ -93,9 +96,9 @@ function reasonOf(run: Run, ending: Ending) {
   };
 }
 
-/** What a storey is compared with: the drift limit, or an isolator's own. */
+/** What a storey is compared with: the drift limit; nothing for an isolator. */
 function limitOf({ limit, ratio, isolator }: ReportSource['envelope'], i: number) {
-  if (i === 0 && isolator !== null) return isolator;
+  if (i === 0 && isolator !== null) return { limit: null, ratio: null };
   return { limit, ratio: ratio === null ? null : ratio[i] };
 }
 

@@ -146,7 +146,7 @@ class Expression {
     }
     this.at += figures.length;
     const numeral = readNumeral(figures, this.signs);
-    if (numeral.kind === 'unreadable') throw new Unreadable(numeral.why, 'Use one point or comma as the decimal sign');
+    if (numeral.kind === 'unreadable') throw new Unreadable(numeral.why, numeral.mend);
     this.open ||= numeral.open;
     this.next();
     const name = NAME.exec(this.source.slice(this.at))?.[0];

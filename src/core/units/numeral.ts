@@ -8,7 +8,7 @@ export type Signs = 'point' | 'comma' | 'decimal' | 'thousands';
 export type Numeral =
   /** `open`: a lone comma before exactly three digits, taken as the signs asked for say. */
   | { readonly kind: 'number'; readonly value: number; readonly open: boolean }
-  | { readonly kind: 'unreadable'; readonly why: string };
+  | { readonly kind: 'unreadable'; readonly why: string; readonly mend: string };
 
 /** Spaces that may part thousands: plain, no-break, thin, narrow no-break. */
 const SPACE = '[ \\u00a0\\u2009\\u202f]';
@@ -34,12 +34,15 @@ export function readNumeral(text: string, signs: Signs): Numeral {
     return {
       kind: 'unreadable',
       why: `"${text.trim()}" is no number that can be told from its points, commas and spaces`,
+      mend: 'Use one point or comma as the decimal sign',
     };
   }
   // A lone point is the decimal sign; a lone comma before three digits may be either.
   const open = point !== null && comma !== null && point !== comma && figures?.includes(',') === true;
   const value = open && signs === 'decimal' ? comma : (point ?? comma);
-  if (value === null || !Number.isFinite(value)) return { kind: 'unreadable', why: `"${text.trim()}" is too large` };
+  if (value === null || !Number.isFinite(value)) {
+    return { kind: 'unreadable', why: `"${text.trim()}" is too large`, mend: 'Check its exponent and its figures' };
+  }
   return { kind: 'number', value, open };
 }
 

@@ -111,6 +111,19 @@ export function printTyped(value: number, quantity: Quantity, system: System): s
   return grouped(plain(Number(shown.toPrecision(15))));
 }
 
+/** Digits that a person types at most; more come only of a conversion. */
+const TYPED_DIGITS = 12;
+
+/**
+ * The same for the eye: a number that was typed in the other system, and so has no short form, stands with ten significant digits
+ * (it reads back equal to 5e-10).
+ */
+export function printShort(value: number, quantity: Quantity, system: System): string {
+  const full = printTyped(value, quantity, system);
+  if (full.replace(/e.*$/, '').replace(/\D/g, '').replace(/^0+/, '').length <= TYPED_DIGITS) return full;
+  return grouped(plain(Number(toDisplay(value, quantity, system).toPrecision(10))));
+}
+
 /** A ratio to a limit: two decimals, three in (1, 1.005), so that 1.00 is shown only if it is not over. */
 export function printRatio(value: number): string {
   if (!Number.isFinite(value)) return 'none';

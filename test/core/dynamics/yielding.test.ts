@@ -332,6 +332,50 @@ describe('[DYN-11] a step that does not converge', () => {
   });
 });
 
+describe('[DYN-13] a frame that P-Delta brings down', () => {
+  it('an isolator that runs away is stopped where no force of its law can bring it back, and named', () => {
+    const ground = Float64Array.from(
+      { length: 300 },
+      (_, i) => 3 * Math.sin(i * 0.044) * Math.exp(-(((i - 500) / 300) ** 2)),
+    );
+    const law: Law = { kind: 'bilinear', strength: 5.9e5, hardening: 0.1 };
+    const frame: Frame = {
+      storeys: [
+        { name: 'isolator', height: 0.5, mass: 9e5, stiffness: 3e7, role: 'isolator', law },
+        { name: 'storey', height: 3, mass: 3e5, stiffness: 3e11, law: { kind: 'elastic' } },
+      ],
+      damping: { kind: 'none' },
+      pDelta: true,
+    };
+    const { ending, storeys } = run(frame, ground, 0.01, { stopDrift: 0.1 });
+    expect(ending).toMatchObject({ status: 'collapsed', storey: 0 });
+    // (P/h) x = (1 - r) Fy + r k x
+    const critical = (0.9 * 5.9e5) / ((1.2e6 * 9.80665) / 0.5 - 3e6);
+    expect(storeys.peakDrift[0]).toBeGreaterThan(critical);
+    expect(storeys.peakDrift[0]).toBeLessThan(1.2 * critical);
+    // Where hardening gives more than P-Delta takes, an isolator may go as far as it likes.
+    const tall = { ...frame, storeys: frame.storeys.map((storey, i) => (i === 0 ? { ...storey, height: 6 } : storey)) };
+    expect(run(tall, ground, 0.01, { stopDrift: 0.1 }).ending).toBeNull();
+  });
+
+  it('never takes a step with a matrix that is not positive definite: it is halved instead', () => {
+    const law: Law = { kind: 'bilinear', strength: 2e5, hardening: 0 };
+    const storey = { name: '', height: 3, mass: 1e3, gravity: 2e7, stiffness: 5e7, law };
+    const ground = Float64Array.from({ length: 4 }, (_, i) => 10 * Math.sin(i));
+    for (const damping of [
+      { kind: 'modal', ratios: [0.05] },
+      { kind: 'stiffness-proportional', mode: 1, ratio: 0.05 },
+    ] as const) {
+      const frame: Frame = { storeys: [storey], damping, pDelta: true };
+      for (const parts of [1, 2, 4, 64]) {
+        const result = run(frame, ground, 0.04, { step: { parts }, scale: 20 });
+        expect(result.energy.imbalance).toBeLessThan(0.5);
+        expect(result.storeys.peakDrift[0]).toBeLessThan(1);
+      }
+    }
+  });
+});
+
 describe('[DYN-12] a step allocates nothing', () => {
   it('in any law, with dampers, with full damping: the heap stays as it is over 20 000 steps', () => {
     for (const law of [{ kind: 'elastic' } as const, ...LAWS]) {

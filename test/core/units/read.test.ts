@@ -4,6 +4,7 @@ import {
   fromDisplay,
   printQuantity,
   printRatio,
+  printShort,
   printTyped,
   type Quantity,
   type System,
@@ -92,6 +93,13 @@ describe('[UNI-1] a typed text', () => {
     ['*(1+1)', 200],
   ])('%s changes the current value', (text, expected) => expect(value(text, 'ratio', 'si', 100)).toBe(expected));
 
+  test('a number beyond all numbers has a mend of its own', () => {
+    expect(readQuantity('1e400', 'force', 'si')).toEqual({
+      kind: 'unreadable',
+      why: '"1e400" is too large',
+      mend: 'Check its exponent and its figures',
+    });
+  });
   test('a change without a value, a unit of another kind, words and traps are unreadable, each with a mend', () => {
     for (const [text, quantity] of [
       ['+10%', 'length'],
@@ -311,6 +319,23 @@ describe('[UNI-3] a printed number', () => {
         }
       }
     }
+  });
+  test('for the eye a converted number has ten digits, and one that was typed all of its own', () => {
+    const strength = fromDisplay(8700, 'force', 'si');
+    expect(printTyped(strength, 'force', 'us')).toBe('1\u202f955.83780496748');
+    expect(printShort(strength, 'force', 'us')).toBe('1\u202f955.837805');
+    expect(printShort(fromDisplay(1234567.89012, 'force', 'us'), 'force', 'us')).toBe('1\u202f234\u202f567.89012');
+    fc.assert(
+      fc.property(
+        fc.oneof(fc.double({ min: 1e-6, max: 1e9, noNaN: true }), fc.constantFrom(1e-300, 3e-13, 1e21, 1.5e300)),
+        fc.constantFrom(...QUANTITIES),
+        (shown, quantity) => {
+          const si = fromDisplay(shown, quantity, 'si');
+          const back = value(printShort(si, quantity, 'us'), quantity, 'us');
+          expect(Math.abs((back as number) / si - 1)).toBeLessThan(1e-9);
+        },
+      ),
+    );
   });
   test('answers have fixed decimals, thousands from four digits, a real minus, none for nothing', () => {
     expect(printQuantity(9676e3, 'force', 'si')).toBe('9\u202f676');

@@ -14,8 +14,8 @@ const { LAW_A, LAW_B, LAW_C, LAW_D, DRIFT, FORCE, WORK } = FIELD;
 export const ELASTIC = 0;
 export const BILINEAR = 1;
 const PEAK_ORIENTED = 2;
-const BOUC_WEN = 3;
-const FLAG = 4;
+export const BOUC_WEN = 3;
+export const FLAG = 4;
 
 const NUMBERS: { readonly [kind in Law['kind']]: number } = {
   elastic: ELASTIC,
