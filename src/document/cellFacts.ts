@@ -1,5 +1,5 @@
 import { damperForce, yieldDrift } from '../core/frame/storeyFacts.ts';
-import { printQuantity, printRatio, printTyped, type System, unitOf } from '../core/units/quantities.ts';
+import { printQuantity, printRatio, printTyped, type System, toDisplay, unitOf } from '../core/units/quantities.ts';
 import { fieldOf, readAt } from './fields.ts';
 import type { Project, StoreyRow, Typed } from './project.ts';
 
@@ -82,7 +82,7 @@ function hardeningWords({ law, stiffness }: StoreyRow, system: System): string {
   const hardening = law.kind === 'elastic' ? null : numberOf(law.hardening);
   if (k === null || hardening === null || !(hardening >= 0 && hardening < 1)) return '';
   if (hardening === 0) return 'no stiffness after yield';
-  const after = printTyped(Number((hardening * k).toPrecision(3)), 'stiffness', system);
+  const after = printTyped(Number(toDisplay(hardening * k, 'stiffness', system).toPrecision(3)), 'ratio', system);
   return `${after} ${unitOf('stiffness', system)} after yield`;
 }
 

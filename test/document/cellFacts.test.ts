@@ -33,6 +33,7 @@ describe('what follows from a cell', () => {
 
   it('says what is left after yield', () => {
     expect(cellFacts(project, at(1, 'law.hardening'), 'si')).toBe('13.7 kN/mm after yield');
+    expect(cellFacts(project, at(1, 'law.hardening'), 'us')).toBe('77.9 kip/in after yield');
     expect(cellFacts(given({ 'law.hardening': 0 }), at(1, 'law.hardening'), 'si')).toBe('no stiffness after yield');
   });
 

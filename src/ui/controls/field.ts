@@ -1,5 +1,5 @@
 import type { Fault } from '../../core/fault.ts';
-import { printQuantity, printTyped, type Quantity, type System } from '../../core/units/quantities.ts';
+import { printQuantity, printShort, type Quantity, type System } from '../../core/units/quantities.ts';
 import { readQuantity } from '../../core/units/read.ts';
 import { faultAndMend } from '../../document/faultWords.ts';
 import { fieldOf, readAt } from '../../document/fields.ts';
@@ -20,7 +20,7 @@ export function quantityOf(path: string): Quantity | null {
 export function typedText(value: Typed, quantity: Quantity | null, system: System): string {
   if (value === null) return '';
   if (typeof value === 'string' || quantity === null) return String(value);
-  const full = printTyped(value, quantity, system);
+  const full = printShort(value, quantity, system);
   const even = printQuantity(value, quantity, system);
   return /e/i.test(full) || decimals(full) > decimals(even) ? full : even;
 }
@@ -34,7 +34,7 @@ function decimals(text: string): number {
 export function shownText(project: Project, path: string, system: System): string {
   const value = readAt(project, path);
   // Hardening is a figure or two: 3, not 3.00.
-  if (typeof value === 'number' && path.endsWith('.hardening')) return printTyped(value, 'percent', system);
+  if (typeof value === 'number' && path.endsWith('.hardening')) return printShort(value, 'percent', system);
   return typedText(value, quantityOf(path), system);
 }
 
@@ -86,7 +86,7 @@ function stepLabel(project: Project, path: string, value: Typed, system: System)
   const quantity = quantityOf(path);
   const say = (entry: Typed) => {
     if (entry === null || entry === '') return 'nothing';
-    return typeof entry === 'string' || quantity === null ? `"${entry}"` : printTyped(entry, quantity, system);
+    return typeof entry === 'string' || quantity === null ? `"${entry}"` : printShort(entry, quantity, system);
   };
   return `${fieldOf(path).label(project)} ${say(readAt(project, path))} to ${say(value)}`;
 }

@@ -1,4 +1,4 @@
-import { printQuantity, printTyped, type System } from '../../core/units/quantities.ts';
+import { printQuantity, printShort, type System } from '../../core/units/quantities.ts';
 import type { LawRow, StoreyRow, Typed } from '../../document/project.ts';
 import { typedText } from '../controls/field.ts';
 import { COLUMN_QUANTITIES, type InputColumn } from './columns.ts';
@@ -29,7 +29,7 @@ export function fullText(row: StoreyRow, column: InputColumn, system: System): s
   if (column === 'law') return row.law.kind;
   const value = cellValue(row, column);
   // As the line above and the edit show it.
-  if (column === 'hardening' && typeof value === 'number') return printTyped(value, 'percent', system);
+  if (column === 'hardening' && typeof value === 'number') return printShort(value, 'percent', system);
   return typedText(value, COLUMN_QUANTITIES[column], system);
 }
 
