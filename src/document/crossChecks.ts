@@ -54,6 +54,10 @@ const ROUNDING = 1e-9;
 
 function lawFaults(law: Record<string, unknown> | null, where: string): Fault[] {
   if (law?.kind === 'bouc-wen' && typeof law.beta === 'number' && typeof law.gamma === 'number') {
+    if (law.beta >= 0.5 && law.gamma > 0.5 + ROUNDING) {
+      const message = `is ${short(law.gamma)}, must be at most 0.5: beta is 1 - gamma, and 0.5 or more`;
+      return [{ code: 'out-of-range', where: `${where}.gamma`, message, mend: 'Type a gamma of at most 0.5' }];
+    }
     if (law.beta >= 0.5 && !(Math.abs(law.beta + law.gamma - 1) <= ROUNDING)) {
       const message = `beta + gamma is ${short(law.beta + law.gamma)}, must be 1`;
       const mend = `Type gamma ${short(1 - law.beta)}, or beta ${short(1 - law.gamma)}`;

@@ -294,8 +294,11 @@ function writePart(
   }
   if (row.law.kind === 'bouc-wen' && (key === 'beta' || key === 'gamma') && typeof value === 'number') {
     // They make 1: the one that is typed settles the other. Rounded, so that 1 - 0.9 is 0.1.
+    const rest = Number((1 - value).toPrecision(12));
+    // A gamma that no beta goes with is at fault itself, and not the beta that nobody typed.
+    if (key === 'gamma' && rest < 0.5) return write(project, path, value);
     const other = path.replace(/\w+$/, key === 'beta' ? 'gamma' : 'beta');
-    return write(write(project, path, value), other, Number((1 - value).toPrecision(12)));
+    return write(write(project, path, value), other, rest);
   }
   if (key !== 'kind' && key in row.law) return write(project, path, value);
   if (row.law.kind !== 'elastic' || (key !== 'strength' && key !== 'hardening')) {

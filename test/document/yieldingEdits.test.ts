@@ -1,4 +1,5 @@
 import { describe, expect, it } from 'vitest';
+import { cellFaults } from '../../src/document/cells.ts';
 import { demoProject } from '../../src/document/demo.ts';
 import { halvedStep, setLaw } from '../../src/document/edits.ts';
 import { readAt, writeAt } from '../../src/document/fields.ts';
@@ -68,6 +69,16 @@ describe('[DOC-5] beta and gamma of Bouc-Wen make 1', () => {
     expect([read(beta, 'beta'), read(beta, 'gamma')]).toEqual([0.9, 0.1]);
     const gamma = writeAt(smooth, 'frame.storeys[0].law.gamma', 0.2);
     expect([read(gamma, 'beta'), read(gamma, 'gamma')]).toEqual([0.8, 0.2]);
+  });
+
+  it('a gamma that no beta goes with is at fault where it was typed', () => {
+    const typed = writeAt(smooth, 'frame.storeys[0].law.gamma', 0.7);
+    expect([read(typed, 'beta'), read(typed, 'gamma')]).toEqual([0.5, 0.7]);
+    const faults = cellFaults(typed).map(({ where, message, mend }) => `${where} ${message}: ${mend}`);
+    expect(faults).toEqual([
+      'frame.storeys[0].law.gamma is 0.7, must be at most 0.5: beta is 1 - gamma, and 0.5 or more: Type a gamma of at most 0.5',
+    ]);
+    expect(cellFaults(writeAt(typed, 'frame.storeys[0].law.gamma', 0.3))).toEqual([]);
   });
 
   it('a text that cannot be read leaves the other alone', () => {
