@@ -67,6 +67,14 @@ test('unreadable and ambiguous texts stay in their cell, with words; no answer i
     .getByRole('button', { name: /^4\.2 m/ })
     .click();
   await expect(cell(page, 3, 'height')).toContainText('4.20');
+  // A pasted column that can be read two ways: the key that is pressed next does nothing.
+  await cell(page, 3, 'weight').click();
+  await pasteBlock(page, [['1,000']]);
+  const dialog = page.getByRole('dialog', { name: /How are the commas meant/ });
+  await expect(dialog.getByRole('button', { name: 'Do not paste' })).toBeFocused();
+  await page.keyboard.press('Enter');
+  await expect(dialog).toBeHidden();
+  await expect(cell(page, 3, 'weight')).not.toHaveText(/^1/);
 });
 
 test('zero, negative and absurd values are refused at the cell', async ({ page }) => {

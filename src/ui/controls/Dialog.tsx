@@ -28,7 +28,10 @@ export function Dialog({ title, onClose, width = 560, foot, sticky = false, chil
     if (dialog !== null && !dialog.open) {
       dialog.showModal();
       // The browser would take the cross, which stands first: start at the first field, else at the main button.
-      const first = dialog.querySelector<HTMLElement>(FIRST_STOP) ?? dialog.querySelector<HTMLElement>(MAIN_BUTTON);
+      // Where a wrong answer would be a wrong number, the dialog names the button that does nothing.
+      const named = dialog.querySelector<HTMLElement>('[data-first]');
+      const first =
+        named ?? dialog.querySelector<HTMLElement>(FIRST_STOP) ?? dialog.querySelector<HTMLElement>(MAIN_BUTTON);
       first?.focus();
     }
     // What held the focus may be taken out (a step of the dialog is done): the keys must still reach the dialog.

@@ -1,5 +1,5 @@
 import { useEffect, useMemo, useState } from 'react';
-import { printTyped, type System, unitOf } from '../../core/units/quantities.ts';
+import { printShort, type System, unitOf } from '../../core/units/quantities.ts';
 import { documentStore, edit } from '../../state/document.ts';
 import { setSession } from '../../state/session.ts';
 import { Button } from '../controls/Button.tsx';
@@ -130,7 +130,7 @@ function AskCommas({
 }) {
   const quantity = COLUMN_QUANTITIES[plan.column];
   const print = (value: number | null | undefined) =>
-    value === null || value === undefined || quantity === null ? '' : printTyped(value, quantity, system);
+    value === null || value === undefined || quantity === null ? '' : printShort(value, quantity, system);
   const unit = quantity === null ? '' : unitOf(quantity, system);
   const rows = plan.texts.map((text, row) => ({ text, row })).filter(({ text }) => text !== '');
   return (
@@ -139,7 +139,9 @@ function AskCommas({
       onClose={onClose}
       foot={
         <>
-          <Button onClick={onClose}>Do not paste</Button>
+          <Button data-first="" onClick={onClose}>
+            Do not paste
+          </Button>
           <Button onClick={() => onChoose('thousands')}>Thousands</Button>
           <Button onClick={() => onChoose('decimal')}>Decimals</Button>
         </>
