@@ -48,3 +48,31 @@ test('what is out of date is grey, and drawn where it was', async ({ page }) => 
   await expect(page.locator('.foot.cautions')).toContainText('as of the last finished run');
   await expect(page.locator('.foot.evidence .as-of')).toBeInViewport({ ratio: 1 });
 });
+
+test('the cursor goes over the loop of its own storey only', async ({ page }) => {
+  await openDemo(page);
+  await expect(page.locator('.loop-cursor')).toBeVisible();
+  await page.evaluate(() => {
+    const seen: number[] = [];
+    Object.assign(window, { seen });
+    const box = (selector: string) => document.querySelector(selector)?.getBoundingClientRect();
+    const look = () => {
+      const plot = document.querySelector('.square .plot');
+      const [grey, ink] = [box('.square .scatterlayer path.js-line'), box('.loop-cursor > path')];
+      const shown = plot !== null && getComputedStyle(plot).visibility === 'visible';
+      if (grey && ink && shown) seen.push(Math.max(Math.abs(grey.top - ink.top), Math.abs(grey.left - ink.left)));
+      else if (ink) seen.push(Number.POSITIVE_INFINITY);
+      requestAnimationFrame(look);
+    };
+    look();
+  });
+  for (const storey of [6, 2, 8]) {
+    await cell(page, storey, 'weight').click();
+    await expect(page.getByRole('img', { name: new RegExp(`^Force and drift, storey ${storey} `) })).toBeVisible();
+    await expect(page.locator('.loop-cursor')).toBeVisible();
+  }
+  const seen = await page.evaluate(() => (window as unknown as { seen: number[] }).seen);
+  expect(seen.length).toBeGreaterThan(10);
+  // The grey line and that of the cursor are thinned alike: they lie on each other.
+  expect(Math.max(...seen)).toBeLessThan(2);
+});

@@ -1,4 +1,4 @@
-import { useMemo } from 'react';
+import { useCallback, useMemo, useState } from 'react';
 import type { Table } from '../../core/report/table.ts';
 import type { System } from '../../core/units/quantities.ts';
 import { useDocument } from '../../state/document.ts';
@@ -9,6 +9,7 @@ import { LoopCursor } from './LoopCursor.tsx';
 import { forceOf, type Loop, loopOf } from './loop.ts';
 import { type LoopAxes, loopAxes } from './loopAxes.ts';
 import { loopPlot } from './loopPlot.ts';
+import { loopWords } from './loopWords.ts';
 import { Plot } from './Plot.tsx';
 import { KeyLine, KeyTick, plotSize, SquareFrame, type SquareLayout } from './SquareFrame.tsx';
 import type { Tokens } from './tokens.ts';
@@ -43,13 +44,23 @@ export function ForceDrift({ layout, tokens, system, old, shown }: ForceDriftPro
     () => (loop === null || axes === null ? null : () => loopPlot(loop, axes, tokens, withBackbone)),
     [loop, axes, tokens, withBackbone],
   );
+  const of = shown === null || loop === null ? '' : `${shown.storey} ${loop.which} ${shown.motion}`;
+  // The cursor goes over the loop that is drawn: the one that is shown next may still wait for its turn.
+  const [drawn, setDrawn] = useState<{ readonly of: string; readonly loop: Loop; readonly axes: LoopAxes } | null>(
+    null,
+  );
+  const onDrawn = useCallback(
+    () => setDrawn(loop === null || axes === null ? null : { of, loop, axes }),
+    [of, loop, axes],
+  );
   const letter = letterOf(
     Math.max(
       0,
       motions.findIndex(({ name }) => name === shown?.motion),
     ),
   );
-  const words = shown === null || loop === null || axes === null ? 'no run yet' : wordsOf(loop, axes, shown, letter);
+  const words =
+    shown === null || loop === null || axes === null ? 'no run yet' : loopWords(loop, axes, shown.storey, letter);
   const backbone = withBackbone && loop?.which === 'law' && loop.storey.law.kind !== 'elastic';
   return (
     <SquareFrame
@@ -84,17 +95,10 @@ export function ForceDrift({ layout, tokens, system, old, shown }: ForceDriftPro
       options={loop === null ? [] : optionsOf(loop, withBackbone)}
       table={loop === null || shown === null ? null : () => loopTable(loop, shown)}
     >
-      <Plot spec={spec} label={`Force and drift, ${words}`} old={old} />
-      {loop !== null && axes !== null && <LoopCursor loop={loop} axes={axes} />}
+      <Plot spec={spec} label={`Force and drift, ${words}`} old={old} of={of} onDrawn={onDrawn} />
+      {spec !== null && drawn?.of === of && <LoopCursor loop={drawn.loop} axes={drawn.axes} />}
     </SquareFrame>
   );
-}
-
-/** What is shown, in as many words as the head has room for. */
-function wordsOf({ which }: Loop, { force, drift }: LoopAxes, { storey }: ShownRun, letter: string): string {
-  const place = `storey ${storey + 1}`;
-  if (which === 'law') return `${place} under ${letter}; ${force.unit} against ${drift.unit}`;
-  return `${which === 'shear' ? `${place} with damper` : `damper of ${place}`}; ${force.unit}, ${drift.unit}`;
 }
 
 /** Only what this storey has is offered. */

@@ -9,17 +9,26 @@ export interface PlotProps {
   readonly label: string;
   /** Drawn from numbers that are no longer those of the document. */
   readonly old?: boolean;
+  /** Of what: while the drawing is still that of something else it is not shown. */
+  readonly of?: string;
+  /** Called when what `spec` makes is drawn. */
+  readonly onDrawn?: () => void;
 }
 
 /** One plot, drawn by the plot library when its turn comes: the answers go first. */
-export function Plot({ spec, label, old = false }: PlotProps) {
+export function Plot({ spec, label, old = false, of = '', onDrawn }: PlotProps) {
   const place = useRef<HTMLDivElement>(null);
   const [failed, setFailed] = useState(false);
+  const [drawn, setDrawn] = useState(of);
   useEffect(() => {
     const element = place.current;
     if (element === null) return;
-    if (spec === null) {
+    const clear = () => {
       clearPlot(element);
+      setDrawn(of);
+    };
+    if (spec === null) {
+      clear();
       return;
     }
     let wanted = true;
@@ -27,11 +36,15 @@ export function Plot({ spec, label, old = false }: PlotProps) {
       if (!wanted) return;
       const made = spec();
       if (made === null) {
-        clearPlot(element);
+        clear();
         return;
       }
       await drawPlot(element, made).then(
-        () => setFailed(false),
+        () => {
+          setFailed(false);
+          setDrawn(of);
+          onDrawn?.();
+        },
         () => setFailed(true),
       );
     });
@@ -40,7 +53,7 @@ export function Plot({ spec, label, old = false }: PlotProps) {
       wanted = false;
       withdraw();
     };
-  }, [spec]);
+  }, [spec, of, onDrawn]);
   useEffect(() => {
     const element = place.current;
     return () => {
@@ -49,7 +62,12 @@ export function Plot({ spec, label, old = false }: PlotProps) {
   }, []);
   return (
     <>
-      <div className={`plot ${old ? 'old' : ''}`} role="img" aria-label={label}>
+      <div
+        className={`plot ${old ? 'old' : ''}`}
+        role="img"
+        aria-label={label}
+        style={{ visibility: drawn === of ? undefined : 'hidden' }}
+      >
         {/* The library keeps classes of its own on its element: nothing else may write there. */}
         <div ref={place} />
       </div>

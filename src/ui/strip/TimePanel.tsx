@@ -77,7 +77,12 @@ export const TimePanel = memo(function TimePanel(props: TimePanelProps) {
           height: height + AROUND.above + AROUND.below,
         }}
       >
-        <Plot spec={spec} label={sentence(content, title, system)} old={old} />
+        <Plot
+          spec={spec}
+          label={sentence(content, title, system)}
+          old={old}
+          of={content === null || shown === null ? '' : `${content.kind} ${content.place} ${shown.motion}`}
+        />
       </div>
     </>
   );
