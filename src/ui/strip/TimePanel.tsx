@@ -130,8 +130,14 @@ function EnergyWords({
   const beside = plot.content.stack.filter(({ part }) => !named.has(part));
   return (
     <>
-      <p className="quiet small">input against the sum,</p>
-      <p className="quiet small">apart by {apartWords(imbalance, plot.system)}</p>
+      {plot.content.strainBelowZero ? (
+        <p className="quiet small">strain below zero: P-Delta,</p>
+      ) : (
+        <p className="quiet small">input against the sum,</p>
+      )}
+      <p className="quiet small">
+        {plot.content.strainBelowZero && 'sums '}apart by {apartWords(imbalance, plot.system)}
+      </p>
       {beside.length > 0 && (
         <p className="layer-key">
           {[...beside].reverse().map(({ part }) => (
@@ -162,7 +168,8 @@ const TABLE_DECIMALS: Readonly<Partial<Record<Quantity, number>>> = {
   energy: 2,
 };
 
-function historyTable({ kind, name, place, quantity, values, interval, stack }: PanelContent, motion: string): Table {
+function historyTable(content: PanelContent, motion: string): Table {
+  const { kind, name, place, quantity, values, interval, stack } = content;
   const energy = kind === 'energy';
   const decimals = TABLE_DECIMALS[quantity];
   const own = { key: 'value', name: energy ? 'Input' : name, quantity, decimals, values: Array.from(values) };
@@ -181,7 +188,7 @@ function historyTable({ kind, name, place, quantity, values, interval, stack }: 
       own,
       ...stack.map(({ part, sum }, i) => ({
         key: part,
-        name: `${ENERGY_NAMES[part].slice(0, 1).toUpperCase()}${ENERGY_NAMES[part].slice(1)}`,
+        name: `${capital(ENERGY_NAMES[part])}${part === 'strain' && content.strainBelowZero ? ' (below zero: P-Delta)' : ''}`,
         quantity,
         decimals,
         values: Array.from(sum, (value, j) => value - below(i, j)),
@@ -190,9 +197,13 @@ function historyTable({ kind, name, place, quantity, values, interval, stack }: 
   };
 }
 
+function capital(words: string): string {
+  return `${words.slice(0, 1).toUpperCase()}${words.slice(1)}`;
+}
+
 function sentence(content: PanelContent | null, title: string, system: System): string {
   if (content === null) return `${title}: no run yet`;
   const unit = unitOfContent(content, system);
   const place = content.place === null ? '' : `, ${content.place}`;
-  return `${title}${place}, over time: peak ${unit.print(content.peak.value, unit.decimals)} at ${printQuantity(content.peak.time, 'time', system)} s`;
+  return `${title}${place}, over time: peak ${unit.print(content.peak.value, unit.decimals)} at ${printQuantity(content.peak.time, 'time', system)} s${content.strainBelowZero ? '; strain below zero: P-Delta' : ''}`;
 }

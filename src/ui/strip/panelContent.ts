@@ -28,6 +28,11 @@ export interface PanelContent {
   readonly peak: { readonly value: number; readonly time: number };
   /** Energies stacked from below: each entry is the sum up to and with its part. Only for `energy`. */
   readonly stack: readonly { readonly part: EnergyPart; readonly sum: Float64Array }[];
+  /**
+   * The strain energy goes below zero: with P-Delta it holds the potential that gravity loses as a storey leans. What is
+   * stacked then stands above the input.
+   */
+  readonly strainBelowZero: boolean;
 }
 
 export const ENERGY_PARTS = ['hysteretic', 'damping', 'dampers', 'strain', 'kinetic'] as const;
@@ -63,6 +68,7 @@ export function contentOf(
     interval,
     peak,
     stack: [],
+    strainBelowZero: false,
   });
   const found = (values: Float64Array, value: number) => ({ value, time: interval * largestAt(values) });
   const here = `storey ${storey + 1}`;
@@ -97,10 +103,17 @@ export function contentOf(
     case 'energy': {
       const { energy } = histories;
       const peak = { value: energy.input[largestAt(energy.input)], time: interval * largestAt(energy.input) };
-      return { ...of('energy', null, energy.input, peak), stack: stacked(energy) };
+      return {
+        ...of('energy', null, energy.input, peak),
+        stack: stacked(energy),
+        strainBelowZero: energy.strain.some((strain) => strain < -BELOW_ZERO * Math.abs(peak.value)),
+      };
     }
   }
 }
+
+/** A strain energy is below zero from so much of the largest input: less is rounding. */
+const BELOW_ZERO = 1e-6;
 
 /** Storey drift over height [-], entry by entry. */
 function driftRatio(own: Float64Array, storey: number, displacement: Float64Array, height: number): Float64Array {

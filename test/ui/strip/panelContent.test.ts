@@ -38,6 +38,22 @@ describe('contentOf', () => {
     expect(apart).toBeGreaterThan(0);
   });
 
+  it('says where P-Delta takes the strain energy below zero, as in a collapse', () => {
+    const falling = {
+      ...frame,
+      pDelta: true,
+      storeys: frame.storeys.map((storey) => ({
+        ...storey,
+        law: { kind: 'bilinear' as const, strength: 6e4, hardening: 0 },
+      })),
+    };
+    const collapse = run(falling, noise(5, 1500), 0.01, { histories: true, scale: 3 });
+    expect(collapse.ending).not.toBeNull();
+    expect(Math.min(...(collapse.histories?.energy.strain ?? []))).toBeLessThan(0);
+    expect(contentOf('energy', collapse, 0, heights)?.strainBelowZero).toBe(true);
+    expect(contentOf('energy', result, 0, heights)?.strainBelowZero).toBe(false);
+  });
+
   it('shows an isolator by its displacement, the storeys above it by their drift ratio', () => {
     const isolator = contentOf('drift', result, 0, heights, true);
     expect(isolator?.quantity).toBe('displacement');
