@@ -108,8 +108,8 @@ function Why({ project, system, faults, onLaw }: WhyProps) {
       onClick={() => goTo(first.where, onLaw)}
     >
       <span className="detail">
+        {faults.length > 1 && `${faults.length} things to settle, first: `}
         {sentence}
-        {faults.length > 1 && `; ${faults.length} things to settle`}
       </span>
     </button>
   );
