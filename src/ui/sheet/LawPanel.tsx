@@ -1,6 +1,7 @@
 import { type KeyboardEvent, useEffect, useId, useLayoutEffect, useRef, useState } from 'react';
 import { cellFacts } from '../../document/cellFacts.ts';
 import { faultAndMend } from '../../document/faultWords.ts';
+import { fieldOf } from '../../document/fields.ts';
 import type { Typed } from '../../document/project.ts';
 import { effectiveProject, useDocument } from '../../state/document.ts';
 import { useResults } from '../../state/results.ts';
@@ -13,7 +14,7 @@ import { isolate } from './commands.ts';
 import { LawDrawing } from './LawDrawing.tsx';
 import { LawGlyph } from './LawGlyph.tsx';
 import { chooseLaw, commitShape, type Scope, sameFor } from './lawCommands.ts';
-import { LAWS, type LawKind } from './lawWords.ts';
+import { LAWS, type LawKind, sourceOf } from './lawWords.ts';
 import './lawPanel.css';
 
 export interface LawPanelProps {
@@ -41,6 +42,13 @@ const KEYS: Readonly<Record<LawKind, readonly Key[]>> = {
   flag: ['strength', 'hardening', 'ratio'],
 };
 
+/** Numbers whose names say little, in a few words. */
+const ABOUT: Readonly<Partial<Record<LawKind, string>>> = {
+  'bouc-wen':
+    'n, from 1: the higher, the sharper the yield. beta + gamma = 1, one typed settles the other; gamma 0.5 unloads as stiff as it began, less unloads stiffer.',
+  flag: 'Flag over strength: how far the unloading line runs below the loading one, over the strength; at most 1 - hardening, so that it comes back.',
+};
+
 /** The law of a storey: chosen in plain words, its numbers, and its backbone and cycles as they are typed. */
 export function LawPanel({ storey, onClose }: LawPanelProps) {
   const panel = useRef<HTMLDivElement>(null);
@@ -57,6 +65,7 @@ export function LawPanel({ storey, onClose }: LawPanelProps) {
   if (row === undefined) return null;
   const { law, name } = row;
   const path = `frame.storeys[${storey}].law`;
+  const says = ABOUT[law.kind];
   const keys = KEYS[law.kind];
   const drawable = above0(row.stiffness) && !faults.some(({ where }) => where.startsWith(path));
   const others = faults.filter(({ where }) => where === path || where === `frame.storeys[${storey}].role`);
@@ -98,7 +107,7 @@ export function LawPanel({ storey, onClose }: LawPanelProps) {
       <div className="law-inputs">
         {keys.length === 0 && <span className="quiet">Nothing to type: the stiffness is all of it.</span>}
         {keys.map((key) => (
-          <div key={key} className="law-input">
+          <div key={key} className="law-input" title={fieldOf(`${path}.${key}`).hint(system)}>
             <span aria-hidden="true">{INPUTS[key]}</span>
             <NumberField
               path={`${path}.${key}`}
@@ -110,12 +119,14 @@ export function LawPanel({ storey, onClose }: LawPanelProps) {
           </div>
         ))}
       </div>
+      {says !== undefined && <p className="law-facts quiet">{says}</p>}
       <p className="law-facts">
         {others.length > 0 ? (
           <span className="field-words">{others.map((fault) => faultAndMend(fault, system)).join('; ')}</span>
         ) : (
           cellFacts(project, path, system)
         )}
+        <span className="law-source">{sourceOf(law.kind)}</span>
       </p>
       <div className="law-scope">
         <span className="quiet">Same for</span>
@@ -194,6 +205,9 @@ function panelKey(event: KeyboardEvent, panel: HTMLElement | null, onClose: () =
   (event.shiftKey ? stops.at(-1) : stops[0])?.focus();
 }
 
+/** Least distance to the edge of the window [px]. */
+const MARGIN = 8;
+
 /** Stands beside the cell of the law, starts at the law that is chosen, and gives the focus back to the cell. */
 function useBeside(panel: React.RefObject<HTMLDivElement | null>, storey: number, onClose: () => void): void {
   useLayoutEffect(() => {
@@ -203,7 +217,14 @@ function useBeside(panel: React.RefObject<HTMLDivElement | null>, storey: number
     element.showPopover();
     placeBeside(element, cell, 'left');
     element.querySelector<HTMLElement>('[role="radio"][aria-checked="true"]')?.focus();
+    // A fault makes it taller: it moves up by as much as it would leave the window.
+    const grown = new ResizeObserver(() => {
+      const lowest = window.innerHeight - MARGIN - element.offsetHeight;
+      if (element.offsetTop > lowest) element.style.top = `${Math.max(MARGIN, lowest)}px`;
+    });
+    grown.observe(element);
     return () => {
+      grown.disconnect();
       const focused = document.activeElement;
       if (focused === document.body || element.contains(focused)) cell.focus({ preventScroll: true });
     };

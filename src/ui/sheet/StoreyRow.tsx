@@ -91,7 +91,11 @@ export const StoreyRow = memo(function StoreyRow(props: StoreyRowProps) {
             row.name || (chosen || storey === 0 ? 'name' : '\u00a0')
           )}
         </span>
-        {shown && <span className={`tag ${failed ? 'failed' : ''}`}>{tag}</span>}
+        {shown && (
+          <span className={`tag ${failed ? 'failed' : ''} ${!failed && tag.length > 10 ? 'wide' : ''}`} title={tag}>
+            {tag}
+          </span>
+        )}
         <RowMenu storey={storey} row={row} />
       </div>
       {columns.slice(1).map((column, index) => (

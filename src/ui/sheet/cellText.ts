@@ -1,4 +1,4 @@
-import { printQuantity, printShort, type System } from '../../core/units/quantities.ts';
+import { printQuantity, printShort, type System, toDisplay } from '../../core/units/quantities.ts';
 import type { LawRow, StoreyRow, Typed } from '../../document/project.ts';
 import { typedText } from '../controls/field.ts';
 import { COLUMN_QUANTITIES, type InputColumn } from './columns.ts';
@@ -47,7 +47,14 @@ export function cellText(row: StoreyRow, column: InputColumn, system: System, si
     const text = printQuantity(value, quantity, system, decimals);
     if (text.length <= signs) return text;
   }
-  return printQuantity(value, quantity, system, 0);
+  const whole = printQuantity(value, quantity, system, 0);
+  return whole.length <= signs ? whole : powerOfTen(toDisplay(value, quantity, system), signs);
+}
+
+/** "3.00e6": a number too long for its cell, with as many figures as it has room for, three at most. */
+function powerOfTen(value: number, signs: number): string {
+  const texts = [2, 1, 0].map((decimals) => value.toExponential(decimals).replace('e+', 'e').replace('-', '−'));
+  return texts.find((text) => text.length <= signs) ?? texts[2];
 }
 
 /** Whether a cell holds nothing because its storey has no such part: the cell says "none". */

@@ -15,6 +15,20 @@ export const LAWS: readonly { readonly kind: LawKind; readonly name: string; rea
   { kind: 'flag', name: 'Flag', words: 'yields and comes back; post-tensioned' },
 ];
 
+/** Where each law comes from, as its own file in the calculation says it (from memory there). */
+const SOURCES: Readonly<Record<LawKind, string>> = {
+  elastic: '',
+  bilinear: 'Source: Prager (1956), kinematic hardening',
+  'peak-oriented': 'Source: Clough and Johnston (1966); partial unloading, Mahin and Bertero (1976)',
+  'bouc-wen': 'Source: Wen (1976)',
+  flag: 'Source: Christopoulos, Filiatrault and Folz (2002)',
+};
+
+/** "Source: Wen (1976)"; empty for the elastic law, which needs none. */
+export function sourceOf(kind: LawKind): string {
+  return SOURCES[kind];
+}
+
 /** The law that a text names, however it is written: "Peak oriented", "boucwen"; null: none. */
 export function lawNamed(text: string): LawKind | null {
   const letters = (name: string) => name.toLowerCase().replace(/[^a-z]/g, '');

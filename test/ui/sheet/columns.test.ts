@@ -72,6 +72,10 @@ describe('what stands in a cell', () => {
     expect(strength(8)).toBe('9\u202f400.12');
     expect(strength(7)).toBe('9\u202f400.1');
     expect(strength(5)).toBe('9\u202f400');
+    expect(strength(4)).toBe('9e3');
+    const gravity = (signs: number) =>
+      cellText(row(writeAt(demo, cellPath(0, 'gravity'), 3e9), 0), 'gravity', 'si', signs);
+    expect([gravity(9), gravity(8), gravity(5)]).toEqual(['3\u202f000\u202f000', '3.00e6', '3.0e6']);
     expect(fullText(row(typed, 0), 'strength', 'si')).toBe('9\u202f400.123');
   });
 });
