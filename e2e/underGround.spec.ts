@@ -53,8 +53,17 @@ test('panels change what they show and give their numbers', async ({ page }) => 
 });
 
 test('the analysis dialog says what a scheme brings, and undo takes it back', async ({ page }) => {
-  await page.getByRole('button', { name: /^Newmark/ }).click();
   const dialog = page.getByRole('dialog', { name: 'Analysis' });
+  for (const [choice, section] of [
+    [/^P-Delta/, 'P-Delta'],
+    [/^step /, 'Step'],
+    [/^Rayleigh/, 'Damping'],
+  ] as const) {
+    await page.locator('.foot.evidence').getByRole('button', { name: choice }).click();
+    await expect(dialog.getByRole('region', { name: section }).locator(':focus')).toBeInViewport({ ratio: 1 });
+    await page.keyboard.press('Escape');
+  }
+  await page.getByRole('button', { name: /^Newmark/ }).click();
   await expect(dialog.getByText('stable at any step')).toBeVisible();
   await dialog.getByLabel('Scheme').selectOption('Central difference');
   await expect(dialog.getByText(/^stable up to a step of 0\.\d+ s for this frame$/)).toBeVisible();

@@ -10,6 +10,9 @@ export interface Selection {
   readonly anchorColumn: string;
 }
 
+/** The sections of the analysis dialog, by their titles. */
+export type AnalysisPart = 'Method' | 'Step' | 'Damping' | 'P-Delta' | 'Limit';
+
 /** What is neither saved with the project nor undone. System and theme are remembered in localStorage. */
 export interface SessionState {
   readonly system: 'si' | 'us';
@@ -29,6 +32,8 @@ export interface SessionState {
   /** Motion lit everywhere by hovering; null: none. */
   readonly lit: string | null;
   readonly dialog: 'none' | 'import' | 'tables' | 'keys' | 'analysis' | 'columns' | 'evidence' | 'bench';
+  /** Section of the analysis dialog that it opens at; null: its top. The dialog takes it when it opens. */
+  readonly analysisPart: AnalysisPart | null;
   /** A short word at the foot (an undo across steps, a file saved); null: none. */
   readonly toast: string | null;
 }
@@ -47,6 +52,7 @@ export const sessionStore = createStore<SessionState>(() => ({
   range: null,
   lit: null,
   dialog: 'none',
+  analysisPart: null,
   toast: null,
   ...remembered(),
 }));

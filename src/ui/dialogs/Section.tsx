@@ -1,10 +1,11 @@
 import type { ReactNode } from 'react';
 import type { Fault } from '../../core/fault.ts';
 import { faultWords } from '../../document/faultWords.ts';
+import type { AnalysisPart } from '../../state/session.ts';
 import { useSession } from '../../state/session.ts';
 
 export interface SectionProps {
-  readonly title: string;
+  readonly title: AnalysisPart;
   /** What it decides, and where it comes from. */
   readonly about: ReactNode;
   readonly children: ReactNode;

@@ -60,8 +60,10 @@ function goTo({ cause }: Caution): void {
       setSession({ screen: 'motions', motion: cause.motion });
       return;
     case 'analysis':
+      setSession({ dialog: 'analysis', analysisPart: 'Step' });
+      return;
     case 'damping':
-      setSession({ dialog: 'analysis' });
+      setSession({ dialog: 'analysis', analysisPart: 'Damping' });
       return;
     case 'limit':
       setSession({ screen: 'sheet' });

@@ -1,7 +1,9 @@
+import { AIM } from '../../core/dynamics/autoStep.ts';
 import { printQuantity } from '../../core/units/quantities.ts';
 import { type Answers, useResults } from '../../state/results.ts';
-import { setSession } from '../../state/session.ts';
+import { type AnalysisPart, setSession } from '../../state/session.ts';
 import { dampingWords, methodWords } from './analysisWords.ts';
+import { percent, percentBeside, runsWords, tookWords } from './evidenceWords.ts';
 import { useOldAnswers } from './oldAnswers.ts';
 
 /** How good the numbers are: what was assumed, the step, its error, the energy balance. The choices open their dialog. */
@@ -34,14 +36,14 @@ export function Evidence() {
       </h2>
       <ul className="facts">
         {old && <li className="as-of">of the last finished run, {clock(answers.at)}</li>}
-        <Choice>
+        <Choice part="Damping">
           <Worded words={dampingWords(frame.damping)} from=" in " />
         </Choice>
-        <Choice>P-Delta {frame.pDelta ? 'on' : 'off'}</Choice>
-        <Choice>
+        <Choice part="P-Delta">P-Delta {frame.pDelta ? 'on' : 'off'}</Choice>
+        <Choice part="Method">
           <Worded words={methodWords(analysis.method)} from="," />
         </Choice>
-        <Choice>
+        <Choice part="Step">
           step {stepSizes(answers)} s{stepOrigin(answers)}
         </Choice>
         {stepErrors !== null && <StepError errors={Object.values(stepErrors)} />}
@@ -72,17 +74,16 @@ export function Evidence() {
         </li>
       </ul>
       <span className="at-end">
-        {answers.runs.filter(({ run }) => run.ending === null).length} of {answers.case.motions.length} runs in{' '}
-        <b>{printQuantity(answers.took / 1000, 'time', 'si', 2)} s</b>
+        {runsWords(answers.runs.map(({ run }) => run.ending === null))} in <b>{tookWords(answers.took)}</b>
       </span>
     </section>
   );
 }
 
-function Choice({ children }: { readonly children: React.ReactNode }) {
+function Choice({ part, children }: { readonly part: AnalysisPart; readonly children: React.ReactNode }) {
   return (
     <li>
-      <button type="button" className="choice" onClick={() => setSession({ dialog: 'analysis' })}>
+      <button type="button" className="choice" onClick={() => setSession({ dialog: 'analysis', analysisPart: part })}>
         {children}
       </button>
     </li>
@@ -106,8 +107,8 @@ function StepError({ errors }: { readonly errors: readonly number[] }) {
   const largest = Math.max(...errors);
   return (
     <li>
-      step error <b>{percent(largest)}</b>
-      <span className="long">, aim below 1 %</span>
+      step error <b>{percentBeside(AIM, largest)}</b>
+      <span className="long">, aim below {printQuantity(AIM, 'percent', 'si', 0)} %</span>
     </li>
   );
 }
@@ -138,13 +139,6 @@ function Halved({ runs }: { readonly runs: Answers['runs'] }) {
       steps halved <b>{printQuantity(halvings, 'count', 'si')}</b>
     </li>
   );
-}
-
-/** A ratio as percent with two figures that count. */
-function percent(ratio: number): string {
-  if (ratio < 0.00001) return 'under 0.001 %';
-  const decimals = ratio >= 0.01 ? 1 : ratio >= 0.00005 ? 2 : 3;
-  return `${printQuantity(ratio, 'percent', 'si', decimals)} %`;
 }
 
 function overDecimals(value: number): number {
