@@ -5,6 +5,7 @@ import type { Loop } from './loop.ts';
 import { type LoopAxes, reachOf } from './loopAxes.ts';
 import { MARGIN } from './template.ts';
 import { thinnedPath } from './thin.ts';
+import { valueWords } from './valueWords.ts';
 
 /** Room that the words at the cursor take [px]. */
 const WORDS = 150;
@@ -33,8 +34,7 @@ export function LoopCursor({ loop, axes }: { readonly loop: Loop; readonly axes:
         text.setAttribute('x', (left ? x - 8 : x + 8).toFixed(1));
         text.setAttribute('y', (left ? Math.max(6, y - 8) : below).toFixed(1));
         text.setAttribute('text-anchor', left ? 'end' : 'start');
-        const decimals = axes.force.decimals === 0 ? 0 : 1;
-        text.textContent = `${axes.drift.print(drift, axes.drift.decimals)} ${axes.drift.unit}, ${axes.force.print(value, decimals)} ${axes.force.unit}${time > end + loop.interval ? ', the end' : ''}`;
+        text.textContent = `${valueWords(axes.drift, drift)}, ${valueWords(axes.force, value)}${time > end + loop.interval ? ', the end' : ''}`;
       }),
     [loop, axes, path, end],
   );
