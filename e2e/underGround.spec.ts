@@ -91,4 +91,7 @@ test('a motion left out asks for its reason, and the suite says so', async ({ pa
   await expect(page.getByText(`${count - 1} records in use, 1 left out`)).toBeVisible();
   await page.getByRole('button', { name: /^Response/ }).click();
   await expect(page.getByText(new RegExp(`${count - 1} of ${count} motions`)).first()).toBeVisible();
+  await page.getByRole('button', { name: /^Bring . back$/ }).click();
+  await expect(page.getByText(new RegExp(`${count - 1} of ${count} motions`))).toHaveCount(0);
+  await expect(page.locator('[role="grid"] :focus')).toHaveCount(1);
 });

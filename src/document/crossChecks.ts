@@ -98,7 +98,7 @@ function motionFaults(motions: readonly unknown[]): Fault[] {
       const before = first.get(name);
       if (before === undefined) first.set(name, i);
       else {
-        const message = `"${name}" is also the name of motions[${before}]: names are unique in a project`;
+        const message = `"${name}" is also the name of motion ${before + 1}: names are unique in a project`;
         faults.push({ code: 'same-name', where: `motions[${i}].name`, message, mend: 'Give it another name' });
       }
     }

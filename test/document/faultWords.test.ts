@@ -61,6 +61,11 @@ describe('[DOC-4] the sentence of a fault names its place once and in words', ()
       expect(faultSentence(isolated, fault, 'si')).toMatch(/^storey 3: only the first storey/);
     }
     expect(cellFaults(isolated).length).toBe(1);
+    const [first, ...rest] = demo().motions;
+    const twice = { ...demo(), motions: [first, { ...rest[0], name: first.name }, ...rest.slice(1)] };
+    expect(cellFaults(twice).map((fault) => faultSentence(twice, fault, 'si'))).toEqual([
+      expect.stringMatching(/^Motion 2, name: ".*" is also the name of motion 1: names are unique in a project$/),
+    ]);
     const places = [
       'frame.storeys[1]',
       'frame.storeys[1].law.kind',

@@ -9,6 +9,7 @@ import { runNow, stop, useResults } from '../../state/results.ts';
 import { useSession } from '../../state/session.ts';
 import { Boundary } from '../controls/Boundary.tsx';
 import { Button } from '../controls/Button.tsx';
+import { focusSheet } from '../controls/focusSheet.ts';
 import { CautionMark, Icon } from '../controls/Icon.tsx';
 import { goTo } from './goTo.ts';
 import { Mends } from './later.ts';
@@ -43,7 +44,7 @@ export function Verdict({ letters, onLaw }: VerdictProps) {
         detail={waits ? '' : why}
       >
         {waits && (
-          <Button kind="primary" size="medium" onClick={runNow}>
+          <Button kind="primary" size="medium" onClick={runAndGoOn}>
             Run {answers.case.motions.length} motions
           </Button>
         )}
@@ -188,6 +189,12 @@ function Running() {
   );
 }
 
+/** The button goes with the answer that was asked for. */
+function runAndGoOn(): void {
+  runNow();
+  focusSheet();
+}
+
 function bringBack(name: string): void {
   edit(`${name} brought back`, (project) => ({
     ...project,
@@ -197,4 +204,5 @@ function bringBack(name: string): void {
       return { ...rest, used: true };
     }),
   }));
+  focusSheet();
 }
