@@ -43,6 +43,7 @@ test('schemes stand side by side, and one is taken into the analysis as one step
   await page.getByRole('button', { name: 'Compare schemes' }).click();
   const dialog = page.getByRole('dialog', { name: 'Compare schemes' });
   await expect(dialog.getByText(/^28 of 28 runs done/)).toBeVisible();
+  await expect(dialog).toContainText('below zero: the scheme takes less than the physical damping');
   await dialog.getByRole('button', { name: /^Use this: generalized-α, spectral radius 0.8, step 0.01 s/ }).click();
   await expect(dialog.getByRole('button', { pressed: true })).toHaveText('in use');
   await page.keyboard.press('Escape');
@@ -71,4 +72,29 @@ test('panels show the loop of a yielding storey, what each storey took out, and 
     await expect(page.getByRole('dialog', { name: title }).getByRole('row')).toHaveCount(1 + 8);
     await page.keyboard.press('Escape');
   }
+});
+
+test('a table that is wider than its place says so, until its end is in sight', async ({ page }) => {
+  await openDemo(page);
+  await page.getByRole('button', { name: 'Tables' }).click();
+  const dialog = page.getByRole('dialog', { name: 'Tables' });
+  const words = dialog.getByText('The table goes on sideways');
+  const faded = (side: '::before' | '::after') =>
+    dialog.locator('.sideways').evaluate((frame, pseudo) => getComputedStyle(frame, pseudo).opacity, side);
+  const seen: boolean[] = [];
+  await expect(dialog.locator('.table-view')).toBeVisible();
+  const names = await dialog.getByRole('navigation', { name: 'Tables' }).getByRole('button').all();
+  for (const name of names) {
+    await name.click();
+    const table = dialog.locator('.table-view');
+    const wide = await table.evaluate(({ scrollWidth, clientWidth }) => scrollWidth > clientWidth + 1);
+    await expect(words).toBeVisible({ visible: wide });
+    seen.push(wide);
+    if (!wide) continue;
+    await expect.poll(() => faded('::after')).toBe('1');
+    await table.evaluate((part) => part.scrollTo({ left: part.scrollWidth }));
+    await expect.poll(() => faded('::after')).toBe('0');
+    await expect.poll(() => faded('::before')).toBe('1');
+  }
+  expect(seen).toContain(true);
 });

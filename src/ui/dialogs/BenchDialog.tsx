@@ -108,7 +108,13 @@ export function BenchDialog({ onClose }: { readonly onClose: () => void }) {
           />
         </div>
         {bench.rows.length > 0 && (
-          <BenchTable bench={bench} modes={modes} inUse={own === null ? null : { method, parts: own }} old={old} />
+          <>
+            <BenchTable bench={bench} modes={modes} inUse={own === null ? null : { method, parts: own }} old={old} />
+            <p className="quiet small">
+              Damping added: what the scheme gives a free vibration of the mode beside the physical damping, as a ratio
+              of critical; below zero: the scheme takes less than the physical damping.
+            </p>
+          </>
         )}
       </div>
     </Dialog>

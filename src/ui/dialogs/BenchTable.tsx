@@ -10,6 +10,7 @@ import { setSession } from '../../state/session.ts';
 import { Button } from '../controls/Button.tsx';
 import { commitOpenDraft } from '../controls/field.ts';
 import { methodWords } from '../foot/analysisWords.ts';
+import { Sideways } from '../plots/Sideways.tsx';
 import { methodKey } from './benchChoice.ts';
 import { shortSeconds } from './shortSeconds.ts';
 import '../plots/table.css';
@@ -40,84 +41,86 @@ export function BenchTable({ bench: { rows, reference, motion }, modes, inUse, o
     event.preventDefault();
   };
   return (
-    // biome-ignore lint/a11y/useSemanticElements: a section would be one more landmark
-    <div
-      className={`table-view bench-table ${old ? 'old' : ''}`}
-      role="region"
-      aria-label="Schemes side by side"
-      // biome-ignore lint/a11y/noNoninteractiveTabindex: a part that scrolls must be reachable by keyboard
-      tabIndex={0}
-    >
-      <table>
-        <caption>{caption}</caption>
-        <thead>
-          <tr>
-            <th scope="col" rowSpan={2} className="words">
-              Scheme
-            </th>
-            <th scope="col" rowSpan={2}>
-              Step, s
-            </th>
-            <th scope="colgroup" colSpan={2} className="over">
-              Error of the peaks, %
-            </th>
-            <th scope="colgroup" colSpan={2} className="over">
-              Cost
-            </th>
-            <th scope="colgroup" colSpan={2} className="over">
-              First mode{periodWords(modes?.[0])}, %
-            </th>
-            <th scope="colgroup" colSpan={2} className="over">
-              Highest mode{periodWords(modes?.at(-1))}, %
-            </th>
-            <td rowSpan={2} className="head-space" />
-          </tr>
-          <tr>
-            <th scope="col">Drift</th>
-            <th scope="col">Floor accel.</th>
-            <th scope="col">Solves</th>
-            <th scope="col">Time, ms</th>
-            <th scope="col">Damping added</th>
-            <th scope="col">Period longer</th>
-            <th scope="col">Damping added</th>
-            <th scope="col">Period longer</th>
-          </tr>
-        </thead>
-        <tbody ref={body} onKeyDown={onKeyDown}>
-          {schemes.map((group) =>
-            group.map((row, i) => (
-              <tr key={row.step} className={isInUse(row, inUse) ? 'in-use' : i === 0 ? 'first' : ''}>
-                {i === 0 && (
-                  <th scope="rowgroup" rowSpan={group.length} className="words scheme">
-                    {methodWords(row.method)}
-                    <span className="quiet small">{nameWords(row)}</span>
-                  </th>
-                )}
-                <th scope="row" className="step-size">
-                  {shortSeconds(row.step)}
-                </th>
-                <Result row={row} />
-                <Modal accuracy={row.first} />
-                <Modal accuracy={row.highest} />
-                <td className="use">
-                  {(row.state === 'done' || isInUse(row, inUse)) && (
-                    <Button
-                      kind="text"
-                      size="low"
-                      aria-label={`Use this: ${methodWords(row.method)}, step ${shortSeconds(row.step)} s`}
-                      aria-pressed={isInUse(row, inUse)}
-                      onClick={() => !isInUse(row, inUse) && takeRow(row)}
-                    >
-                      {isInUse(row, inUse) ? 'in use' : 'Use this'}
-                    </Button>
+    <Sideways>
+      {/* biome-ignore lint/a11y/useSemanticElements: a section would be one more landmark */}
+      <div
+        className={`table-view bench-table ${old ? 'old' : ''}`}
+        role="region"
+        aria-label="Schemes side by side"
+        // biome-ignore lint/a11y/noNoninteractiveTabindex: a part that scrolls must be reachable by keyboard
+        tabIndex={0}
+      >
+        <table>
+          <caption>{caption}</caption>
+          <thead>
+            <tr>
+              <th scope="col" rowSpan={2} className="words">
+                Scheme
+              </th>
+              <th scope="col" rowSpan={2}>
+                Step, s
+              </th>
+              <th scope="colgroup" colSpan={2} className="over">
+                Error of the peaks, %
+              </th>
+              <th scope="colgroup" colSpan={2} className="over">
+                Cost
+              </th>
+              <th scope="colgroup" colSpan={2} className="over">
+                First mode{periodWords(modes?.[0])}, %
+              </th>
+              <th scope="colgroup" colSpan={2} className="over">
+                Highest mode{periodWords(modes?.at(-1))}, %
+              </th>
+              <td rowSpan={2} className="head-space" />
+            </tr>
+            <tr>
+              <th scope="col">Drift</th>
+              <th scope="col">Floor accel.</th>
+              <th scope="col">Solves</th>
+              <th scope="col">Time, ms</th>
+              <th scope="col">Damping added</th>
+              <th scope="col">Period longer</th>
+              <th scope="col">Damping added</th>
+              <th scope="col">Period longer</th>
+            </tr>
+          </thead>
+          <tbody ref={body} onKeyDown={onKeyDown}>
+            {schemes.map((group) =>
+              group.map((row, i) => (
+                <tr key={row.step} className={isInUse(row, inUse) ? 'in-use' : i === 0 ? 'first' : ''}>
+                  {i === 0 && (
+                    <th scope="rowgroup" rowSpan={group.length} className="words scheme">
+                      {methodWords(row.method)}
+                      <span className="quiet small">{nameWords(row)}</span>
+                    </th>
                   )}
-                </td>
-              </tr>
-            )),
-          )}
-        </tbody>
-      </table>
-    </div>
+                  <th scope="row" className="step-size">
+                    {shortSeconds(row.step)}
+                  </th>
+                  <Result row={row} />
+                  <Modal accuracy={row.first} />
+                  <Modal accuracy={row.highest} />
+                  <td className="use">
+                    {(row.state === 'done' || isInUse(row, inUse)) && (
+                      <Button
+                        kind="text"
+                        size="low"
+                        aria-label={`Use this: ${methodWords(row.method)}, step ${shortSeconds(row.step)} s`}
+                        aria-pressed={isInUse(row, inUse)}
+                        onClick={() => !isInUse(row, inUse) && takeRow(row)}
+                      >
+                        {isInUse(row, inUse) ? 'in use' : 'Use this'}
+                      </Button>
+                    )}
+                  </td>
+                </tr>
+              )),
+            )}
+          </tbody>
+        </table>
+      </div>
+    </Sideways>
   );
 }
 

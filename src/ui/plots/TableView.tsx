@@ -2,6 +2,7 @@ import { useState } from 'react';
 import { headOf } from '../../core/report/head.ts';
 import type { Column, Table } from '../../core/report/table.ts';
 import { printQuantity, type System } from '../../core/units/quantities.ts';
+import { Sideways } from './Sideways.tsx';
 import './table.css';
 
 export interface TableViewProps {
@@ -22,37 +23,39 @@ export function TableView({ table, system, height }: TableViewProps) {
   const from = Math.max(0, Math.min(rows - 1, Math.floor(top / ROW)) - SPARE);
   const to = Math.min(rows, Math.ceil((top + height) / ROW) + SPARE);
   return (
-    // biome-ignore lint/a11y/useSemanticElements: a section would be one more landmark
-    <div
-      className="table-view"
-      style={{ maxHeight: height }}
-      role="region"
-      aria-label={table.title}
-      // biome-ignore lint/a11y/noNoninteractiveTabindex: a part that scrolls must be reachable by keyboard
-      tabIndex={0}
-      onScroll={(event) => setTop(event.currentTarget.scrollTop)}
-    >
-      <table aria-rowcount={rows + 1}>
-        <thead>
-          <tr aria-rowindex={1}>
-            {table.columns.map((column) => (
-              <Head key={column.key} column={column} system={system} />
-            ))}
-          </tr>
-        </thead>
-        <tbody>
-          <Spacer rows={from} columns={table.columns.length} />
-          {Array.from({ length: to - from }, (_, i) => from + i).map((row) => (
-            <tr key={row} aria-rowindex={row + 2}>
+    <Sideways>
+      {/* biome-ignore lint/a11y/useSemanticElements: a section would be one more landmark */}
+      <div
+        className="table-view"
+        style={{ maxHeight: height }}
+        role="region"
+        aria-label={table.title}
+        // biome-ignore lint/a11y/noNoninteractiveTabindex: a part that scrolls must be reachable by keyboard
+        tabIndex={0}
+        onScroll={(event) => setTop(event.currentTarget.scrollTop)}
+      >
+        <table aria-rowcount={rows + 1}>
+          <thead>
+            <tr aria-rowindex={1}>
               {table.columns.map((column) => (
-                <Cell key={column.key} column={column} row={row} system={system} />
+                <Head key={column.key} column={column} system={system} />
               ))}
             </tr>
-          ))}
-          <Spacer rows={rows - to} columns={table.columns.length} />
-        </tbody>
-      </table>
-    </div>
+          </thead>
+          <tbody>
+            <Spacer rows={from} columns={table.columns.length} />
+            {Array.from({ length: to - from }, (_, i) => from + i).map((row) => (
+              <tr key={row} aria-rowindex={row + 2}>
+                {table.columns.map((column) => (
+                  <Cell key={column.key} column={column} row={row} system={system} />
+                ))}
+              </tr>
+            ))}
+            <Spacer rows={rows - to} columns={table.columns.length} />
+          </tbody>
+        </table>
+      </div>
+    </Sideways>
   );
 }
 
