@@ -88,6 +88,9 @@ export const TimePanel = memo(function TimePanel(props: TimePanelProps) {
   );
 });
 
+/** A layer below zero by so much of the largest input is in sight: about a pixel. */
+const IN_SIGHT = 0.01;
+
 function HistoryWords({ content, system }: { readonly content: PanelContent; readonly system: System }) {
   const now = useRef<HTMLParagraphElement>(null);
   const unit = unitOfContent(content, system);
@@ -126,17 +129,18 @@ function EnergyWords({
   readonly plot: Parameters<typeof timePlot>[0];
   readonly imbalance: number;
 }) {
+  const below = plot.content.strainBelowZero > IN_SIGHT;
   const named = namedLayers(plot);
   const beside = plot.content.stack.filter(({ part }) => !named.has(part));
   return (
     <>
-      {plot.content.strainBelowZero ? (
+      {below ? (
         <p className="quiet small">strain below zero: P-Delta,</p>
       ) : (
         <p className="quiet small">input against the sum,</p>
       )}
       <p className="quiet small">
-        {plot.content.strainBelowZero && 'sums '}apart by {apartWords(imbalance, plot.system)}
+        {below && 'sums '}apart by {apartWords(imbalance, plot.system)}
       </p>
       {beside.length > 0 && (
         <p className="layer-key">
@@ -188,7 +192,7 @@ function historyTable(content: PanelContent, motion: string): Table {
       own,
       ...stack.map(({ part, sum }, i) => ({
         key: part,
-        name: `${capital(ENERGY_NAMES[part])}${part === 'strain' && content.strainBelowZero ? ' (below zero: P-Delta)' : ''}`,
+        name: `${capital(ENERGY_NAMES[part])}${part === 'strain' && content.strainBelowZero > 0 ? ' (below zero: P-Delta)' : ''}`,
         quantity,
         decimals,
         values: Array.from(sum, (value, j) => value - below(i, j)),
@@ -205,5 +209,5 @@ function sentence(content: PanelContent | null, title: string, system: System): 
   if (content === null) return `${title}: no run yet`;
   const unit = unitOfContent(content, system);
   const place = content.place === null ? '' : `, ${content.place}`;
-  return `${title}${place}, over time: peak ${unit.print(content.peak.value, unit.decimals)} at ${printQuantity(content.peak.time, 'time', system)} s${content.strainBelowZero ? '; strain below zero: P-Delta' : ''}`;
+  return `${title}${place}, over time: peak ${unit.print(content.peak.value, unit.decimals)} at ${printQuantity(content.peak.time, 'time', system)} s${content.strainBelowZero > IN_SIGHT ? '; strain below zero: P-Delta' : ''}`;
 }

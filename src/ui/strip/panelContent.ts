@@ -29,10 +29,10 @@ export interface PanelContent {
   /** Energies stacked from below: each entry is the sum up to and with its part. Only for `energy`. */
   readonly stack: readonly { readonly part: EnergyPart; readonly sum: Float64Array }[];
   /**
-   * The strain energy goes below zero: with P-Delta it holds the potential that gravity loses as a storey leans. What is
-   * stacked then stands above the input.
+   * How far the strain energy goes below zero, over the largest input [-]: with P-Delta it holds the potential that gravity
+   * loses as a storey leans. What is stacked then stands above the input.
    */
-  readonly strainBelowZero: boolean;
+  readonly strainBelowZero: number;
 }
 
 export const ENERGY_PARTS = ['hysteretic', 'damping', 'dampers', 'strain', 'kinetic'] as const;
@@ -68,7 +68,7 @@ export function contentOf(
     interval,
     peak,
     stack: [],
-    strainBelowZero: false,
+    strainBelowZero: 0,
   });
   const found = (values: Float64Array, value: number) => ({ value, time: interval * largestAt(values) });
   const here = `storey ${storey + 1}`;
@@ -106,14 +106,19 @@ export function contentOf(
       return {
         ...of('energy', null, energy.input, peak),
         stack: stacked(energy),
-        strainBelowZero: energy.strain.some((strain) => strain < -BELOW_ZERO * Math.abs(peak.value)),
+        strainBelowZero: belowZero(energy.strain, Math.abs(peak.value)),
       };
     }
   }
 }
 
-/** A strain energy is below zero from so much of the largest input: less is rounding. */
-const BELOW_ZERO = 1e-6;
+/** A strain energy below zero by so much of the largest input is rounding. */
+const ROUNDING = 1e-6;
+
+function belowZero(strain: Float64Array, input: number): number {
+  const lowest = strain.reduce((least, value) => Math.min(least, value), 0);
+  return input > 0 && -lowest > ROUNDING * input ? -lowest / input : 0;
+}
 
 /** Storey drift over height [-], entry by entry. */
 function driftRatio(own: Float64Array, storey: number, displacement: Float64Array, height: number): Float64Array {
