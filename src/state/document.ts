@@ -3,7 +3,7 @@ import { createStore } from 'zustand/vanilla';
 import { emptyProject } from '../document/empty.ts';
 import { writeAt } from '../document/fields.ts';
 import type { Project, Typed } from '../document/project.ts';
-import { setSession } from './session.ts';
+import { sessionStore, setSession } from './session.ts';
 import { type Counts, type History, NO_HISTORY, record, stepBack, stepForward, type Travelled } from './undo.ts';
 
 export type { Counts } from './undo.ts';
@@ -78,8 +78,9 @@ export function redo(): void {
 
 /** Another project takes the place of this one (open, new, demo): undoable as one step. What was chosen in the old one is let go. */
 export function replace(label: string, project: Project): void {
+  const opened = sessionStore.getState().opened + 1;
+  setSession({ opened, time: 0, range: null, playing: false, storey: null, motion: null });
   commit(label, () => project, { kind: 'step' }, null);
-  setSession({ time: 0, range: null, playing: false, storey: null, motion: null });
 }
 
 /** The kept document of the last session, or the demo: no undo step, nothing to take back. */

@@ -61,6 +61,7 @@ export function follow(
   const behind = behindTheAnswer({ jobs, runs, search, lending, roundOver });
   const failures = new Map<string, Fault>();
   let project: Project | null = null;
+  let openedLast = sessionStore.getState().opened;
   let question: Question | null = null;
   let swaying: Swaying | null = null;
   /** Run with histories, and the key of what it was computed from. */
@@ -76,6 +77,10 @@ export function follow(
     if (now === project) return;
     project = now;
     const result = caseOf(now);
+    const { opened } = sessionStore.getState();
+    // What was computed of another building is never shown under this one, however stale.
+    if (opened !== openedLast) set({ answers: null, chosen: null, stepErrors: null });
+    openedLast = opened;
     timers.evidence.clear();
     timers.pause.clear();
     failures.clear();

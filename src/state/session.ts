@@ -20,6 +20,8 @@ export interface SessionState {
   /** Frame and Response are the two ends of `sheet`. */
   readonly screen: 'sheet' | 'motions';
   readonly selection: Selection | null;
+  /** How many projects were opened or begun in this session: with each, all that was computed before is of another building. */
+  readonly opened: number;
   /** Storey whose histories are shown; null: the governing one. */
   readonly storey: number | null;
   /** Name of the chosen motion; null: the governing one of the governing storey, else the first. */
@@ -45,6 +47,7 @@ export const sessionStore = createStore<SessionState>(() => ({
   theme: 'system',
   screen: 'sheet',
   selection: null,
+  opened: 0,
   storey: null,
   motion: null,
   time: 0,

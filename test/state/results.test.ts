@@ -3,7 +3,7 @@ import { runCase, stepErrorOf } from '../../src/core/doors.ts';
 import { caseOf } from '../../src/document/case.ts';
 import type { Project } from '../../src/document/project.ts';
 import { type ResultsState, resultsStore } from '../../src/state/answers.ts';
-import { documentStore, edit, effectiveProject, restore, setDraft, undo } from '../../src/state/document.ts';
+import { documentStore, edit, effectiveProject, replace, restore, setDraft, undo } from '../../src/state/document.ts';
 import { type Follower, follow, type Pace } from '../../src/state/follow.ts';
 import { questionOf } from '../../src/state/question.ts';
 import { chosenMotion, chosenStorey } from '../../src/state/selectors.ts';
@@ -46,6 +46,18 @@ function belongs(): boolean {
   const result = caseOf(effectiveProject(documentStore.getState()));
   return result.ok && now().answers?.key === questionOf(result.value).key;
 }
+
+describe('another project', () => {
+  it('is never shown beside the answers of the one before it, not even as out of date', async () => {
+    begin();
+    await at('current');
+    replace('open other', withStorey(projectOf(2, 1).project, 0, { stiffness: null }));
+    expect(now()).toMatchObject({ status: 'stale', answers: null, chosen: null, stepErrors: null });
+    undo();
+    await at('current');
+    expect(belongs()).toBe(true);
+  });
+});
 
 describe('answers', () => {
   it('are those of the door, with the histories of the governing motion', async () => {

@@ -139,9 +139,7 @@ function EnergyWords({
       ) : (
         <p className="quiet small">input against the sum,</p>
       )}
-      <p className="quiet small">
-        {below && 'sums '}apart by {apartWords(imbalance, plot.system)}
-      </p>
+      <p className="quiet small">apart by {apartWords(imbalance, plot.system)}</p>
       {beside.length > 0 && (
         <p className="layer-key">
           {[...beside].reverse().map(({ part }) => (
