@@ -146,9 +146,11 @@ async function timeEvidence(page: Page, storey: number): Promise<void> {
     .click();
   const waits: number[] = [];
   for (const figure of '6123456789') {
-    await page.evaluate(() => window.bench.waits.splice(0));
     await page.keyboard.press('Escape');
-    await page.keyboard.type(`5${figure}`);
+    await page.keyboard.press('5');
+    await page.waitForTimeout(1500);
+    await page.evaluate(() => window.bench.waits.splice(0));
+    await page.keyboard.press(figure);
     await page.waitForFunction(() => window.bench.waits.length > 0);
     const started = Date.now();
     await page.getByText(/^step error/).waitFor();
