@@ -1,4 +1,4 @@
-import { setSession } from '../../state/session.ts';
+import { type AnalysisPart, setSession } from '../../state/session.ts';
 import { focusSheet } from '../controls/focusSheet.ts';
 import { cellOf } from './columns.ts';
 import { choose } from './commands.ts';
@@ -19,6 +19,18 @@ export function goTo(where: string, openLaw: (storey: number) => void): void {
     return;
   }
   if (where.startsWith('motions[')) setSession({ screen: 'motions' });
-  else if (/^(analysis|limits|frame\.(damping|pDelta))/.test(where)) setSession({ dialog: 'analysis' });
-  else focusSheet();
+  else {
+    const part = partOf(where);
+    if (part === null) focusSheet();
+    else setSession({ dialog: 'analysis', analysisPart: part });
+  }
+}
+
+/** The section of the analysis dialog that a path stands in; null: none. */
+export function partOf(where: string): AnalysisPart | null {
+  if (where.startsWith('analysis.method')) return 'Method';
+  if (where.startsWith('analysis')) return 'Step';
+  if (where.startsWith('frame.damping')) return 'Damping';
+  if (where.startsWith('frame.pDelta')) return 'P-Delta';
+  return where.startsWith('limits') ? 'Limit' : null;
 }
