@@ -1,9 +1,9 @@
 import { useMemo, useRef } from 'react';
-import { useResults } from '../../state/results.ts';
 import { dampingPlot } from '../plots/dampingPlot.ts';
 import { dampingSentence } from '../plots/dampingWords.ts';
 import { Plot } from '../plots/Plot.tsx';
 import { useTokens } from '../plots/tokens.ts';
+import { useDamping } from '../plots/useDamping.ts';
 import { useSize } from '../plots/useSize.ts';
 
 /** Damping ratio against period, small: how the ratio runs between the modes of this frame. */
@@ -11,14 +11,7 @@ export function DampingPicture() {
   const place = useRef<HTMLDivElement>(null);
   const size = useSize(place);
   const tokens = useTokens();
-  const from = useResults((state) => state.answers?.case ?? null);
-  const picture = useMemo(
-    () =>
-      from === null
-        ? null
-        : { damping: from.frame.damping, modes: from.prepared.modes, ratios: from.prepared.dampingRatios },
-    [from],
-  );
+  const picture = useDamping();
   const spec = useMemo(
     () => (picture === null || size === null ? null : () => dampingPlot(picture, size, tokens)),
     [picture, size, tokens],

@@ -1,12 +1,12 @@
 import { useMemo } from 'react';
 import type { Table } from '../../core/report/table.ts';
 import type { System } from '../../core/units/quantities.ts';
-import { useResults } from '../../state/results.ts';
 import { type DampingPicture, dampingPlot } from './dampingPlot.ts';
 import { dampingSentence } from './dampingWords.ts';
 import { Plot } from './Plot.tsx';
 import { KeyLine, plotSize, SquareFrame, type SquareLayout } from './SquareFrame.tsx';
 import type { Tokens } from './tokens.ts';
+import { useDamping } from './useDamping.ts';
 
 export interface DampingByPeriodProps {
   readonly layout: SquareLayout;
@@ -17,15 +17,8 @@ export interface DampingByPeriodProps {
 
 /** Which ratio of critical damping each mode of this frame comes out with, and how it runs between them. */
 export function DampingByPeriod({ layout, tokens, old }: DampingByPeriodProps) {
-  const from = useResults((state) => state.answers?.case ?? null);
   const { width, height } = plotSize(layout);
-  const picture = useMemo(
-    () =>
-      from === null
-        ? null
-        : { damping: from.frame.damping, modes: from.prepared.modes, ratios: from.prepared.dampingRatios },
-    [from],
-  );
+  const picture = useDamping();
   const spec = useMemo(
     () => (picture === null ? null : () => dampingPlot(picture, { width, height }, tokens)),
     [picture, width, height, tokens],
